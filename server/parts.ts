@@ -1,0 +1,10 @@
+import type { Logger } from 'pino';
+import type { Database } from '#server/models/database.ts';
+
+/** What every route is given; nothing in `server/` reads a clock or opens a database of its own. */
+export type Parts = {
+  database: Database;
+  /** the server's time in milliseconds since 1970 */
+  now: () => number;
+  log: Logger;
+};

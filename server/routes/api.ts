@@ -1,0 +1,25 @@
+import { Router } from 'express';
+import { notFound } from '#server/middleware/problem.ts';
+import { openApiDocument } from '#server/openapi/document.ts';
+import type { Operation } from '#server/openapi/operation.ts';
+import type { Parts } from '#server/parts.ts';
+import { healthOperations, healthRoutes } from './health.ts';
+
+/** Every route module of the API: its routes (paths below /api) and what it declares about them. */
+const modules: { routes: (parts: Parts) => Router; operations: Operation[] }[] = [
+  { routes: healthRoutes, operations: healthOperations },
+];
+
+export const apiOperations: Operation[] = modules.flatMap((module) => module.operations);
+
+/** The API, to be mounted at /api; an unknown path below it is a problem, never the app's page. */
+export function apiRoutes(parts: Parts): Router {
+  const router = Router();
+  for (const { routes } of modules) router.use(routes(parts));
+  const document = openApiDocument(apiOperations);
+  router.get('/openapi.json', (_request, response) => {
+    response.set('Cache-Control', 'no-cache').json(document);
+  });
+  router.use(notFound);
+  return router;
+}
