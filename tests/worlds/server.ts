@@ -1,0 +1,37 @@
+import type { Express } from 'express';
+import { pino } from 'pino';
+import { createApp } from '#server/app.ts';
+import { listen } from '#server/main.ts';
+import type { Database } from '#server/models/database.ts';
+import { makeClock } from './clock.ts';
+import type { Clock } from './clock.ts';
+import { createTestDatabase } from './postgres.ts';
+
+type ServerOptions = {
+  /** by default the server has a clock of its own that stands still, `clock` in what is returned */
+  clock?: Clock;
+  /** the built front end, for tests with a browser */
+  distDir?: string;
+};
+
+export type TestServer = {
+  url: string;
+  app: Express;
+  database: Database;
+  databaseUrl: string;
+  clock: Clock;
+  close: () => Promise<void>;
+};
+
+/** The real server on a free port, over a migrated database of its own. */
+export async function startServer({ clock = makeClock(), distDir }: ServerOptions = {}): Promise<TestServer> {
+  const { database, url: databaseUrl, drop } = await createTestDatabase();
+  const log = pino({ level: process.env.RIBBAND_TEST_LOG ?? 'silent' });
+  const app = createApp({ database, now: clock.now, log, ...(distDir ? { distDir } : {}) });
+  const { url, close: closeServer } = await listen(app, 0, '127.0.0.1');
+  const close = async () => {
+    await closeServer();
+    await drop();
+  };
+  return { url, app, database, databaseUrl, clock, close };
+}
