@@ -4,7 +4,7 @@ import path from 'node:path';
 import { setTimeout as delay } from 'node:timers/promises';
 import pg from 'pg';
 import { run } from './command.ts';
-import type { Finished } from './command.ts';
+import type { CommandOptions, Finished } from './command.ts';
 import { LaunchFailure } from './failure.ts';
 import { isRoot } from './postgres-programs.ts';
 import type { Programs } from './postgres-programs.ts';
@@ -29,11 +29,11 @@ export function clusterUrl({ port, password }: Cluster, database: string): strin
 }
 
 /** Runs a program as the user that PostgreSQL runs as. */
-export function runAsPostgres(program: string, args: string[]): Promise<Finished> {
-  const env = { PATH: process.env.PATH, LANG: 'C.UTF-8' };
-  if (!isRoot()) return run(program, args, { env });
+export function runAsPostgres(program: string, args: string[], how: CommandOptions = {}): Promise<Finished> {
+  const options = { ...how, env: { PATH: process.env.PATH, LANG: 'C.UTF-8' } };
+  if (!isRoot()) return run(program, args, options);
   const user = ['--reuid=postgres', '--regid=postgres', '--init-groups', '--', program];
-  return run('setpriv', [...user, ...args], { env });
+  return run('setpriv', [...user, ...args], options);
 }
 
 /** Makes the cluster's files. They appear under their name only when whole, so a start that was cut short can begin again. */
@@ -78,7 +78,9 @@ export async function bringUp(cluster: Cluster): Promise<Cluster> {
 /** Stops the cluster if it runs; sessions that are open are cut, nothing committed is lost. */
 export async function bringDown({ programs, directory }: Pick<Cluster, 'programs' | 'directory'>): Promise<void> {
   if ((await runningPostmaster(directory)) === null) return;
-  await runAsPostgres(path.join(programs.bin, 'pg_ctl'), ['-D', directory, '-w', '-t', '60', '-m', 'fast', 'stop']);
+  const how = ['-D', directory, '-w', '-t', '60', '-m', 'fast', 'stop'];
+  const { code, output } = await runAsPostgres(path.join(programs.bin, 'pg_ctl'), how, { isLeftToFinish: true, isPartOfStop: true });
+  if (code !== 0) throw new LaunchFailure(`PostgreSQL in ${directory} does not stop:\n${output}`);
 }
 
 async function start(cluster: Cluster): Promise<void> {
@@ -88,8 +90,8 @@ async function start(cluster: Cluster): Promise<void> {
   const all = { listen_addresses: '127.0.0.1', port: String(port), unix_socket_directories: "''", ...settings };
   const options = Object.entries(all).map(([name, value]) => `-c ${name}=${value}`);
   const log = path.join(directory, 'server.log');
-  const how = ['-D', directory, '-w', '-t', '60', '-l', log, '-o', options.join(' '), 'start'];
-  const { code, output } = await runAsPostgres(path.join(programs.bin, 'pg_ctl'), how);
+  const how = ['-D', directory, '-w', '-t', '30', '-l', log, '-o', options.join(' '), 'start'];
+  const { code, output } = await runAsPostgres(path.join(programs.bin, 'pg_ctl'), how, { isLeftToFinish: true });
   // a long recovery outlasts the wait above; then it is there, only not ready
   if (code !== 0 && (await runningPostmaster(directory)) === null)
     throw new LaunchFailure(`PostgreSQL does not start in ${directory}:\n${output}\n${await logTail(cluster)}`);

@@ -1,0 +1,45 @@
+import path from 'node:path';
+import { fileURLToPath } from 'node:url';
+import { pino } from 'pino';
+import { createApp } from '#server/app.ts';
+import { listen } from '#server/main.ts';
+import { migrate } from '#server/migrations/migrate.ts';
+import { openDatabase } from '#server/models/database.ts';
+import { claimDataFolder } from './data-folder.ts';
+import { readEnvironment } from './environment.ts';
+import { LaunchFailure } from './failure.ts';
+import { ensureFrontEnd } from './front-end.ts';
+import { ownPostgres } from './postgres.ts';
+import { orderlyStop } from './stopping.ts';
+import type { Stopping } from './stopping.ts';
+
+const projectDir = path.resolve(fileURLToPath(import.meta.url), '../../..');
+
+const stopping = orderlyStop();
+try {
+  await start(stopping);
+} catch (error) {
+  if (!stopping.isUnderWay()) console.error(error instanceof LaunchFailure ? error.message : error);
+  await stopping.stop(1);
+}
+
+async function start(stopping: Stopping): Promise<void> {
+  const environment = readEnvironment(process.env);
+  await claimDataFolder(environment.dataDir);
+  const [databaseUrl, distDir] = await Promise.all([
+    environment.databaseUrl ?? ownPostgres(environment.dataDir, stopping.before),
+    ensureFrontEnd(projectDir),
+  ]);
+  await migrate(databaseUrl);
+  const database = openDatabase(databaseUrl);
+  stopping.before(() => database.close());
+
+  const app = createApp({ database, now: Date.now, log: pino(), distDir });
+  const { url, close } = await listen(app, environment.port, environment.host).catch((error: NodeJS.ErrnoException) => {
+    throw error.code === 'EADDRINUSE' || error.code === 'EACCES' || error.code === 'EADDRNOTAVAIL'
+      ? new LaunchFailure(`Cannot listen on ${environment.host}:${environment.port} (${error.code}). Set PORT or HOST.`)
+      : error;
+  });
+  stopping.before(close);
+  console.log(`Ribband is ready at ${url}`);
+}
