@@ -1,5 +1,5 @@
-import plugin from 'tailwindcss/plugin'
-import { cssVariables, themeColours } from './src/tokens.ts'
+import plugin from 'tailwindcss/plugin';
+import { cssVariables, themeColours } from './src/tokens.ts';
 
 export default {
   content: [],
@@ -15,13 +15,19 @@ export default {
     plugin(({ addBase }) => {
       addBase({
         ':root': { ...cssVariables('light'), 'color-scheme': 'light' },
-        '@media (prefers-color-scheme: dark)': { ':root': { ...cssVariables('dark'), 'color-scheme': 'dark' } },
-        '@media (prefers-contrast: more)': { ':root': { ...cssVariables('sunlight'), 'color-scheme': 'light' } },
+        '@media (prefers-color-scheme: dark)': {
+          ':root': { ...cssVariables('dark'), 'color-scheme': 'dark' },
+        },
+        '@media (prefers-contrast: more)': {
+          ':root': { ...cssVariables('sunlight'), 'color-scheme': 'light' },
+        },
         ':root[data-set=light]': { ...cssVariables('light'), 'color-scheme': 'light' },
         ':root[data-set=dark]': { ...cssVariables('dark'), 'color-scheme': 'dark' },
         ':root[data-set=sunlight]': { ...cssVariables('sunlight'), 'color-scheme': 'light' },
-        '@media print': { ':root, :root[data-set]': { ...cssVariables('sunlight'), 'color-scheme': 'light' } },
-      })
+        '@media print': {
+          ':root, :root[data-set]': { ...cssVariables('sunlight'), 'color-scheme': 'light' },
+        },
+      });
     }),
   ],
-}
+};

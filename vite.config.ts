@@ -1,7 +1,7 @@
-import tailwindcss from '@tailwindcss/vite'
-import react from '@vitejs/plugin-react'
-import { defineConfig } from 'vite'
-import { VitePWA } from 'vite-plugin-pwa'
+import tailwindcss from '@tailwindcss/vite';
+import react from '@vitejs/plugin-react';
+import { defineConfig } from 'vite';
+import { VitePWA } from 'vite-plugin-pwa';
 
 export default defineConfig({
   plugins: [
@@ -13,7 +13,10 @@ export default defineConfig({
       filename: 'sw.ts',
       // src/app-update.ts registers the worker, so that a person chooses the moment of an update
       injectRegister: false,
-      injectManifest: { globPatterns: ['**/*.{js,css,html,svg,png,woff2,wasm}'], maximumFileSizeToCacheInBytes: 4 * 1024 * 1024 },
+      injectManifest: {
+        globPatterns: ['**/*.{js,css,html,svg,png,woff2,wasm}'],
+        maximumFileSizeToCacheInBytes: 4 * 1024 * 1024,
+      },
       manifest: {
         id: '/',
         name: 'Ribband',
@@ -37,4 +40,4 @@ export default defineConfig({
   // the content security policy lets no data: URL in but pictures', so nothing is inlined
   build: { outDir: 'dist', assetsInlineLimit: 0 },
   server: { host: '127.0.0.1', port: 5173, proxy: { '/api': 'http://127.0.0.1:5180' } },
-})
+});

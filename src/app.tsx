@@ -1,4 +1,4 @@
 /** The whole app. */
 export function App() {
-  return <h1>Ribband</h1>
+  return <h1>Ribband</h1>;
 }

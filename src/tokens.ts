@@ -1,6 +1,6 @@
 /** The colours of the app: one source for the Tailwind theme and for the contrast check. */
 
-export type ColourSet = 'light' | 'dark' | 'sunlight'
+export type ColourSet = 'light' | 'dark' | 'sunlight';
 
 /** What a token is for; the `on-` tokens are the ink on the ground of the same name. */
 export type Token =
@@ -19,7 +19,7 @@ export type Token =
   | 'on-redlead'
   | 'deep'
   | 'on-deep'
-  | 'line'
+  | 'line';
 
 export const TOKENS: Record<ColourSet, Record<Token, string>> = {
   light: {
@@ -76,15 +76,15 @@ export const TOKENS: Record<ColourSet, Record<Token, string>> = {
     'on-deep': '#FFFFFF',
     line: '#000000',
   },
-}
+};
 
 /** The tokens of one set as CSS custom properties (`--bilge` and so on). */
 export function cssVariables(set: ColourSet): Record<string, string> {
-  return Object.fromEntries(Object.entries(TOKENS[set]).map(([token, colour]) => [`--${token}`, colour]))
+  return Object.fromEntries(Object.entries(TOKENS[set]).map(([token, colour]) => [`--${token}`, colour]));
 }
 
 /** Each token as a Tailwind colour that follows the set in force. */
 export function themeColours(): Record<Token, string> {
-  const tokens = Object.keys(TOKENS.light) as Token[]
-  return Object.fromEntries(tokens.map((token) => [token, `var(--${token})`])) as Record<Token, string>
+  const tokens = Object.keys(TOKENS.light) as Token[];
+  return Object.fromEntries(tokens.map((token) => [token, `var(--${token})`])) as Record<Token, string>;
 }

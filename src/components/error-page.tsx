@@ -1,24 +1,24 @@
-import { Component, type ReactNode } from 'react'
+import { Component, type ReactNode } from 'react';
 
 interface ErrorBoundaryProps {
-  children: ReactNode
+  children: ReactNode;
 }
 
 /** Shows the error page in place of whatever threw below it. */
 export class ErrorBoundary extends Component<ErrorBoundaryProps, { error: Error | null }> {
-  override state = { error: null as Error | null }
+  override state = { error: null as Error | null };
 
   static getDerivedStateFromError(error: unknown) {
-    return { error: error instanceof Error ? error : new Error(String(error)) }
+    return { error: error instanceof Error ? error : new Error(String(error)) };
   }
 
   override render() {
-    return this.state.error ? <ErrorPage error={this.state.error} /> : this.props.children
+    return this.state.error ? <ErrorPage error={this.state.error} /> : this.props.children;
   }
 }
 
 interface ErrorPageProps {
-  error: Error
+  error: Error;
 }
 
 /** Says that the app made a mistake, that nothing held is lost, and what to do next. */
@@ -26,7 +26,10 @@ export function ErrorPage({ error }: ErrorPageProps) {
   return (
     <main className="mx-auto grid max-w-[640px] gap-5 p-6 text-[18px]" role="alert">
       <h1 className="text-[32px] leading-tight font-bold">This screen broke</h1>
-      <p>The mistake is ours. What you logged is kept on this device. Open the app again; if it breaks again, show these words to the foreman.</p>
+      <p>
+        The mistake is ours. What you logged is kept on this device. Open the app again; if it breaks again,
+        show these words to the foreman.
+      </p>
       <p className="border-l-[3px] border-redlead pl-4 break-words text-slate">{error.message}</p>
       <button
         type="button"
@@ -36,5 +39,5 @@ export function ErrorPage({ error }: ErrorPageProps) {
         Open the app again
       </button>
     </main>
-  )
+  );
 }

@@ -1,0 +1,56 @@
+import { Workbox } from 'workbox-window';
+
+/** 'none': this is the newest known. 'waiting': a newer one is here. 'taken-over': another tab has let the newer one in. */
+export type UpdateState = 'none' | 'waiting' | 'taken-over';
+
+/** The app's own versions on this device. It never reloads by itself: the person chooses the moment. */
+export interface AppUpdate {
+  state: () => UpdateState;
+  subscribe: (listener: () => void) => () => void;
+  /** Lets the newer version in and loads the app again with it. What is held is untouched. */
+  apply: () => void;
+}
+
+/** Registers the service worker and follows its versions; in development, or without service workers, it stays at 'none'. */
+export function followAppUpdates(): AppUpdate {
+  let state: UpdateState = 'none';
+  let isAsked = false;
+  const listeners = new Set<() => void>();
+  const worker = import.meta.env.PROD && 'serviceWorker' in navigator ? new Workbox('/sw.js') : null;
+
+  function become(next: UpdateState) {
+    state = next;
+    for (const listener of listeners) listener();
+  }
+
+  worker?.addEventListener('waiting', () => become('waiting'));
+  worker?.addEventListener('controlling', (event) => {
+    if (isAsked) window.location.reload();
+    // the older worker's files are gone: this tab still runs on what it has loaded
+    else if (event.isUpdate) become('taken-over');
+  });
+  if (worker) keepFresh(worker);
+
+  return {
+    state: () => state,
+    subscribe(listener) {
+      listeners.add(listener);
+      return () => listeners.delete(listener);
+    },
+    apply() {
+      if (state === 'taken-over' || !worker) return window.location.reload();
+      isAsked = true;
+      worker.messageSkipWaiting();
+    },
+  };
+}
+
+// an installed app can stay open for weeks, and the browser itself looks only on a navigation
+function keepFresh(worker: Workbox) {
+  // a failure to register or to look (no signal, storage refused) leaves the app working from what it has
+  const ignore = () => undefined;
+  void worker.register().catch(ignore);
+  document.addEventListener('visibilitychange', () => {
+    if (document.visibilityState === 'visible') void worker.update().catch(ignore);
+  });
+}

@@ -1,0 +1,69 @@
+import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
+
+interface NameBarProps {
+  title: string;
+  subTitle?: ReactNode;
+  /** The right end: who is here, another boat, a key. */
+  right?: ReactNode;
+}
+
+/** The boat's name bar, a varnished coaming; its title is the page's heading. */
+export function NameBar({ title, subTitle, right }: NameBarProps) {
+  return (
+    <header
+      data-bar
+      className="focus-deep flex min-h-[76px] items-center gap-3 bg-coaming px-4 py-2 pt-[calc(8px+env(safe-area-inset-top))] text-on-coaming md:px-6"
+    >
+      <div className="min-w-0 flex-1">
+        <h1 className="text-[27px] leading-[1.1] font-bold tracking-[-0.01em] break-words md:text-[32px]">
+          {title}
+        </h1>
+        {subTitle !== undefined && <p className="text-[18px] leading-snug">{subTitle}</p>}
+      </div>
+      {right !== undefined && <div className="shrink-0 text-right text-[18px] leading-snug">{right}</div>}
+    </header>
+  );
+}
+
+export type BarTone = 'held' | 'quiet' | 'warning';
+
+interface StateBarProps {
+  tone: BarTone;
+  left: ReactNode;
+  right?: ReactNode;
+  /** Where a tap leads: the list of what is held. */
+  to?: string;
+}
+
+const TONES: Record<BarTone, string> = {
+  held: 'bg-seam text-on-seam border-on-seam [--focus:var(--on-seam)]',
+  quiet: 'bg-plank text-slate border-line',
+  warning: 'bg-redlead text-on-redlead border-redlead [--focus:var(--on-redlead)]',
+};
+
+/** The state of the record in words, always in sight. */
+export function StateBar({ tone, left, right, to }: StateBarProps) {
+  const look = `flex min-h-key items-center justify-between gap-4 border-b-[3px] px-4 py-1 text-[18px] leading-tight md:px-6 ${TONES[tone]}`;
+  const words = (
+    <>
+      <span className="font-bold">{left}</span>
+      {right !== undefined && <span className="text-right">{right}</span>}
+    </>
+  );
+  if (to === undefined)
+    return (
+      <div data-bar className={look}>
+        {words}
+      </div>
+    );
+  return (
+    <Link
+      data-bar
+      to={to}
+      className={`${look} underline decoration-2 underline-offset-4 focus-visible:outline-offset-[-6px]`}
+    >
+      {words}
+    </Link>
+  );
+}

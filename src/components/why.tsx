@@ -1,0 +1,56 @@
+import { useState } from 'react';
+import { Key } from '#src/components/key.tsx';
+import { Sheet } from '#src/components/sheet.tsx';
+import { TextBox } from '#src/components/text-box.tsx';
+
+interface WhyProps {
+  isOpen: boolean;
+  onClose: () => void;
+  /** What is about to be done, for example 'Strike this entry'. */
+  title: string;
+  /** What is asked, for example 'Why is it struck?'. */
+  question: string;
+  /** The word on the key that does it. */
+  confirm: string;
+  isDanger?: boolean;
+  /** Called with the reason, trimmed and never empty. */
+  onConfirm: (reason: string) => void;
+}
+
+/** Asks for the reason before something is done that others will want to understand. */
+export function Why({ isOpen, onClose, title, question, confirm, isDanger = false, onConfirm }: WhyProps) {
+  const [reason, setReason] = useState('');
+  const [isAsked, setAsked] = useState(false);
+
+  function confirmReason() {
+    if (reason.trim() === '') return setAsked(true);
+    onConfirm(reason.trim());
+    setReason('');
+    setAsked(false);
+  }
+
+  return (
+    <Sheet
+      isOpen={isOpen}
+      onClose={onClose}
+      title={title}
+      foot={
+        <>
+          <Key kind={isDanger ? 'danger' : 'main'} onClick={confirmReason}>
+            {confirm}
+          </Key>
+          <Key kind="quiet" onClick={onClose}>
+            Leave it as it is
+          </Key>
+        </>
+      }
+    >
+      <TextBox
+        label={question}
+        value={reason}
+        onChange={setReason}
+        problem={isAsked && reason.trim() === '' ? 'Write the reason in a few words.' : undefined}
+      />
+    </Sheet>
+  );
+}
