@@ -11,7 +11,7 @@ import { apiRoutes } from './routes/api.ts';
 // zod otherwise probes for eval, which the app's content security policy reports as a violation
 z.config({ jitless: true });
 
-export type AppParts = Parts & {
+export type AppParts = Omit<Parts, 'onChanged'> & {
   /** where the built front end is; without it only the API is served */
   distDir?: string;
 };
@@ -21,7 +21,7 @@ export function createApp(parts: AppParts): Express {
   const app = express();
   app.disable('x-powered-by');
   app.use(requestLog(parts.log), ...securityHeaders, compressed);
-  app.use('/api', apiRoutes(parts));
+  app.use('/api', apiRoutes({ ...parts, onChanged: () => {} }));
   if (parts.distDir) app.use(appShell(parts.distDir));
   app.use(notFound, problemHandler);
   return app;

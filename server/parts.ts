@@ -7,4 +7,6 @@ export type Parts = {
   /** the server's time in milliseconds since 1970 */
   now: () => number;
   log: Logger;
+  /** told after a commit how far a shop's feed has come, so that its devices can be hailed */
+  onChanged: (shopId: string, seq: number) => void;
 };

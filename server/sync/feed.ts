@@ -1,0 +1,22 @@
+import type { Transaction } from 'sequelize';
+import { query } from '#server/models/query.ts';
+
+export interface Numbers {
+  first: number;
+  last: number;
+}
+
+/**
+ * Gives `count` new numbers of the shop's feed and holds the shop's row until the transaction ends, so that the order
+ * of commits is the order of the feed. Whoever changes rows of a feed calls it before touching them (with 0 where
+ * the count is not known yet), so that all take their locks in one order.
+ */
+export async function numberRows(transaction: Transaction, shopId: string, count: number): Promise<Numbers> {
+  const [shop] = await query<{ seq: number }>(
+    transaction,
+    'UPDATE shops SET seq = seq + $2 WHERE shop_id = $1 RETURNING seq',
+    [shopId, count],
+  );
+  if (!shop) throw new Error(`There is no shop ${shopId} in this transaction.`);
+  return { first: shop.seq - count + 1, last: shop.seq };
+}
