@@ -3,11 +3,21 @@ import { notFound } from '#server/middleware/problem.ts';
 import { openApiDocument } from '#server/openapi/document.ts';
 import type { Operation } from '#server/openapi/operation.ts';
 import type { Parts } from '#server/parts.ts';
+import { boatOperations, boatRoutes } from './boats.ts';
+import { deviceOperations, deviceRoutes } from './devices.ts';
+import { firstRunOperations, firstRunRoutes } from './first-run.ts';
 import { healthOperations, healthRoutes } from './health.ts';
+import { peopleOperations, peopleRoutes } from './people.ts';
+import { sessionOperations, sessionRoutes } from './session.ts';
 
 /** Every route module of the API: its routes (paths below /api) and what it declares about them. */
 const modules: { routes: (parts: Parts) => Router; operations: Operation[] }[] = [
   { routes: healthRoutes, operations: healthOperations },
+  { routes: firstRunRoutes, operations: firstRunOperations },
+  { routes: sessionRoutes, operations: sessionOperations },
+  { routes: peopleRoutes, operations: peopleOperations },
+  { routes: deviceRoutes, operations: deviceOperations },
+  { routes: boatRoutes, operations: boatOperations },
 ];
 
 export const apiOperations: Operation[] = modules.flatMap((module) => module.operations);
