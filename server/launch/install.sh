@@ -10,7 +10,6 @@ stop_installing() {
 install_packages() {
   node server/launch/installed.mjs && return
   echo 'Installing packages (once, about a minute) ...'
-  # npm's own settings from the outer npm would be read again as flags of this one
   npm ci --include=dev --no-audit --no-fund --loglevel=error &
   installer=$!
   trap stop_installing TERM INT HUP
