@@ -1,0 +1,4 @@
+/** Nothing was held; `message` says why, in words for the person. */
+export class HoldError extends Error {
+  override readonly name = 'HoldError';
+}

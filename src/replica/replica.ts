@@ -1,0 +1,39 @@
+import type { Op } from '#shared/sync/op.ts';
+import type { Session } from './session.ts';
+import type { SyncResult, SyncState } from './sync-state.ts';
+import type { View } from './view.ts';
+
+/** What to compose an op with beyond its kind and data: `rowId` and `fields` where they cannot be told from the data. */
+export interface HoldOptions {
+  rowId?: string;
+  fields?: string[];
+}
+
+/** Where a person was last; null where nothing is remembered. */
+export interface Remembered {
+  boatId: string | null;
+  stageId: string | null;
+}
+
+/** The phone's replica of the record. */
+export interface Replica {
+  readonly session: Session;
+  /** Throws while nobody is signed in. */
+  view(): View;
+  subscribe(listener: () => void): () => void;
+  /** Resolves once the op is durable. Throws a HoldError, with words, where it cannot be held. */
+  hold(kind: string, data: object, options?: HoldOptions): Promise<Op>;
+  /** A UUIDv7. */
+  newId(): string;
+  syncNow(): Promise<SyncResult>;
+  syncState(): SyncState;
+  readonly draft: {
+    read<T>(key: string): T | undefined;
+    write(key: string, value: unknown): Promise<void>;
+    clear(key: string): Promise<void>;
+  };
+  readonly remember: {
+    read(): Remembered;
+    write(remembered: Partial<Remembered>): Promise<void>;
+  };
+}
