@@ -1,5 +1,7 @@
 import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
+import { BungMark } from '#src/components/bung-mark.tsx';
+import { Icon } from '#src/components/icons.tsx';
 
 interface NameBarProps {
   title: string;
@@ -11,18 +13,17 @@ interface NameBarProps {
 /** The boat's name bar, a varnished coaming; its title is the page's heading. */
 export function NameBar({ title, subTitle, right }: NameBarProps) {
   return (
-    <header
-      data-bar
-      className="focus-deep flex min-h-[76px] items-center gap-3 bg-coaming px-4 py-2 pt-[calc(8px+env(safe-area-inset-top))] text-on-coaming md:px-6"
-    >
+    <div className="focus-deep flex min-h-[76px] items-center gap-3 bg-coaming px-4 pt-[calc(8px+env(safe-area-inset-top))] pb-3 text-on-coaming md:px-6 print:bg-transparent print:px-0 print:text-black">
       <div className="min-w-0 flex-1">
         <h1 className="text-[27px] leading-[1.1] font-bold tracking-[-0.01em] break-words md:text-[32px]">
           {title}
         </h1>
         {subTitle !== undefined && <p className="text-[18px] leading-snug">{subTitle}</p>}
       </div>
-      {right !== undefined && <div className="shrink-0 text-right text-[18px] leading-snug">{right}</div>}
-    </header>
+      {right !== undefined && (
+        <div className="shrink-0 text-right text-[18px] leading-snug print:hidden">{right}</div>
+      )}
+    </div>
   );
 }
 
@@ -37,7 +38,7 @@ interface StateBarProps {
 }
 
 const TONES: Record<BarTone, string> = {
-  held: 'bg-seam text-on-seam border-on-seam [--focus:var(--on-seam)]',
+  held: 'bg-seam text-on-seam border-on-seam [--bilge:var(--on-seam)] [--plank:var(--seam)]',
   quiet: 'bg-plank text-slate border-line',
   warning: 'bg-redlead text-on-redlead border-redlead [--focus:var(--on-redlead)]',
 };
@@ -47,7 +48,11 @@ export function StateBar({ tone, left, right, to }: StateBarProps) {
   const look = `flex min-h-key items-center justify-between gap-4 border-b-[3px] px-4 py-1 text-[18px] leading-tight md:px-6 ${TONES[tone]}`;
   const words = (
     <>
-      <span className="font-bold">{left}</span>
+      <span className="flex items-center gap-2 font-bold">
+        {tone === 'held' && <BungMark mark="held" word="" />}
+        {tone === 'warning' && <Icon name="warning" />}
+        {left}
+      </span>
       {right !== undefined && <span className="text-right">{right}</span>}
     </>
   );

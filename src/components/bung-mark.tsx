@@ -44,18 +44,19 @@ const DRAWINGS: Record<Bung, ReactNode> = {
       <path d="M8 14h12" {...GRAIN} />
     </>
   ),
-  // split along a crack, the halves apart
+  // split along a crack, one half slipped down
   loose: (
     <>
+      <circle cx="14" cy="14" r="13.500" fill="var(--plank)" />
       <path
-        d="M14.500 2.200A11 11 0 0010 24.300L14 18l-4-3.500 5-5-3-2.500z"
-        fill="var(--plank)"
+        d="M15.500 1.500A11 11 0 009.500 22.500l4-5.500-4.500-3.500 5-5z"
+        fill="none"
         {...RING}
         strokeLinejoin="round"
       />
       <path
-        d="M18.500 3.600A11 11 0 0114.500 25.800L18.500 18.500l-4-3.500 5-5.500-3-2.500z"
-        fill="var(--plank)"
+        d="M19.500 4.800A11 11 0 0114 26l4-6.500-4.500-4 5-5.200z"
+        fill="none"
         {...RING}
         strokeLinejoin="round"
       />

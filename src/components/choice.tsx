@@ -43,9 +43,11 @@ export function Choice<Value extends string>({
               checked={option.value === value}
               onChange={() => onChange(option.value)}
             />
-            {option.value === value && <Icon name="tick" size={isRow ? 20 : 24} />}
             <span>
-              <span className="block font-semibold">{option.label}</span>
+              <span className={`flex items-center gap-2 font-semibold ${isRow ? 'justify-center' : ''}`}>
+                {option.value === value && <Icon name="tick" size={20} />}
+                {option.label}
+              </span>
               {option.note !== undefined && <span className="block">{option.note}</span>}
             </span>
           </label>

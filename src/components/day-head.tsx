@@ -15,7 +15,7 @@ interface DayHeadProps {
 export function DayHead({ dayOfStay, date, note, level = 2 }: DayHeadProps) {
   const Heading = level === 2 ? 'h2' : 'h3';
   return (
-    <div className="relative pt-4 pb-[10px] after:absolute after:bottom-0 after:left-[calc(var(--rib)-10px)] after:z-10 after:h-[3px] after:w-5 after:bg-bilge">
+    <div className="relative pt-4 pb-[10px] after:absolute after:-bottom-seam after:left-[calc(var(--rib)-10px)] after:z-10 after:h-[3px] after:w-5 after:bg-bilge">
       <Heading className="flex items-end">
         <span className="w-[calc(var(--rib)-14px)] shrink-0 text-right">
           {dayOfStay !== null && (

@@ -24,7 +24,7 @@ interface ErrorPageProps {
 /** Says that the app made a mistake, that nothing held is lost, and what to do next. */
 export function ErrorPage({ error }: ErrorPageProps) {
   return (
-    <main className="mx-auto grid max-w-[640px] gap-5 p-6 text-[18px]" role="alert">
+    <main className="mx-auto grid max-w-[640px] gap-5 p-6 text-[18px]">
       <h1 className="text-[32px] leading-tight font-bold">This screen broke</h1>
       <p>
         The mistake is ours. What you logged is kept on this device. Open the app again; if it breaks again,

@@ -17,7 +17,7 @@ export function Hours({ minutes, unit = 'h' }: HoursProps) {
       {fraction !== null && (
         <>
           {/* a space is read out and copied; to the eye the fraction stands close */}
-          {whole > 0 && <span className="[word-spacing:-0.14em]"> </span>}
+          {whole > 0 && <span className="[word-spacing:-0.2em]"> </span>}
           <span className="frac">{fraction}</span>
         </>
       )}

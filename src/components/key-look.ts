@@ -1,4 +1,4 @@
-export type KeyKind = 'main' | 'plain' | 'quiet' | 'danger';
+export type KeyKind = 'main' | 'plain' | 'quiet' | 'danger' | 'onDeep';
 export type KeySize = 'plain' | 'great' | 'stacked' | 'bare';
 
 const KINDS: Record<KeyKind, string> = {
@@ -6,6 +6,8 @@ const KINDS: Record<KeyKind, string> = {
   plain: 'border-2 border-bilge bg-plank text-bilge font-semibold',
   quiet: 'border-2 border-transparent text-verdigris font-semibold underline decoration-2 underline-offset-4',
   danger: 'border-[3px] border-redlead bg-plank text-redlead font-bold',
+  // on a bar of dark ground
+  onDeep: 'border-2 border-current text-inherit font-semibold',
 };
 
 const SIZES: Record<KeySize, string> = {

@@ -14,7 +14,7 @@ interface PageProps {
 export function Page({ bars, foot, width = 'line', children }: PageProps) {
   return (
     <div className="flex min-h-dvh flex-col bg-primer text-bilge">
-      {bars}
+      {bars !== undefined && <header>{bars}</header>}
       <main className={`mx-auto w-full flex-1 ${width === 'wide' ? 'max-w-[1440px]' : 'max-w-[820px]'}`}>
         {children}
       </main>
@@ -27,19 +27,20 @@ interface SectionProps {
   title: ReactNode;
   /** Beside the title: a count, a key. */
   aside?: ReactNode;
-  level?: 2 | 3;
+  /** 2 unless told; 1 where no NameBar names the page. */
+  level?: 1 | 2 | 3;
   children: ReactNode;
 }
 
+const TITLE_SIZES = { 1: 'text-[30px]', 2: 'text-[24px]', 3: 'text-[20px]' };
+
 /** A titled part of a page. */
 export function Section({ title, aside, level = 2, children }: SectionProps) {
-  const Heading = level === 2 ? 'h2' : 'h3';
+  const Heading = `h${level}` as const;
   return (
-    <section className="pb-6">
-      <div className="flex items-center justify-between gap-4 px-4 pt-6 pb-3 md:px-6">
-        <Heading className={`leading-tight font-bold ${level === 2 ? 'text-[24px]' : 'text-[20px]'}`}>
-          {title}
-        </Heading>
+    <section className="pb-2">
+      <div className="flex flex-wrap items-center justify-between gap-x-4 gap-y-3 px-4 pt-6 pb-3 md:px-6">
+        <Heading className={`leading-tight font-bold ${TITLE_SIZES[level]}`}>{title}</Heading>
         {aside}
       </div>
       {children}
@@ -54,11 +55,11 @@ interface KeyRackProps {
 /** The keys of a crew screen, always at the foot: rows of keys, 12 px apart. */
 export function KeyRack({ children }: KeyRackProps) {
   return (
-    <div data-keys className="sticky bottom-0 z-30 border-t-[3px] border-bilge bg-primer">
+    <footer data-keys className="sticky bottom-0 z-30 border-t-[3px] border-bilge bg-primer">
       <div className="mx-auto grid max-w-[820px] gap-3 p-3 pb-[calc(12px+env(safe-area-inset-bottom))]">
         {children}
       </div>
-    </div>
+    </footer>
   );
 }
 

@@ -16,17 +16,17 @@ export function Plank({ mark, markWord, time, children, id }: PlankProps) {
   return (
     <li
       id={id}
-      className="relative min-h-key bg-plank py-3 pr-4 pl-[calc(var(--rib)+28px)] md:pr-6 md:pl-[calc(var(--rib)+36px)]"
+      className="relative min-h-key bg-plank py-[15px] pr-4 pl-[calc(var(--rib)+28px)] md:pr-6 md:pl-[calc(var(--rib)+36px)]"
     >
       {time !== undefined && (
-        <span className="absolute top-[14px] left-0 w-[calc(var(--rib)-18px)] text-right tracking-[-0.01em] whitespace-nowrap text-slate">
+        <span className="absolute top-[15px] left-0 w-[calc(var(--rib)-18px)] text-right tracking-[-0.01em] whitespace-nowrap text-slate">
           {time}
         </span>
       )}
-      <span className="absolute top-[14px] left-[calc(var(--rib)-13px)] z-20">
+      <span className="absolute top-[15px] left-[calc(var(--rib)-13px)] z-20">
         <BungMark mark={mark} word={markWord} />
       </span>
-      <div className="min-w-0 pt-[1px] break-words">{children}</div>
+      <div className="min-w-0 break-words">{children}</div>
     </li>
   );
 }
@@ -39,7 +39,7 @@ interface PlainPlankProps {
 /** A row off the line, for lists that are not dated. */
 export function PlainPlank({ children, id }: PlainPlankProps) {
   return (
-    <li id={id} className="min-h-key bg-plank px-4 py-3 break-words md:px-5">
+    <li id={id} className="min-h-key bg-plank px-4 py-[15px] break-words md:px-6">
       {children}
     </li>
   );

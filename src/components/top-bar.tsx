@@ -20,7 +20,7 @@ interface TopBarProps {
 /** The bar of the places: a row of links on a desk, one key that opens the same list on a narrow screen. */
 export function TopBar({ places, right }: TopBarProps) {
   return (
-    <header
+    <div
       data-bar
       className="focus-deep flex min-h-[60px] items-stretch gap-4 bg-deep px-4 pt-[env(safe-area-inset-top)] text-on-deep md:px-6"
     >
@@ -37,7 +37,7 @@ export function TopBar({ places, right }: TopBarProps) {
       {right !== undefined && (
         <div className="ml-auto flex items-center text-right leading-tight">{right}</div>
       )}
-    </header>
+    </div>
   );
 }
 
