@@ -12,6 +12,7 @@ import { ensureFrontEnd } from './front-end.ts';
 import { ownPostgres } from './postgres.ts';
 import { orderlyStop } from './stopping.ts';
 import type { Stopping } from './stopping.ts';
+import { waysIn } from './ways-in.ts';
 
 const projectDir = path.resolve(fileURLToPath(import.meta.url), '../../..');
 
@@ -34,6 +35,7 @@ async function start(stopping: Stopping): Promise<void> {
   const database = openDatabase(databaseUrl);
   stopping.before(() => database.close());
 
+  const ways = await waysIn(database);
   const app = createApp({ database, now: Date.now, log: pino(), distDir });
   const { url, close } = await listen(app, environment.port, environment.host).catch((error: NodeJS.ErrnoException) => {
     throw error.code === 'EADDRINUSE' || error.code === 'EACCES' || error.code === 'EADDRNOTAVAIL'
@@ -41,5 +43,5 @@ async function start(stopping: Stopping): Promise<void> {
       : error;
   });
   stopping.before(close);
-  console.log(`Ribband is ready at ${url}`);
+  console.log([`Ribband is ready at ${url}`, ...ways].join('\n'));
 }

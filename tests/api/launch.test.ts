@@ -110,3 +110,23 @@ test('an environment that cannot be read is named, not traced', async () => {
   const attempt = launch(await dataFolder(), { PORT: 'abc', RIBBAND_DEMO: 'maybe' });
   await expect(attempt).rejects.toThrow(/PORT: must be a number\n {2}RIBBAND_DEMO: must be 0 or 1/);
 });
+
+test('an empty start prints a code that makes the first shop, once; later starts print none', async () => {
+  const dataDir = await dataFolder();
+  const first = await started(dataDir);
+  const code = (await first.says(/enter the code/)).split(' ').at(-1);
+  const body = JSON.stringify({
+    code,
+    shop: { name: 'Slip Nine', timeZone: 'Europe/Oslo', currency: 'NOK', units: 'metric' },
+    person: { name: 'Ada Holm', email: 'ada@slipnine.test', password: 'larch on oak frames' },
+  });
+  const ask = () =>
+    fetch(`${first.url}/api/first-run`, { method: 'POST', headers: { 'Content-Type': 'application/json' }, body });
+  expect((await ask()).status).toBe(201);
+  expect((await ask()).status).toBe(409);
+  await stopped(first);
+
+  const second = await started(dataDir);
+  await stopped(second);
+  expect(second.lines.filter((line) => line.includes('code'))).toEqual([]);
+});

@@ -21,8 +21,10 @@ export async function makeDataFolder(): Promise<DataFolder> {
 
 export type Launched = {
   url: string;
-  /** what it printed until it was ready */
+  /** what it has printed so far */
   lines: string[];
+  /** the first line that fits, as soon as it is printed */
+  says: (pattern: RegExp) => Promise<string>;
   npmPid: number;
   serverPid: () => Promise<number>;
   postgresPid: () => Promise<number>;
@@ -35,21 +37,26 @@ export async function launch(dataDir: string, variables: Record<string, string> 
   const { PATH, HOME } = process.env;
   const env = { PATH, HOME, HOST: '127.0.0.1', PORT: String(await freePort()), RIBBAND_DATA: dataDir, ...variables };
   const npm = spawn('npm', ['start'], { cwd: projectDir, env, stdio: ['ignore', 'pipe', 'pipe'] });
-  const exited = once(npm, 'exit');
+  const exited = once(npm, 'close'); // 'exit' may come before the last lines
   const lines: string[] = [];
   npm.stderr.on('data', (part) => lines.push(String(part)));
-  const url = await new Promise<string>((resolve, reject) => {
-    createInterface(npm.stdout).on('line', (line) => {
-      lines.push(line);
-      const ready = /^Ribband is ready at (\S+)$/.exec(line);
-      if (ready) resolve(ready[1]!);
+  const output = createInterface(npm.stdout).on('line', (line) => lines.push(line));
+  const says = (pattern: RegExp) =>
+    new Promise<string>((resolve, reject) => {
+      const look = () => {
+        const found = lines.find((line) => pattern.test(line));
+        if (found !== undefined) resolve(found);
+      };
+      look();
+      output.on('line', look);
+      void exited.then(() => reject(new Error(`npm start ended:\n${lines.join('\n')}`)));
     });
-    void exited.then(() => reject(new Error(`npm start ended:\n${lines.join('\n')}`)));
-  });
+  const ready = await says(/^Ribband is ready at /);
   const pidIn = async (file: string) => Number.parseInt(await readFile(path.join(dataDir, file), 'utf8'), 10);
   return {
-    url,
+    url: ready.split(' ').at(-1)!,
     lines,
+    says,
     npmPid: npm.pid!,
     serverPid: () => pidIn('server.pid'),
     postgresPid: () => pidIn('postgres/postmaster.pid'),
