@@ -2,10 +2,12 @@ import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { type Browser, type Page, chromium } from 'playwright-core';
-import { build, preview } from 'vite';
+import { preview } from 'vite';
+import { buildSite } from '#tests/e2e/build-site.ts';
 
 const CONFIG = join(import.meta.dirname, 'vite.config.ts');
-const CHROMIUM_FLAGS = [
+export const CHROMIUM_PATH = process.env['CHROME_PATH'] ?? '/usr/bin/chromium';
+export const CHROMIUM_FLAGS = [
   '--no-sandbox',
   '--disable-quic',
   '--disable-background-networking',
@@ -40,7 +42,7 @@ export interface Gallery {
 /** Builds the gallery into a folder of its own, serves it on loopback and opens a browser on it. */
 export async function openGallery(): Promise<Gallery> {
   const outDir = await mkdtemp(join(tmpdir(), 'gallery-'));
-  await build({ configFile: CONFIG, logLevel: 'error', build: { outDir } });
+  await buildSite(outDir, CONFIG);
   const server = await preview({
     configFile: CONFIG,
     logLevel: 'error',
@@ -50,7 +52,7 @@ export async function openGallery(): Promise<Gallery> {
   const url = server.resolvedUrls?.local[0];
   if (!url) throw new Error('the gallery is not served');
   const browser = await chromium.launch({
-    executablePath: process.env['CHROME_PATH'] ?? '/usr/bin/chromium',
+    executablePath: CHROMIUM_PATH,
     args: CHROMIUM_FLAGS,
   });
   return {
