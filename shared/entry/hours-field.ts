@@ -30,7 +30,8 @@ export function writeHours(row: Row, personId: string, standing: Statement, said
   (row as Row & WithHours).hours = hours.sort((a, b) => (a.personId < b.personId ? -1 : 1));
 }
 
-/** A kind is a proposal until somebody who sets kinds has said it. */
+/** A kind is a proposal until it is what was last said by somebody who sets kinds. `said` has the latest last. */
 function isKindSettled(kind: HoursKind | null, said: Statement[]): boolean {
-  return kind !== null && said.some((statement) => statement.settles && (statement.value as HoursValue).kind === kind);
+  const settling = said.findLast((statement) => statement.settles);
+  return kind !== null && (settling?.value as HoursValue | undefined)?.kind === kind;
 }

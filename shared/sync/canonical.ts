@@ -11,5 +11,6 @@ export function canonicalJson(value: unknown): string {
 
 /** Whether two JSON values are the same, whatever the order of their keys. */
 export function isSameJson(a: unknown, b: unknown): boolean {
-  return a === b || canonicalJson(a ?? null) === canonicalJson(b ?? null);
+  if (a === b || JSON.stringify(a ?? null) === JSON.stringify(b ?? null)) return true;
+  return canonicalJson(a ?? null) === canonicalJson(b ?? null);
 }

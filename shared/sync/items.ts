@@ -44,7 +44,7 @@ export function addItem<R extends Row>(row: R, list: ItemList, item: { id: strin
 export function takeBackItems<R extends Row>(row: R, itemIds: string[], op: Op<unknown>, facts: Facts): R {
   const known = row.takeBacks ?? [];
   if (known.some((takeBack) => takeBack.opId === op.id)) return row;
-  const anybodys = facts.roles.includes('foreman');
+  const anybodys = facts.roles.includes('foreman') || facts.isAdmitted === true;
   const said = itemIds.map((itemId) => ({ itemId, personId: op.personId, at: madeAt(facts), opId: op.id, anybodys }));
   const takeBacks = [...known, ...said].sort((a, b) => byTime(a, b) || (a.itemId < b.itemId ? -1 : 1));
   return withTakenBack({ ...row, takeBacks });

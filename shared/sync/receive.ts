@@ -13,7 +13,8 @@ export interface Received {
   understood: Understood | null;
 }
 
-type Came = ReadOp & { raw: unknown };
+/** `key`: its id, or the SHA-256 of its content where it has none */
+type Came = ReadOp & { raw: unknown; key: string };
 
 /** Takes ops in as they come: tells repeats from new ones and fixes the facts of the new. */
 export class Reception {
@@ -30,8 +31,8 @@ export class Reception {
 
   /** `faulty` names, by index, the ops that the server has failed at. The same op twice is the same object twice. */
   async receiveAll(raws: unknown[], faulty: ReadonlySet<number>): Promise<Received[]> {
-    const came = raws.map((raw) => ({ raw, ...readOp(raw, this.from.device.id) }));
-    await this.learn(came.map(idOf).filter((id) => id !== null));
+    const came = raws.map((raw) => cameAs(raw, readOp(raw, this.from.device.id)));
+    await this.learn(came.map(({ key }) => key));
     const received: Received[] = [];
     for (const [index, one] of came.entries()) received.push(await this.receive(one, faulty.has(index)));
     return received;
@@ -43,15 +44,14 @@ export class Reception {
     }
   }
 
-  // what came under an id that is taken by something else, or under none, is known by its content
+  // what came under an id that is taken by something else is known by its content
   private async receive(came: Came, isFaulty: boolean): Promise<Received> {
-    const id = idOf(came);
-    const known = id === null ? undefined : this.known.get(id);
-    if (known && isSameJson(known.logged.op, came.raw)) return known;
-    if (id !== null && !known) return this.log(id, came, isFaulty ? 'server-fault' : null);
-    const key = sha256Hex(canonicalJson(came.raw));
+    const known = this.known.get(came.key);
+    if (!known) return this.log(came.key, came, this.reasonAtSight(came, isFaulty));
+    if (isSameJson(known.logged.op, came.raw)) return known;
+    const key = contentKey(came.raw);
     if (!this.known.has(key)) await this.learn([key]);
-    return this.known.get(key) ?? this.log(key, came, known ? 'id-reused' : null);
+    return this.known.get(key) ?? this.log(key, came, 'id-reused');
   }
 
   private log(key: string, came: Came, known: Reason | null): Received {
@@ -88,15 +88,25 @@ export class Reception {
     };
   }
 
+  // a revoked device's op waits for the foreman whatever it says, lest a newer server takes in what an older did not know
+  private reasonAtSight({ op }: Came, isFaulty: boolean): Reason | null {
+    if (op && this.from.device.isRevoked) return 'device-revoked';
+    return isFaulty ? 'server-fault' : null;
+  }
+
   /** Why an op may not count whatever the rows are, if so. */
   private reasonBefore(op: Op | null, understood: Understood | Reason | null): Reason | null {
     if (!op) return 'malformed';
     if (typeof understood === 'string') return understood;
-    if (this.from.device.isRevoked) return 'device-revoked';
     return this.from.people.has(op.personId) ? null : 'not-entitled';
   }
 }
 
-function idOf(came: ReadOp): string | null {
-  return came.op ? came.op.id : came.id;
+function cameAs(raw: unknown, read: ReadOp): Came {
+  const id = read.op ? read.op.id : read.id;
+  return { raw, key: id ?? contentKey(raw), ...read };
+}
+
+function contentKey(raw: unknown): string {
+  return sha256Hex(canonicalJson(raw));
 }

@@ -29,6 +29,8 @@ export interface Facts {
   receivedOn: Day | null;
   /** the roles its author held then */
   roles: Role[];
+  /** it counts because somebody entitled to let it has admitted it */
+  isAdmitted?: boolean;
 }
 
 /** One value that somebody said about one field of a row, since it was made. */
