@@ -1,5 +1,6 @@
 import type { ErrorRequestHandler, RequestHandler, Response } from 'express';
 import { z } from 'zod';
+import { isDatabaseAway } from '#server/models/database-away.ts';
 
 export type Issue = { path: string; message: string };
 
@@ -93,10 +94,6 @@ function problemFrom(error: unknown): Problem {
   const status = statusOf(error);
   if (status !== null) return new Problem(status, (error as Error).message);
   return new Problem(500, 'Something went wrong here; it has been written to the log.');
-}
-
-function isDatabaseAway(error: unknown): boolean {
-  return error instanceof Error && error.name.startsWith('SequelizeConnection');
 }
 
 // body parsers and Express itself mark what the client did wrong with a status and `expose`

@@ -9,6 +9,7 @@ import { firstRunOperations, firstRunRoutes } from './first-run.ts';
 import { healthOperations, healthRoutes } from './health.ts';
 import { peopleOperations, peopleRoutes } from './people.ts';
 import { sessionOperations, sessionRoutes } from './session.ts';
+import { syncOperations, syncRoutes } from './sync.ts';
 
 /** Every route module of the API: its routes (paths below /api) and what it declares about them. */
 const modules: { routes: (parts: Parts) => Router; operations: Operation[] }[] = [
@@ -18,6 +19,7 @@ const modules: { routes: (parts: Parts) => Router; operations: Operation[] }[] =
   { routes: peopleRoutes, operations: peopleOperations },
   { routes: deviceRoutes, operations: deviceOperations },
   { routes: boatRoutes, operations: boatOperations },
+  { routes: syncRoutes, operations: syncOperations },
 ];
 
 export const apiOperations: Operation[] = modules.flatMap((module) => module.operations);

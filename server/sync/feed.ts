@@ -20,3 +20,14 @@ export async function numberRows(transaction: Transaction, shopId: string, count
   if (!shop) throw new Error(`There is no shop ${shopId} in this transaction.`);
   return { first: shop.seq - count + 1, last: shop.seq };
 }
+
+/** Holds the shop's row until the transaction ends, as `numberRows` does; other tables may still refer to it. */
+export async function lockShop(transaction: Transaction, shopId: string): Promise<{ timeZone: string }> {
+  const [shop] = await query<{ timeZone: string }>(
+    transaction,
+    'SELECT time_zone AS "timeZone" FROM shops WHERE shop_id = $1 FOR NO KEY UPDATE',
+    [shopId],
+  );
+  if (!shop) throw new Error(`There is no shop ${shopId} in this transaction.`);
+  return shop;
+}

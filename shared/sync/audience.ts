@@ -81,6 +81,11 @@ export function seen(entity: Entity, row: object, viewer: Viewer): object | null
   }
 }
 
+/** Whether a person sees no row of an entity and never could. */
+export function seesNone(entity: Entity, viewer: Viewer): boolean {
+  return !worksHere(viewer) && (entity === 'task' || entity === 'entry' || entity === 'looseEnd');
+}
+
 /** Whether a person sees every row of an entity whole, so that rows can be passed on as they are kept. */
 export function seesWhole(entity: Entity, viewer: Viewer): boolean {
   switch (entity) {

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { heldSchema } from '../identity/device.ts';
 import { idSchema } from './ids.ts';
-import { reasonSchema } from './op.ts';
+import { isKeepableText, reasonSchema } from './op.ts';
 import { entitySchema } from './row.ts';
 import { stampSchema } from './stamp.ts';
 
@@ -16,7 +16,7 @@ export const syncRequestSchema = z.strictObject({
   ops: z.array(z.unknown()),
   limit: z.int().min(1).max(ROWS_PER_ANSWER_MAX).optional(),
   held: heldSchema.optional(),
-  appVersion: z.string().max(100).optional(),
+  appVersion: z.string().max(100).refine(isKeepableText, 'holds a character that cannot be kept').optional(),
   sentAt: z.iso.datetime().optional(),
 });
 export type SyncRequest = z.infer<typeof syncRequestSchema>;
