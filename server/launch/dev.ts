@@ -8,11 +8,14 @@ const projectDir = path.resolve(fileURLToPath(import.meta.url), '../../..');
 const node = (...args: string[]) => spawn(process.execPath, args, { cwd: projectDir, stdio: 'inherit' });
 
 const children = [
-  node('node_modules/tsx/dist/cli.mjs', 'watch', '--clear-screen=false', 'server/launch/start.ts'),
+  node('node_modules/tsx/dist/cli.mjs', 'watch', '--clear-screen=false', 'server/launch/start.ts', '--api-only'),
   node('node_modules/vite/bin/vite.js'),
 ];
 
+let isStopping = false;
 function stop(): void {
+  if (isStopping) return; // a second signal makes the watcher kill the server hard
+  isStopping = true;
   for (const child of children) child.kill('SIGTERM');
 }
 for (const signal of ['SIGTERM', 'SIGINT', 'SIGHUP'] as const) process.on(signal, stop);

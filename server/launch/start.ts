@@ -16,6 +16,9 @@ import { waysIn } from './ways-in.ts';
 
 const projectDir = path.resolve(fileURLToPath(import.meta.url), '../../..');
 
+// in development Vite serves the front end
+const isApiOnly = process.argv.includes('--api-only');
+
 const stopping = orderlyStop();
 try {
   await start(stopping);
@@ -29,14 +32,14 @@ async function start(stopping: Stopping): Promise<void> {
   await claimDataFolder(environment.dataDir);
   const [databaseUrl, distDir] = await Promise.all([
     environment.databaseUrl ?? ownPostgres(environment.dataDir, stopping.before),
-    ensureFrontEnd(projectDir),
+    isApiOnly ? undefined : ensureFrontEnd(projectDir),
   ]);
   await migrate(databaseUrl);
   const database = openDatabase(databaseUrl);
   stopping.before(() => database.close());
 
   const ways = await waysIn(database);
-  const app = createApp({ database, now: Date.now, log: pino(), distDir });
+  const app = createApp({ database, now: Date.now, log: pino(), ...(distDir ? { distDir } : {}) });
   const { url, close } = await listen(app, environment.port, environment.host).catch((error: NodeJS.ErrnoException) => {
     throw error.code === 'EADDRINUSE' || error.code === 'EACCES' || error.code === 'EADDRNOTAVAIL'
       ? new LaunchFailure(`Cannot listen on ${environment.host}:${environment.port} (${error.code}). Set PORT or HOST.`)
