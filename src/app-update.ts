@@ -24,10 +24,13 @@ export function followAppUpdates(): AppUpdate {
   }
 
   worker?.addEventListener('waiting', () => become('waiting'));
-  worker?.addEventListener('controlling', (event) => {
+  // the first worker of all takes over too, and replaces none
+  let isControlled = worker !== null && navigator.serviceWorker.controller !== null;
+  worker?.addEventListener('controlling', () => {
     if (isAsked) window.location.reload();
-    // the older worker's files are gone: this tab still runs on what it has loaded
-    else if (event.isUpdate) become('taken-over');
+    // another window let it in, and the older files are gone: this one runs on with what it has loaded
+    else if (isControlled) become('taken-over');
+    isControlled = true;
   });
   if (worker) keepFresh(worker);
 

@@ -4,6 +4,7 @@ import { ErrorPage } from '#src/components/error-page.tsx';
 import { DeskScreen } from '#tests/e2e/gallery/desk-screen.tsx';
 import { FormScreen } from '#tests/e2e/gallery/form-screen.tsx';
 import { LineScreen } from '#tests/e2e/gallery/line-screen.tsx';
+import { UpdateScreen } from '#tests/e2e/gallery/update-screen.tsx';
 import '#tests/e2e/gallery/gallery.css';
 
 const root = document.getElementById('root');
@@ -14,6 +15,7 @@ createRoot(root).render(
       <Route path="/line" element={<LineScreen />} />
       <Route path="/form" element={<FormScreen />} />
       <Route path="/desk" element={<DeskScreen />} />
+      <Route path="/update" element={<UpdateScreen />} />
       <Route path="/error" element={<ErrorPage error={new Error('no row of that id')} />} />
     </Routes>
   </HashRouter>,

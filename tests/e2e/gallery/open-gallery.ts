@@ -29,6 +29,10 @@ export interface ShowOptions {
 }
 
 export interface Gallery {
+  url: string;
+  /** Where the built files lie. */
+  outDir: string;
+  browser: Browser;
   /** One screen of the gallery in one set and size, its type loaded. */
   show: (
     screen: string,
@@ -56,6 +60,9 @@ export async function openGallery(): Promise<Gallery> {
     args: CHROMIUM_FLAGS,
   });
   return {
+    url,
+    outDir,
+    browser,
     show: (screen, set, size, options = {}) => show(browser, `${url}#/${screen}`, set, size, options),
     async close() {
       await browser.close();
