@@ -37,7 +37,12 @@ export function nearDayWords(day: Day, today: Day): string {
 export function timeWords(at: string, timeZone: string): string {
   let format = timeFormats.get(timeZone);
   if (!format) {
-    format = new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', minute: '2-digit', hourCycle: 'h23' });
+    format = new Intl.DateTimeFormat('en-GB', {
+      timeZone,
+      hour: '2-digit',
+      minute: '2-digit',
+      hourCycle: 'h23',
+    });
     timeFormats.set(timeZone, format);
   }
   return format.format(Date.parse(at));

@@ -1,0 +1,133 @@
+import type { EntryRow } from '#shared/entry/entry.ts';
+import { liveStatements, saidFields, statementsOf, STRUCK_FIELD } from '#shared/sync/fields.ts';
+import type { Statement } from '#shared/sync/row.ts';
+import { stampTime } from '#shared/sync/stamp.ts';
+import type { Bung } from '#src/components/bung-mark.tsx';
+import type { View } from '#src/replica/view.ts';
+import { fieldWords, readValue, type SaidValue } from '#src/routes/alongside/read-value.ts';
+import { momentWords } from '#src/words/day-words.ts';
+import { whoWords } from '#src/words/who.ts';
+
+/** One thing that somebody said about an entry. */
+export interface HistoryLine {
+  key: string;
+  at: string;
+  when: string;
+  who: string;
+  mark: Bung;
+  /** 'wrote it', 'changed the words' */
+  did: string;
+  /** what it is since then; null where the words of `did` say all */
+  value: SaidValue | null;
+  /** the values it took the place of */
+  before: SaidValue[];
+  why: string | null;
+}
+
+/** Everything that was said about an entry, the newest first: every earlier value, who said it, when and why. */
+export function readHistory(view: View, row: EntryRow): HistoryLine[] {
+  const heldOps = new Set(view.held.map(({ op }) => op.id));
+  const lines = [
+    madeLine(view, row),
+    ...additionLines(view, row),
+    ...takenBackLines(view, row),
+    ...statementLines(view, row),
+  ];
+  return lines
+    .map((line) =>
+      line.mark === 'sent' && heldOps.has(line.opId) ? { ...line, mark: 'held' as const } : line,
+    )
+    .map(({ opId: _opId, ...line }) => ({ ...line, when: momentWords(line.at, view.timeZone, view.today) }))
+    .sort((a, b) => (a.at < b.at ? 1 : a.at > b.at ? -1 : 0));
+}
+
+type Draft = Omit<HistoryLine, 'when'> & { opId: string };
+
+function madeLine(view: View, row: EntryRow): Draft {
+  return {
+    key: row.madeBy,
+    opId: row.madeBy,
+    at: row.writtenAt,
+    who: whoWords(view, row.makerId),
+    mark: 'sent',
+    did: 'wrote it',
+    value: saidFields(row).includes('text') ? { words: firstWords(row) } : null,
+    before: [],
+    why: null,
+  };
+}
+
+function firstWords(row: EntryRow): string {
+  return String(statementsOf(row, 'text')[0]?.value ?? row.text);
+}
+
+function additionLines(view: View, row: EntryRow): Draft[] {
+  return row.additions.map((addition) => ({
+    key: addition.id,
+    opId: addition.opId,
+    at: addition.at,
+    who: whoWords(view, addition.personId),
+    mark: addition.takenBack ? 'struck' : 'sent',
+    did: 'added',
+    value: { words: addition.text },
+    before: [],
+    why: null,
+  }));
+}
+
+function takenBackLines(view: View, row: EntryRow): Draft[] {
+  return row.additions.flatMap((addition) => {
+    if (!addition.takenBack) return [];
+    const { by, at } = addition.takenBack;
+    const opId = row.takeBacks?.find(({ itemId }) => itemId === addition.id)?.opId ?? '';
+    const did = 'took back what was added';
+    return [
+      {
+        key: `${addition.id}/back`,
+        opId,
+        at,
+        who: whoWords(view, by),
+        mark: 'sent',
+        did,
+        value: null,
+        before: [{ words: addition.text }],
+        why: null,
+      },
+    ];
+  });
+}
+
+function statementLines(view: View, row: EntryRow): Draft[] {
+  return saidFields(row).flatMap((field) => {
+    const said = statementsOf(row, field);
+    const live = liveStatements(row, field);
+    return said
+      .filter((statement) => statement.opId !== row.madeBy)
+      .map((statement) => statementLine(view, statement, said, live));
+  });
+}
+
+function statementLine(view: View, statement: Statement, said: Statement[], live: Statement[]): Draft {
+  const { field, value, opId, personId, at, over, why } = statement;
+  const isStrike = field === STRUCK_FIELD;
+  const replaced = said.filter((other) => other.opId !== opId && over.includes(other.opId));
+  const isLoose = live.length > 1 && live.includes(statement);
+  return {
+    key: `${opId}/${field}`,
+    opId,
+    at: stampTime(at),
+    who: whoWords(view, personId),
+    mark: isStrike && value !== null ? 'struck' : isLoose ? 'loose' : 'sent',
+    did: isStrike ? (value === null ? 'restored it' : 'struck it') : `changed ${didWords(view, field)}`,
+    value: isStrike ? null : readValue(view, field, value),
+    before: isStrike ? [] : replaced.map((other) => readValue(view, field, other.value)),
+    why: why ?? null,
+  };
+}
+
+function didWords(view: View, field: string): string {
+  const words = fieldWords(view, field);
+  return words.startsWith('The ') || words.startsWith('Your ') || words.startsWith('Boat ')
+    ? words.charAt(0).toLowerCase() + words.slice(1)
+    : words;
+}

@@ -1,0 +1,60 @@
+import type { SetAsideRow } from '#shared/set-aside/set-aside.ts';
+import type { View } from '#src/replica/view.ts';
+import { momentWords, spanWords } from '#src/words/day-words.ts';
+import { opWords, type OpInWords } from '#src/words/op-words.ts';
+import { REASON_WORDS } from '#src/words/reason-words.ts';
+import { whoWords } from '#src/words/who.ts';
+
+export interface HeldLine extends OpInWords {
+  id: string;
+  /** '14:05' */
+  made: string;
+  /** '3 hours' */
+  age: string;
+  /** whose it is, where it is another person's of this device */
+  whose: string | null;
+}
+
+export interface SetAsideLine extends OpInWords {
+  id: string;
+  reason: string;
+  /** what has become of it */
+  state: string;
+  isWaiting: boolean;
+}
+
+/** What this device has not sent yet, the oldest first. */
+export function readHeld(view: View, nowMs: number): HeldLine[] {
+  return view.held.map(({ op, personId, heldSince }) => ({
+    ...opWords(view, op),
+    id: op.id,
+    made: momentWords(heldSince, view.timeZone, view.today),
+    age: spanWords(Math.max(nowMs - Date.parse(heldSince), 0)),
+    whose: personId === view.me.personId ? null : whoWords(view, personId),
+  }));
+}
+
+/** What this person sent and the server set aside: what waits first, then the newest. */
+export function readSetAside(view: View): SetAsideLine[] {
+  return view
+    .all('setAside')
+    .filter((row) => row.authorId === view.me.personId)
+    .map((row) => ({ row, isWaiting: row.state === 'waiting' }))
+    .sort((a, b) => Number(b.isWaiting) - Number(a.isWaiting) || (a.row.id < b.row.id ? 1 : -1))
+    .map(({ row, isWaiting }) => ({
+      ...opWords(view, row.op),
+      id: row.id,
+      reason: REASON_WORDS[row.reason],
+      state: stateWords(view, row),
+      isWaiting,
+    }));
+}
+
+function stateWords(view: View, row: SetAsideRow): string {
+  if (row.state === 'waiting') return 'It does not count yet.';
+  if (row.state === 'since-kept') return 'It counts since then.';
+  const did = row.state === 'admitted' ? 'Admitted' : 'Dismissed';
+  const by = row.by ? ` by ${whoWords(view, row.by)}` : '';
+  const at = row.at ? ` ${momentWords(row.at, view.timeZone, view.today)}` : '';
+  return `${did}${by}${at}${row.why ? `: ${row.why}` : ''}.`;
+}

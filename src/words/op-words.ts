@@ -1,0 +1,126 @@
+import { opSchema, type Op } from '#shared/sync/op.ts';
+import type { Entity } from '#shared/sync/row.ts';
+import type { View } from '#src/replica/view.ts';
+import { hoursText } from '#shared/measure/hours.ts';
+import { dayWords } from '#src/words/day-words.ts';
+import { openingWords } from '#src/words/name-words.ts';
+import { boatWords, whereWords } from '#src/words/where.ts';
+import { whoWords } from '#src/words/who.ts';
+
+/** What an op says, for a list of ops. */
+export interface OpInWords {
+  /** 'Entry', 'Ticked a task' */
+  what: string;
+  /** the words or the figures that it carries, shortened; empty where it carries none */
+  words: string;
+  /** the boat and stage; null where it is about none */
+  where: string | null;
+  /** where its whole can be read; null where there is no page of it */
+  entryId: string | null;
+}
+
+type Data = Record<string, unknown>;
+
+const WHAT: Record<string, string> = {
+  'entry.write': 'Entry',
+  'entry.amend': 'Change of an entry',
+  'entry.addTo': 'Addition to an entry',
+  'entry.takeBack': 'An addition taken back',
+  'entry.strike': 'An entry struck',
+  'entry.restore': 'An entry restored',
+  'task.add': 'New task',
+  'task.start': 'Task started',
+  'task.stop': 'Task stopped',
+  'task.mark': 'Task ticked off',
+  'task.unmark': 'A tick taken back',
+  'task.amend': 'Change of a task',
+  'task.strike': 'A task struck',
+  'task.restore': 'A task restored',
+  'stage.add': 'New stage',
+  'stage.mark': 'Stage finished',
+  'stage.unmark': 'Stage taken up again',
+  'stage.amend': 'Change of a stage',
+  'stage.strike': 'A stage struck',
+  'stage.restore': 'A stage restored',
+  'boat.add': 'New boat',
+  'boat.amend': 'Change of a boat',
+  'boat.strike': 'A boat struck',
+  'boat.restore': 'A boat restored',
+  'setAside.admit': 'Something set aside, admitted',
+  'setAside.dismiss': 'Something set aside, dismissed',
+};
+
+/** An op in words. `raw` is whatever was kept; what cannot be read as an op is said to be so. */
+export function opWords(view: View, raw: unknown): OpInWords {
+  const parsed = opSchema.safeParse(raw);
+  if (!parsed.success)
+    return { what: 'Something that cannot be read', words: '', where: null, entryId: null };
+  const op = parsed.data;
+  return {
+    what: WHAT[op.kind] ?? `Something this version does not know (${op.kind})`,
+    words: carriedWords(view, op),
+    where: opWhere(view, op.data),
+    entryId: typeof op.data['entryId'] === 'string' ? op.data['entryId'] : null,
+  };
+}
+
+function carriedWords(view: View, op: Op): string {
+  const { data } = op;
+  const set = (data['set'] ?? {}) as Data;
+  const parts = [
+    textOf(data['text']) ||
+      textOf(set['text']) ||
+      textOf(data['title']) ||
+      textOf(data['name']) ||
+      rowTitle(view, data),
+    hoursWords(view, data['hours'] ?? set['hours']),
+    typeof set['workDate'] === 'string' ? `moved to ${dayWords(set['workDate'], view.today)}` : '',
+    typeof set['boatId'] === 'string'
+      ? `moved to ${whereWords(view, set['boatId'], set['stageId'] as string | null)}`
+      : '',
+    typeof data['why'] === 'string' && data['why'] ? `because: ${openingWords(data['why'])}` : '',
+  ];
+  return parts.filter(Boolean).join(' · ');
+}
+
+function textOf(value: unknown): string {
+  return typeof value === 'string' ? openingWords(value) : '';
+}
+
+/** What the changed row is called, where the op itself carries no words. */
+function rowTitle(view: View, data: Data): string {
+  const task = typeof data['taskId'] === 'string' && view.find('task', data['taskId']);
+  if (task) return openingWords(task.title);
+  const entry = typeof data['entryId'] === 'string' && view.find('entry', data['entryId']);
+  if (entry) return openingWords(entry.text);
+  const stage = typeof data['stageId'] === 'string' && view.find('stage', data['stageId']);
+  return stage ? stage.name : '';
+}
+
+function hoursWords(view: View, hours: unknown): string {
+  if (!Array.isArray(hours)) return '';
+  return (hours as { personId: string; minutes: number }[])
+    .map(({ personId, minutes }) => `${whoWords(view, personId)} ${hoursText(minutes)} h`)
+    .join(', ');
+}
+
+const ROWS_WITH_BOAT: [field: string, entity: Extract<Entity, 'entry' | 'task' | 'stage'>][] = [
+  ['entryId', 'entry'],
+  ['taskId', 'task'],
+  ['stageId', 'stage'],
+];
+
+function opWhere(view: View, data: Data): string | null {
+  if (typeof data['boatId'] === 'string') {
+    const stageId = data['stageId'];
+    return typeof stageId === 'string'
+      ? whereWords(view, data['boatId'], stageId)
+      : boatWords(view, data['boatId']);
+  }
+  for (const [field, entity] of ROWS_WITH_BOAT) {
+    const row = typeof data[field] === 'string' ? view.find(entity, data[field]) : undefined;
+    if (!row?.boatId) continue;
+    return whereWords(view, row.boatId, 'stageId' in row ? (row.stageId as string | null) : row.id);
+  }
+  return null;
+}
