@@ -16,12 +16,22 @@ export interface Bearer {
 /** A JWT (RFC 7519, HS256) that holds for 15 minutes from `nowMs`. */
 export function writeAccessToken(secret: string, bearer: Bearer, nowMs: number): string {
   const iat = Math.floor(nowMs / 1000);
-  const claims = { sub: bearer.personId, shop: bearer.shopId, device: bearer.deviceId, iat, exp: iat + ACCESS_TOKEN_SECONDS };
+  const claims = {
+    sub: bearer.personId,
+    shop: bearer.shopId,
+    device: bearer.deviceId,
+    iat,
+    exp: iat + ACCESS_TOKEN_SECONDS,
+  };
   return jwt.sign(claims, secret, { algorithm: 'HS256' });
 }
 
 /** Whose token it is and when it ends, or null where it is not one of ours or has ended. */
-export function readAccessToken(secret: string, token: string, nowMs: number): (Bearer & { endsAtMs: number }) | null {
+export function readAccessToken(
+  secret: string,
+  token: string,
+  nowMs: number,
+): (Bearer & { endsAtMs: number }) | null {
   const claims = claimsSchema.safeParse(verified(secret, token, nowMs));
   if (!claims.success) return null;
   const { sub, shop, device, exp } = claims.data;

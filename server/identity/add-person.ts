@@ -14,7 +14,12 @@ export interface Added {
 }
 
 /** Adds a person to the shop. Throws a 409 where the id or the e-mail is somebody else's. */
-export async function addPerson(database: Database, transaction: Transaction, shopId: string, person: PersonToAdd): Promise<Added> {
+export async function addPerson(
+  database: Database,
+  transaction: Transaction,
+  shopId: string,
+  person: PersonToAdd,
+): Promise<Added> {
   const { last: seq } = await numberRows(transaction, shopId, 1);
   const { Person } = database.models;
   const sameId = await Person.findOne({ where: { shopId, id: person.id }, transaction });
@@ -25,7 +30,12 @@ export async function addPerson(database: Database, transaction: Transaction, sh
   return { person: row, seq };
 }
 
-export async function requireFreeEmail({ models }: Database, transaction: Transaction, shopId: string, email: string): Promise<void> {
+export async function requireFreeEmail(
+  { models }: Database,
+  transaction: Transaction,
+  shopId: string,
+  email: string,
+): Promise<void> {
   const taken = await models.Person.count({ where: { shopId, email }, transaction });
   if (taken === 0) return;
   throw new Problem(409, 'Another person of this shop has that e-mail.', {
@@ -34,7 +44,8 @@ export async function requireFreeEmail({ models }: Database, transaction: Transa
 }
 
 function repeated(known: PersonRow, person: PersonToAdd): PersonRow {
-  const isSame = known.name === person.name && known.email === person.email && known.roles.join() === person.roles.join();
+  const isSame =
+    known.name === person.name && known.email === person.email && known.roles.join() === person.roles.join();
   if (isSame) return known;
   throw new Problem(409, 'A person with that id is there already, and is somebody else.', {
     issues: [{ path: 'id', message: 'in use' }],

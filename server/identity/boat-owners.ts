@@ -27,34 +27,65 @@ export async function setBoatOwners(
 
   const { BoatOwner } = database.models;
   await BoatOwner.destroy({ where: { shopId, boatId, personId: removed }, transaction });
-  await BoatOwner.bulkCreate([...new Set(added)].map((personId) => ({ shopId, boatId, personId })), { transaction });
+  await BoatOwner.bulkCreate(
+    [...new Set(added)].map((personId) => ({ shopId, boatId, personId })),
+    { transaction },
+  );
   const { first, last } = await numberRows(transaction, shopId, touched.length);
-  for (const [index, id] of touched.entries()) await otherBoats(database, transaction, shopId, id, first + index);
+  for (const [index, id] of touched.entries())
+    await otherBoats(database, transaction, shopId, id, first + index);
   return last;
 }
 
-async function requireBoat({ models }: Database, transaction: Transaction, shopId: string, id: string): Promise<void> {
+async function requireBoat(
+  { models }: Database,
+  transaction: Transaction,
+  shopId: string,
+  id: string,
+): Promise<void> {
   const found = await models.Boat.count({ where: { shopId, id }, transaction });
   if (found === 0) throw new Problem(404, 'There is no such boat in this shop.');
 }
 
-async function requireOwners({ models }: Database, transaction: Transaction, shopId: string, personIds: string[]): Promise<void> {
+async function requireOwners(
+  { models }: Database,
+  transaction: Transaction,
+  shopId: string,
+  personIds: string[],
+): Promise<void> {
   const found = await models.Person.findAll({ where: { shopId, id: personIds }, transaction });
   const owners = new Set(found.filter((person) => person.roles.includes('owner')).map((person) => person.id));
   const issues = personIds.flatMap((id, index) =>
-    owners.has(id) ? [] : [{ path: `personIds.${index}`, message: 'no person of this shop with the role owner' }],
+    owners.has(id)
+      ? []
+      : [{ path: `personIds.${index}`, message: 'no person of this shop with the role owner' }],
   );
   if (issues.length > 0) throw new Problem(400, 'Not all of these people can own a boat here.', { issues });
 }
 
-async function ownersOf({ models }: Database, transaction: Transaction, shopId: string, boatId: string): Promise<string[]> {
+async function ownersOf(
+  { models }: Database,
+  transaction: Transaction,
+  shopId: string,
+  boatId: string,
+): Promise<string[]> {
   const lines = await models.BoatOwner.findAll({ where: { shopId, boatId }, transaction });
   return lines.map((line) => line.personId);
 }
 
 // whoever gains or loses a boat begins a new feed
-async function otherBoats(database: Database, transaction: Transaction, shopId: string, id: string, seq: number): Promise<void> {
-  const person = await database.models.Person.findOne({ where: { shopId, id }, transaction, rejectOnEmpty: true });
+async function otherBoats(
+  database: Database,
+  transaction: Transaction,
+  shopId: string,
+  id: string,
+  seq: number,
+): Promise<void> {
+  const person = await database.models.Person.findOne({
+    where: { shopId, id },
+    transaction,
+    rejectOnEmpty: true,
+  });
   const row = personRow(person, await boatsOf(database, transaction, shopId, id));
   await person.update({ seq, row, feedEpoch: person.feedEpoch + 1 }, { transaction });
 }

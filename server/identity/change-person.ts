@@ -71,13 +71,24 @@ export function foremanNeeded(): Problem {
   return new Problem(403, 'Only a foreman makes, changes or unmakes a foreman.');
 }
 
-async function requireForemanLeft({ models }: Database, transaction: Transaction, before: PersonColumns, after: PersonColumns): Promise<void> {
+async function requireForemanLeft(
+  { models }: Database,
+  transaction: Transaction,
+  before: PersonColumns,
+  after: PersonColumns,
+): Promise<void> {
   if (!isForeman(before) || isForeman(after)) return;
   const others = await models.Person.count({
-    where: { shopId: before.shopId, id: { [where.ne]: before.id }, roles: { [where.contains]: ['foreman'] }, leftAt: null },
+    where: {
+      shopId: before.shopId,
+      id: { [where.ne]: before.id },
+      roles: { [where.contains]: ['foreman'] },
+      leftAt: null,
+    },
     transaction,
   });
-  if (others === 0) throw new Problem(409, `${before.name} is the shop's last foreman. Make another one first.`);
+  if (others === 0)
+    throw new Problem(409, `${before.name} is the shop's last foreman. Make another one first.`);
 }
 
 function isForeman(person: PersonColumns): boolean {

@@ -3,7 +3,10 @@ import type { DeviceRow } from '#shared/identity/device.ts';
 import type { Database } from '#server/models/database.ts';
 import type { DeviceColumns } from '#server/models/device.ts';
 
-type Shown = Pick<DeviceColumns, 'id' | 'label' | 'replaces' | 'lastHeardAt' | 'appVersion' | 'held' | 'revokedAt'>;
+type Shown = Pick<
+  DeviceColumns,
+  'id' | 'label' | 'replaces' | 'lastHeardAt' | 'appVersion' | 'held' | 'revokedAt'
+>;
 
 /** A device as it stands in the feed. */
 export function deviceRow(device: Shown, personIds: string[]): DeviceRow {
@@ -20,7 +23,12 @@ export function deviceRow(device: Shown, personIds: string[]): DeviceRow {
 }
 
 /** Who has signed in on a device. */
-export async function enrolledOn(database: Database, transaction: Transaction, shopId: string, deviceId: string): Promise<string[]> {
+export async function enrolledOn(
+  database: Database,
+  transaction: Transaction,
+  shopId: string,
+  deviceId: string,
+): Promise<string[]> {
   const enrolled = await database.models.DevicePerson.findAll({
     where: { shopId, deviceId },
     order: ['personId'],

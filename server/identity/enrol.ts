@@ -25,7 +25,16 @@ export async function enrol(
   const replaces = device.replaces ?? known?.replaces ?? null;
   await requireReplaced(database, transaction, bearer, replaces);
   const personIds = new Set(await enrolledOn(database, transaction, shopId, device.id)).add(personId);
-  const columns = { ...NEW_DEVICE, ...known?.get(), shopId, id: device.id, label: device.label, replaces, personId, seq };
+  const columns = {
+    ...NEW_DEVICE,
+    ...known?.get(),
+    shopId,
+    id: device.id,
+    label: device.label,
+    replaces,
+    personId,
+    seq,
+  };
   const row = deviceRow(columns, [...personIds].sort());
   await database.models.Device.upsert({ ...columns, row }, { transaction });
   const line = { shopId, deviceId: device.id, personId };
@@ -37,18 +46,32 @@ function findDevice({ models }: Database, transaction: Transaction, shopId: stri
   return models.Device.findOne({ where: { shopId, id }, lock: transaction.LOCK.NO_KEY_UPDATE, transaction });
 }
 
-async function isAsKnown(database: Database, transaction: Transaction, bearer: Bearer, device: SessionRequest['device']): Promise<boolean> {
+async function isAsKnown(
+  database: Database,
+  transaction: Transaction,
+  bearer: Bearer,
+  device: SessionRequest['device'],
+): Promise<boolean> {
   const { shopId, personId } = bearer;
   const { Device, DevicePerson } = database.models;
   const known = await Device.findOne({ where: { shopId, id: device.id }, transaction });
-  if (!known || known.label !== device.label || known.replaces !== (device.replaces ?? known.replaces)) return false;
-  const enrolled = await DevicePerson.count({ where: { shopId, deviceId: device.id, personId }, transaction });
+  if (!known || known.label !== device.label || known.replaces !== (device.replaces ?? known.replaces))
+    return false;
+  const enrolled = await DevicePerson.count({
+    where: { shopId, deviceId: device.id, personId },
+    transaction,
+  });
   if (enrolled === 0) return false;
   await Device.update({ personId }, { where: { shopId, id: device.id }, transaction });
   return true;
 }
 
-async function requireReplaced({ models }: Database, transaction: Transaction, bearer: Bearer, replaces: string | null): Promise<void> {
+async function requireReplaced(
+  { models }: Database,
+  transaction: Transaction,
+  bearer: Bearer,
+  replaces: string | null,
+): Promise<void> {
   if (replaces === null) return;
   const { shopId, deviceId } = bearer;
   const found = await models.Device.count({ where: { shopId, id: replaces }, transaction });

@@ -8,7 +8,12 @@ import type { RefreshToken } from './refresh-token.ts';
 export const FAMILY_IDLE_MAX_MS = 180 * 86_400_000;
 
 /** Begins a family and returns its first token. */
-export async function openFamily(database: Database, transaction: Transaction, bearer: Bearer, nowMs: number): Promise<RefreshToken> {
+export async function openFamily(
+  database: Database,
+  transaction: Transaction,
+  bearer: Bearer,
+  nowMs: number,
+): Promise<RefreshToken> {
   const id = v7({ msecs: nowMs });
   await database.models.RefreshFamily.create({ ...bearer, id, lastUsedAt: new Date(nowMs) }, { transaction });
   return { shopId: bearer.shopId, familyId: id, number: 1 };
@@ -40,7 +45,12 @@ export async function presentToken(
 }
 
 /** Lets the family go on as another person. */
-export async function handOver(database: Database, transaction: Transaction, token: RefreshToken, personId: string): Promise<void> {
+export async function handOver(
+  database: Database,
+  transaction: Transaction,
+  token: RefreshToken,
+  personId: string,
+): Promise<void> {
   const { shopId, familyId } = token;
   await database.models.RefreshFamily.update({ personId }, { where: { shopId, id: familyId }, transaction });
 }

@@ -28,7 +28,9 @@ export async function issueFirstRunCode(database: Database): Promise<string | nu
 }
 
 function newGroup(): string {
-  return Array.from({ length: CODE_GROUP_LETTERS }, () => CODE_LETTERS[randomInt(CODE_LETTERS.length)]).join('');
+  return Array.from({ length: CODE_GROUP_LETTERS }, () => CODE_LETTERS[randomInt(CODE_LETTERS.length)]).join(
+    '',
+  );
 }
 
 // however it is typed: small letters, spaces for dashes
@@ -57,7 +59,8 @@ export async function firstRun(
 async function takeCode({ models }: Database, transaction: Transaction, code: string): Promise<void> {
   const lock = transaction.LOCK.UPDATE;
   const installation = await models.Installation.findOne({ lock, transaction, rejectOnEmpty: true });
-  if ((await models.KnownShop.count({ transaction })) > 0) throw new Problem(409, 'There is a shop here already. Sign in.');
+  if ((await models.KnownShop.count({ transaction })) > 0)
+    throw new Problem(409, 'There is a shop here already. Sign in.');
   if (installation.firstRunCodeHash !== hashOf(code)) {
     throw new Problem(403, 'That is not the code which the server printed at its last start.');
   }
@@ -65,7 +68,12 @@ async function takeCode({ models }: Database, transaction: Transaction, code: st
 }
 
 /** Makes a shop with nobody in it, within a transaction that is in it already. */
-export async function addShop({ models }: Database, transaction: Transaction, shopId: string, shop: NewShop): Promise<void> {
+export async function addShop(
+  { models }: Database,
+  transaction: Transaction,
+  shopId: string,
+  shop: NewShop,
+): Promise<void> {
   await models.KnownShop.create({ shopId }, { transaction });
   const row = { id: shopId, ...shop };
   await query(

@@ -18,7 +18,16 @@ export function personRow(person: Shown, boatIds: string[]): PersonRow {
 }
 
 /** The boats that a person owns. */
-export async function boatsOf(database: Database, transaction: Transaction, shopId: string, personId: string): Promise<string[]> {
-  const owned = await database.models.BoatOwner.findAll({ where: { shopId, personId }, order: ['boatId'], transaction });
+export async function boatsOf(
+  database: Database,
+  transaction: Transaction,
+  shopId: string,
+  personId: string,
+): Promise<string[]> {
+  const owned = await database.models.BoatOwner.findAll({
+    where: { shopId, personId },
+    order: ['boatId'],
+    transaction,
+  });
   return owned.map((line) => line.boatId);
 }

@@ -38,7 +38,9 @@ export class RateLimitStore implements Store {
   }
 
   async decrement(key: string): Promise<void> {
-    await this.#run('UPDATE rate_limits SET hits = greatest(hits - 1, 0) WHERE key = $1', [this.prefix + key]);
+    await this.#run('UPDATE rate_limits SET hits = greatest(hits - 1, 0) WHERE key = $1', [
+      this.prefix + key,
+    ]);
   }
 
   async resetKey(key: string): Promise<void> {

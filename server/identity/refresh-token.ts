@@ -17,7 +17,8 @@ export function writeRefreshToken(secret: string, { shopId, familyId, number }: 
 /** The token that the text says, or null where this installation did not write it. */
 export function readRefreshToken(secret: string, text: string): RefreshToken | null {
   const [shopId, familyId, number, seal, ...rest] = text.split('.');
-  if (!isUuid(shopId) || !isUuid(familyId) || !/^\d{1,9}$/.test(number ?? '') || !seal || rest.length > 0) return null;
+  if (!isUuid(shopId) || !isUuid(familyId) || !/^\d{1,9}$/.test(number ?? '') || !seal || rest.length > 0)
+    return null;
   if (!isSame(seal, sealOf(secret, `${shopId}.${familyId}.${number}`))) return null;
   return { shopId, familyId, number: Number(number) };
 }

@@ -12,7 +12,9 @@ import { signedIn, type SignedIn } from './sign-in.ts';
 export async function refresh(parts: Parts, cookie: string | null, personId?: string): Promise<SignedIn> {
   const token = await readCookie(parts, cookie);
   if (!token) throw signInAgain();
-  const found = await parts.database.inShop(token.shopId, (transaction) => goOn(parts, transaction, token, personId));
+  const found = await parts.database.inShop(token.shopId, (transaction) =>
+    goOn(parts, transaction, token, personId),
+  );
   // thrown out here, since within the transaction it would undo the end of the family
   if (found === null) throw signInAgain();
   if (found === 'not enrolled') throw new Problem(403, 'That person has not signed in on this device.');

@@ -37,10 +37,14 @@ export async function signIn(parts: Parts, request: SessionRequest): Promise<Sig
   if (others.length > 0) throw await whichShop(database, [person, ...others]);
 
   const bearer = { personId: person.id, shopId: person.shopId, deviceId: request.device.id };
-  const [seq, token] = await database.inShop(person.shopId, async (transaction) => [
-    await enrol(database, transaction, bearer, request.device),
-    await openFamily(database, transaction, bearer, now()),
-  ] as const);
+  const [seq, token] = await database.inShop(
+    person.shopId,
+    async (transaction) =>
+      [
+        await enrol(database, transaction, bearer, request.device),
+        await openFamily(database, transaction, bearer, now()),
+      ] as const,
+  );
   if (seq !== null) onChanged(person.shopId, seq);
   return signedIn(parts, bearer, person, token);
 }
@@ -66,7 +70,10 @@ export async function signedIn(
 }
 
 // in no shop's transaction: row security then shows nothing but the people of this e-mail
-async function findCandidates({ sequelize }: Database, { email, shopId }: SessionRequest): Promise<Candidate[]> {
+async function findCandidates(
+  { sequelize }: Database,
+  { email, shopId }: SessionRequest,
+): Promise<Candidate[]> {
   const found = await sequelize.transaction(async (transaction) => {
     await query(transaction, `SELECT set_config('ribband.sign_in_email', $1, true)`, [email]);
     return query<Candidate>(
@@ -87,5 +94,8 @@ async function whichShop(database: Database, people: Candidate[]): Promise<Probl
     );
     shops.push({ id: shopId, name: shop.name });
   }
-  return new Problem(409, 'This e-mail is in more than one shop. Say which.', { title: 'Which shop?', more: { shops } });
+  return new Problem(409, 'This e-mail is in more than one shop. Say which.', {
+    title: 'Which shop?',
+    more: { shops },
+  });
 }

@@ -19,7 +19,10 @@ interface FailureLimit {
 }
 
 /** Refuses with 429 what has failed too often in a quarter of an hour. Only failures stay counted. */
-export function failureLimit({ database, log }: Parts, { name, failuresMax, keyOf, status }: FailureLimit): RequestHandler {
+export function failureLimit(
+  { database, log }: Parts,
+  { name, failuresMax, keyOf, status }: FailureLimit,
+): RequestHandler {
   return rateLimit({
     windowMs: WINDOW_MS,
     limit: failuresMax,

@@ -47,11 +47,15 @@ export function requireSession(
 
 /** The session of a request that `requireSession` let through. */
 export function sessionOf(request: Request): Session {
-  if (!request.session) throw new Error(`${request.path} asks for a session but no requireSession stands before it.`);
+  if (!request.session)
+    throw new Error(`${request.path} asks for a session but no requireSession stands before it.`);
   return request.session;
 }
 
-async function readSession({ database, now }: Pick<Parts, 'database' | 'now'>, request: Request): Promise<Session> {
+async function readSession(
+  { database, now }: Pick<Parts, 'database' | 'now'>,
+  request: Request,
+): Promise<Session> {
   const [scheme, token] = (request.get('Authorization') ?? '').split(' ');
   if (scheme?.toLowerCase() !== 'bearer' || !token) throw unauthorised('Sign in first.');
   const bearer = readAccessToken(await installationSecret(database), token, now());
@@ -61,7 +65,10 @@ async function readSession({ database, now }: Pick<Parts, 'database' | 'now'>, r
   return { ...bearer, roles: standing.roles, isRevoked: standing.isRevoked };
 }
 
-function readStanding(database: Database, { shopId, personId, deviceId }: Pick<Session, 'shopId' | 'personId' | 'deviceId'>) {
+function readStanding(
+  database: Database,
+  { shopId, personId, deviceId }: Pick<Session, 'shopId' | 'personId' | 'deviceId'>,
+) {
   return database.inShop(shopId, async (transaction) => {
     const [standing] = await query<{ roles: Role[]; hasLeft: boolean; isRevoked: boolean }>(
       transaction,

@@ -35,7 +35,10 @@ const storage: UmzugStorage<Context> = {
 
 async function runPending(context: Context): Promise<string[]> {
   const umzug = new Umzug({
-    migrations: MIGRATIONS.map(({ name, up }) => ({ name, up: (params: { context: Context }) => up(params.context) })),
+    migrations: MIGRATIONS.map(({ name, up }) => ({
+      name,
+      up: (params: { context: Context }) => up(params.context),
+    })),
     context,
     storage,
     logger: undefined,
@@ -54,7 +57,9 @@ export async function migrate(url: string): Promise<string[]> {
     return await sequelize.transaction(async (transaction) => {
       const context = contextOf(sequelize, transaction);
       await context.run('SELECT pg_advisory_xact_lock($1)', [MIGRATION_LOCK]);
-      await context.run('CREATE TABLE IF NOT EXISTS migrations (name text PRIMARY KEY, run_at timestamptz NOT NULL DEFAULT now())');
+      await context.run(
+        'CREATE TABLE IF NOT EXISTS migrations (name text PRIMARY KEY, run_at timestamptz NOT NULL DEFAULT now())',
+      );
       return runPending(context);
     });
   } finally {

@@ -12,7 +12,11 @@ export interface Database {
   sequelize: Sequelize;
   models: Models;
   /** Runs `work` in one transaction that sees and writes the rows of one shop only. */
-  inShop<T>(shopId: string, work: (transaction: Transaction) => Promise<T>, options?: InShopOptions): Promise<T>;
+  inShop<T>(
+    shopId: string,
+    work: (transaction: Transaction) => Promise<T>,
+    options?: InShopOptions,
+  ): Promise<T>;
   close(): Promise<void>;
 }
 
@@ -45,7 +49,10 @@ export function openDatabase(url: string, { connectionsMax = 10 } = {}): Databas
     inShop: (shopId, work, { isolationLevel, readOnly = false } = {}) =>
       sequelize.transaction({ isolationLevel }, async (transaction) => {
         if (readOnly) await sequelize.query('SET TRANSACTION READ ONLY', { transaction });
-        await sequelize.query(`SELECT set_config('ribband.shop_id', $1, true)`, { bind: [shopId], transaction });
+        await sequelize.query(`SELECT set_config('ribband.shop_id', $1, true)`, {
+          bind: [shopId],
+          transaction,
+        });
         return work(transaction);
       }),
     close: () => sequelize.close(),

@@ -24,18 +24,22 @@ export type DeviceTable = Table<
 >;
 
 export function deviceTable(sequelize: Sequelize): DeviceTable {
-  return sequelize.define('Device', {
-    ...FEED,
-    label: DataTypes.TEXT,
-    replaces: DataTypes.UUID,
-    personId: DataTypes.UUID,
-    lastHeardAt: DataTypes.DATE,
-    appVersion: DataTypes.TEXT,
-    held: DataTypes.JSON,
-    lastOrderedAt: DataTypes.TEXT,
-    revokedAt: DataTypes.DATE,
-    row: DataTypes.JSON,
-  }, { tableName: 'devices' }) as unknown as DeviceTable;
+  return sequelize.define(
+    'Device',
+    {
+      ...FEED,
+      label: DataTypes.TEXT,
+      replaces: DataTypes.UUID,
+      personId: DataTypes.UUID,
+      lastHeardAt: DataTypes.DATE,
+      appVersion: DataTypes.TEXT,
+      held: DataTypes.JSON,
+      lastOrderedAt: DataTypes.TEXT,
+      revokedAt: DataTypes.DATE,
+      row: DataTypes.JSON,
+    },
+    { tableName: 'devices' },
+  ) as unknown as DeviceTable;
 }
 
 /** Who is enrolled on a device: has signed in on it with the password. */
@@ -48,11 +52,15 @@ export interface DevicePersonColumns {
 export type DevicePersonTable = Table<DevicePersonColumns>;
 
 export function devicePersonTable(sequelize: Sequelize): DevicePersonTable {
-  return sequelize.define('DevicePerson', {
-    shopId: { type: DataTypes.UUID, primaryKey: true },
-    deviceId: { type: DataTypes.UUID, primaryKey: true },
-    personId: { type: DataTypes.UUID, primaryKey: true },
-  }, { tableName: 'device_people' }) as unknown as DevicePersonTable;
+  return sequelize.define(
+    'DevicePerson',
+    {
+      shopId: { type: DataTypes.UUID, primaryKey: true },
+      deviceId: { type: DataTypes.UUID, primaryKey: true },
+      personId: { type: DataTypes.UUID, primaryKey: true },
+    },
+    { tableName: 'device_people' },
+  ) as unknown as DevicePersonTable;
 }
 
 /** What one sign-in began: a line of refresh tokens, each the successor of the one before. */
@@ -70,12 +78,16 @@ export interface RefreshFamilyColumns {
 export type RefreshFamilyTable = Table<RefreshFamilyColumns, 'used' | 'endedAt'>;
 
 export function refreshFamilyTable(sequelize: Sequelize): RefreshFamilyTable {
-  return sequelize.define('RefreshFamily', {
-    ...SHOP_KEY,
-    deviceId: DataTypes.UUID,
-    personId: DataTypes.UUID,
-    used: { type: DataTypes.INTEGER, defaultValue: 0 },
-    endedAt: DataTypes.DATE,
-    lastUsedAt: DataTypes.DATE,
-  }, { tableName: 'refresh_families' }) as unknown as RefreshFamilyTable;
+  return sequelize.define(
+    'RefreshFamily',
+    {
+      ...SHOP_KEY,
+      deviceId: DataTypes.UUID,
+      personId: DataTypes.UUID,
+      used: { type: DataTypes.INTEGER, defaultValue: 0 },
+      endedAt: DataTypes.DATE,
+      lastUsedAt: DataTypes.DATE,
+    },
+    { tableName: 'refresh_families' },
+  ) as unknown as RefreshFamilyTable;
 }

@@ -1,7 +1,15 @@
 import type { Sequelize } from 'sequelize';
 import { devicePersonTable, deviceTable, refreshFamilyTable } from './device.ts';
 import { boatOwnerTable, personTable } from './person.ts';
-import { boatTable, entryTable, looseEndTable, opTable, setAsideTable, stageTable, taskTable } from './record.ts';
+import {
+  boatTable,
+  entryTable,
+  looseEndTable,
+  opTable,
+  setAsideTable,
+  stageTable,
+  taskTable,
+} from './record.ts';
 import { installationTable, knownShopTable, shopTable } from './shop.ts';
 
 /** The models of one pool; they are not shared, since a process may hold several databases. */

@@ -18,16 +18,20 @@ export interface PersonColumns extends FeedColumns {
 export type PersonTable = Table<PersonColumns, 'leftAt' | 'feedEpoch'>;
 
 export function personTable(sequelize: Sequelize): PersonTable {
-  return sequelize.define('Person', {
-    ...FEED,
-    name: DataTypes.TEXT,
-    email: DataTypes.TEXT,
-    passwordHash: DataTypes.TEXT,
-    roles: DataTypes.ARRAY(DataTypes.TEXT),
-    leftAt: DataTypes.DATE,
-    feedEpoch: { type: DataTypes.INTEGER, defaultValue: 0 },
-    row: DataTypes.JSON,
-  }, { tableName: 'people' }) as unknown as PersonTable;
+  return sequelize.define(
+    'Person',
+    {
+      ...FEED,
+      name: DataTypes.TEXT,
+      email: DataTypes.TEXT,
+      passwordHash: DataTypes.TEXT,
+      roles: DataTypes.ARRAY(DataTypes.TEXT),
+      leftAt: DataTypes.DATE,
+      feedEpoch: { type: DataTypes.INTEGER, defaultValue: 0 },
+      row: DataTypes.JSON,
+    },
+    { tableName: 'people' },
+  ) as unknown as PersonTable;
 }
 
 export interface BoatOwnerColumns {
@@ -39,9 +43,13 @@ export interface BoatOwnerColumns {
 export type BoatOwnerTable = Table<BoatOwnerColumns>;
 
 export function boatOwnerTable(sequelize: Sequelize): BoatOwnerTable {
-  return sequelize.define('BoatOwner', {
-    shopId: { type: DataTypes.UUID, primaryKey: true },
-    boatId: { type: DataTypes.UUID, primaryKey: true },
-    personId: { type: DataTypes.UUID, primaryKey: true },
-  }, { tableName: 'boat_owners' }) as unknown as BoatOwnerTable;
+  return sequelize.define(
+    'BoatOwner',
+    {
+      shopId: { type: DataTypes.UUID, primaryKey: true },
+      boatId: { type: DataTypes.UUID, primaryKey: true },
+      personId: { type: DataTypes.UUID, primaryKey: true },
+    },
+    { tableName: 'boat_owners' },
+  ) as unknown as BoatOwnerTable;
 }

@@ -65,22 +65,26 @@ export interface SetAsideColumns extends FeedColumns {
 const JSON_ROW = { row: DataTypes.JSON };
 
 export function opTable(sequelize: Sequelize): Table<OpColumns> {
-  return sequelize.define('Op', {
-    shopId: { type: DataTypes.UUID, primaryKey: true },
-    opKey: { type: DataTypes.TEXT, primaryKey: true },
-    op: DataTypes.JSON,
-    sha256: DataTypes.TEXT,
-    deviceId: DataTypes.UUID,
-    personId: DataTypes.UUID,
-    kind: DataTypes.TEXT,
-    receivedAt: DataTypes.DATE,
-    receivedOn: DataTypes.DATEONLY,
-    orderedAt: DataTypes.TEXT,
-    orderedOn: DataTypes.DATEONLY,
-    roles: DataTypes.ARRAY(DataTypes.TEXT),
-    outcome: DataTypes.TEXT,
-    reason: DataTypes.TEXT,
-  }, { tableName: 'ops' }) as unknown as Table<OpColumns>;
+  return sequelize.define(
+    'Op',
+    {
+      shopId: { type: DataTypes.UUID, primaryKey: true },
+      opKey: { type: DataTypes.TEXT, primaryKey: true },
+      op: DataTypes.JSON,
+      sha256: DataTypes.TEXT,
+      deviceId: DataTypes.UUID,
+      personId: DataTypes.UUID,
+      kind: DataTypes.TEXT,
+      receivedAt: DataTypes.DATE,
+      receivedOn: DataTypes.DATEONLY,
+      orderedAt: DataTypes.TEXT,
+      orderedOn: DataTypes.DATEONLY,
+      roles: DataTypes.ARRAY(DataTypes.TEXT),
+      outcome: DataTypes.TEXT,
+      reason: DataTypes.TEXT,
+    },
+    { tableName: 'ops' },
+  ) as unknown as Table<OpColumns>;
 }
 
 export function boatTable(sequelize: Sequelize): Table<BoatColumns> {
@@ -99,35 +103,47 @@ export function taskTable(sequelize: Sequelize): Table<TaskColumns> {
 }
 
 export function entryTable(sequelize: Sequelize): Table<EntryColumns> {
-  return sequelize.define('Entry', {
-    ...FEED,
-    boatId: DataTypes.UUID,
-    stageId: DataTypes.UUID,
-    workDate: DataTypes.DATEONLY,
-    authorId: DataTypes.UUID,
-    ...JSON_ROW,
-  }, { tableName: 'entries' }) as unknown as Table<EntryColumns>;
+  return sequelize.define(
+    'Entry',
+    {
+      ...FEED,
+      boatId: DataTypes.UUID,
+      stageId: DataTypes.UUID,
+      workDate: DataTypes.DATEONLY,
+      authorId: DataTypes.UUID,
+      ...JSON_ROW,
+    },
+    { tableName: 'entries' },
+  ) as unknown as Table<EntryColumns>;
 }
 
 export function looseEndTable(sequelize: Sequelize): Table<LooseEndColumns> {
-  return sequelize.define('LooseEnd', {
-    ...FEED,
-    entity: DataTypes.TEXT,
-    rowId: DataTypes.UUID,
-    boatId: DataTypes.UUID,
-    ...JSON_ROW,
-  }, { tableName: 'loose_ends' }) as unknown as Table<LooseEndColumns>;
+  return sequelize.define(
+    'LooseEnd',
+    {
+      ...FEED,
+      entity: DataTypes.TEXT,
+      rowId: DataTypes.UUID,
+      boatId: DataTypes.UUID,
+      ...JSON_ROW,
+    },
+    { tableName: 'loose_ends' },
+  ) as unknown as Table<LooseEndColumns>;
 }
 
 export function setAsideTable(sequelize: Sequelize): Table<SetAsideColumns> {
-  return sequelize.define('SetAside', {
-    ...FEED,
-    opKey: DataTypes.TEXT,
-    reason: DataTypes.TEXT,
-    state: DataTypes.TEXT,
-    authorId: DataTypes.UUID,
-    awaitsEntity: DataTypes.TEXT,
-    awaitsId: DataTypes.UUID,
-    ...JSON_ROW,
-  }, { tableName: 'set_asides' }) as unknown as Table<SetAsideColumns>;
+  return sequelize.define(
+    'SetAside',
+    {
+      ...FEED,
+      opKey: DataTypes.TEXT,
+      reason: DataTypes.TEXT,
+      state: DataTypes.TEXT,
+      authorId: DataTypes.UUID,
+      awaitsEntity: DataTypes.TEXT,
+      awaitsId: DataTypes.UUID,
+      ...JSON_ROW,
+    },
+    { tableName: 'set_asides' },
+  ) as unknown as Table<SetAsideColumns>;
 }

@@ -19,17 +19,21 @@ export interface ShopColumns {
 export type ShopTable = Table<ShopColumns, 'seq' | 'rowSeq' | 'incarnation'>;
 
 export function shopTable(sequelize: Sequelize): ShopTable {
-  return sequelize.define('Shop', {
-    shopId: { type: DataTypes.UUID, primaryKey: true },
-    seq: DataTypes.BIGINT,
-    rowSeq: DataTypes.BIGINT,
-    name: DataTypes.TEXT,
-    timeZone: DataTypes.TEXT,
-    currency: DataTypes.TEXT,
-    units: DataTypes.TEXT,
-    incarnation: DataTypes.UUID,
-    row: DataTypes.JSON,
-  }, { tableName: 'shops' }) as unknown as ShopTable;
+  return sequelize.define(
+    'Shop',
+    {
+      shopId: { type: DataTypes.UUID, primaryKey: true },
+      seq: DataTypes.BIGINT,
+      rowSeq: DataTypes.BIGINT,
+      name: DataTypes.TEXT,
+      timeZone: DataTypes.TEXT,
+      currency: DataTypes.TEXT,
+      units: DataTypes.TEXT,
+      incarnation: DataTypes.UUID,
+      row: DataTypes.JSON,
+    },
+    { tableName: 'shops' },
+  ) as unknown as ShopTable;
 }
 
 export interface InstallationColumns {
@@ -41,11 +45,15 @@ export interface InstallationColumns {
 export type InstallationTable = Table<InstallationColumns>;
 
 export function installationTable(sequelize: Sequelize): InstallationTable {
-  return sequelize.define('Installation', {
-    onlyOne: { type: DataTypes.BOOLEAN, primaryKey: true },
-    jwtSecret: DataTypes.TEXT,
-    firstRunCodeHash: DataTypes.TEXT,
-  }, { tableName: 'installation' }) as unknown as InstallationTable;
+  return sequelize.define(
+    'Installation',
+    {
+      onlyOne: { type: DataTypes.BOOLEAN, primaryKey: true },
+      jwtSecret: DataTypes.TEXT,
+      firstRunCodeHash: DataTypes.TEXT,
+    },
+    { tableName: 'installation' },
+  ) as unknown as InstallationTable;
 }
 
 export interface KnownShopColumns {
@@ -56,8 +64,12 @@ export interface KnownShopColumns {
 export type KnownShopTable = Table<KnownShopColumns, 'createdAt'>;
 
 export function knownShopTable(sequelize: Sequelize): KnownShopTable {
-  return sequelize.define('KnownShop', {
-    shopId: { type: DataTypes.UUID, primaryKey: true },
-    createdAt: DataTypes.DATE,
-  }, { tableName: 'known_shops' }) as unknown as KnownShopTable;
+  return sequelize.define(
+    'KnownShop',
+    {
+      shopId: { type: DataTypes.UUID, primaryKey: true },
+      createdAt: DataTypes.DATE,
+    },
+    { tableName: 'known_shops' },
+  ) as unknown as KnownShopTable;
 }

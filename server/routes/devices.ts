@@ -38,7 +38,9 @@ export function deviceRoutes(parts: Parts): Router {
       database.models.Device.findAll({ where: { shopId }, order: ['label', 'id'], transaction }),
     );
     const seesAll = roles.includes('foreman') || roles.includes('office');
-    const shown = devices.map((device) => device.row).filter((row) => seesAll || row.personIds.includes(personId));
+    const shown = devices
+      .map((device) => device.row)
+      .filter((row) => seesAll || row.personIds.includes(personId));
     response.set('Cache-Control', 'no-store').json({ devices: shown });
   });
 

@@ -55,8 +55,18 @@ export function sessionRoutes(parts: Parts): Router {
   const router = Router();
   const body = jsonBody(BODY_BYTES_MAX);
   const limits = [
-    failureLimit(parts, { name: 'sign-in-address', failuresMax: FAILURES_OF_ADDRESS_MAX, keyOf: addressOf, status: 401 }),
-    failureLimit(parts, { name: 'sign-in-email', failuresMax: FAILURES_OF_EMAIL_MAX, keyOf: emailKeyOf, status: 401 }),
+    failureLimit(parts, {
+      name: 'sign-in-address',
+      failuresMax: FAILURES_OF_ADDRESS_MAX,
+      keyOf: addressOf,
+      status: 401,
+    }),
+    failureLimit(parts, {
+      name: 'sign-in-email',
+      failuresMax: FAILURES_OF_EMAIL_MAX,
+      keyOf: emailKeyOf,
+      status: 401,
+    }),
   ];
 
   router.post('/session', body, ...limits, async (request, response) => {

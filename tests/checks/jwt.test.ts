@@ -4,9 +4,13 @@ import { readAccessToken, writeAccessToken } from '#server/identity/access-token
 
 // RFC 7515, appendix A.1 (the JWT of RFC 7519, section 3.1)
 const HEADER = 'eyJ0eXAiOiJKV1QiLA0KICJhbGciOiJIUzI1NiJ9';
-const PAYLOAD = 'eyJpc3MiOiJqb2UiLA0KICJleHAiOjEzMDA4MTkzODAsDQogImh0dHA6Ly9leGFtcGxlLmNvbS9pc19yb290Ijp0cnVlfQ';
+const PAYLOAD =
+  'eyJpc3MiOiJqb2UiLA0KICJleHAiOjEzMDA4MTkzODAsDQogImh0dHA6Ly9leGFtcGxlLmNvbS9pc19yb290Ijp0cnVlfQ';
 const SIGNATURE = 'dBjftJeZ4CVP-mB92K27uhbUJU1p1r_wW1gFWFOEjXk';
-const KEY = Buffer.from('AyM1SysPpbyDfgZld3umj1qzKObwVMkoqQ-EstJQLr_T-1qS0gZH75aKtMN3Yj0iPS4hcgUuTwjAzZr1Z9CAow', 'base64url');
+const KEY = Buffer.from(
+  'AyM1SysPpbyDfgZld3umj1qzKObwVMkoqQ-EstJQLr_T-1qS0gZH75aKtMN3Yj0iPS4hcgUuTwjAzZr1Z9CAow',
+  'base64url',
+);
 const EXP_SECONDS = 1300819380;
 
 function verify(signature: string, clockTimestamp: number): unknown {
@@ -14,7 +18,11 @@ function verify(signature: string, clockTimestamp: number): unknown {
 }
 
 test('the token of RFC 7515 A.1 is read before its end', () => {
-  expect(verify(SIGNATURE, EXP_SECONDS - 1)).toEqual({ iss: 'joe', exp: EXP_SECONDS, 'http://example.com/is_root': true });
+  expect(verify(SIGNATURE, EXP_SECONDS - 1)).toEqual({
+    iss: 'joe',
+    exp: EXP_SECONDS,
+    'http://example.com/is_root': true,
+  });
 });
 
 test('the token of RFC 7515 A.1 is refused from its end on', () => {
@@ -41,6 +49,11 @@ test('an access token says who asks for a quarter of an hour', () => {
 
 test('an access token under another secret, or without a signature, says nothing', () => {
   expect(readAccessToken('other', writeAccessToken('secret', bearer, NOW_MS), NOW_MS)).toBeNull();
-  const claims = { sub: bearer.personId, shop: bearer.shopId, device: bearer.deviceId, exp: NOW_MS / 1000 + 900 };
+  const claims = {
+    sub: bearer.personId,
+    shop: bearer.shopId,
+    device: bearer.deviceId,
+    exp: NOW_MS / 1000 + 900,
+  };
   expect(readAccessToken('secret', jwt.sign(claims, null, { algorithm: 'none' }), NOW_MS)).toBeNull();
 });

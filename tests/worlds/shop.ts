@@ -31,14 +31,24 @@ export interface TestShop {
 export async function makeShop(database: Database, name = 'Sallow Creek Boats'): Promise<TestShop> {
   const shopId = v7();
   await database.inShop(shopId, (transaction) =>
-    addShop(database, transaction, shopId, { name, timeZone: 'Europe/Dublin', currency: 'EUR', units: 'imperial' }),
+    addShop(database, transaction, shopId, {
+      name,
+      timeZone: 'Europe/Dublin',
+      currency: 'EUR',
+      units: 'imperial',
+    }),
   );
   const people = {} as Record<Role, TestPerson>;
   for (const role of roleSchema.options) people[role] = await makePerson(database, shopId, [role]);
   return { shopId, people };
 }
 
-export async function makePerson(database: Database, shopId: string, roles: Role[], email?: string): Promise<TestPerson> {
+export async function makePerson(
+  database: Database,
+  shopId: string,
+  roles: Role[],
+  email?: string,
+): Promise<TestPerson> {
   const id = v7();
   const name = `${roles.join(' and ')} ${id.slice(-4)}`;
   const person = { id, name, email: email ?? `${id}@ribband.test`, roles, passwordHash: PASSWORD_HASH };
@@ -51,7 +61,10 @@ export async function makeBoat(database: Database, shopId: string): Promise<stri
   const id = v7();
   await database.inShop(shopId, async (transaction) => {
     const seq = Number(await database.models.Boat.max('seq', { where: { shopId }, transaction })) + 1;
-    await database.models.Boat.create({ shopId, id, seq, name: 'Dunlin', row: { id, name: 'Dunlin' } }, { transaction });
+    await database.models.Boat.create(
+      { shopId, id, seq, name: 'Dunlin', row: { id, name: 'Dunlin' } },
+      { transaction },
+    );
   });
   return id;
 }
@@ -65,10 +78,19 @@ export interface SignedIn {
 }
 
 /** Signs a person in, on a device of their own unless one is named. */
-export async function signIn(server: TestServer, person: TestPerson, deviceId: string = v7()): Promise<SignedIn> {
+export async function signIn(
+  server: TestServer,
+  person: TestPerson,
+  deviceId: string = v7(),
+): Promise<SignedIn> {
   const response = await request(server.app)
     .post('/api/session')
-    .send({ email: person.email, password: PASSWORD, shopId: person.shopId, device: { id: deviceId, label: 'phone' } });
+    .send({
+      email: person.email,
+      password: PASSWORD,
+      shopId: person.shopId,
+      device: { id: deviceId, label: 'phone' },
+    });
   if (response.status !== 200) throw new Error(`Sign-in answered ${response.status}: ${response.text}`);
   const { accessToken } = response.body as SessionAnswer;
   return { person, deviceId, accessToken, cookie: cookieOf(response) };

@@ -16,7 +16,10 @@ beforeAll(async () => {
 afterAll(() => server.close());
 
 function setOwners(boatId: string, personIds: string[]): request.Test {
-  return request(server.app).put(`/api/boats/${boatId}/owners`).auth(foreman.accessToken, { type: 'bearer' }).send({ personIds });
+  return request(server.app)
+    .put(`/api/boats/${boatId}/owners`)
+    .auth(foreman.accessToken, { type: 'bearer' })
+    .send({ personIds });
 }
 
 function columns(id: string) {
@@ -27,7 +30,9 @@ function columns(id: string) {
 
 test('a boat changes hands: who gains her and who loses her begin a new feed, each with a number of its own', async () => {
   const boatId = await makeBoat(server.database, shop.shopId);
-  const [seller, buyer, sister] = await Promise.all([0, 1, 2].map(() => makePerson(server.database, shop.shopId, ['owner'])));
+  const [seller, buyer, sister] = await Promise.all(
+    [0, 1, 2].map(() => makePerson(server.database, shop.shopId, ['owner'])),
+  );
   await setOwners(boatId, [seller!.id, sister!.id]);
   const stays = await columns(sister!.id);
   const response = await setOwners(boatId, [buyer!.id, sister!.id]);
@@ -55,7 +60,10 @@ test('who is no owner, or not of the shop, cannot be one; and nobody else is mad
   const owner = await makePerson(server.database, shop.shopId, ['owner']);
   const response = await setOwners(boatId, [owner.id, shop.people.crew.id, elsewhere.people.owner.id]);
   expect(response.status).toBe(400);
-  expect(response.body.issues.map((issue: { path: string }) => issue.path)).toEqual(['personIds.1', 'personIds.2']);
+  expect(response.body.issues.map((issue: { path: string }) => issue.path)).toEqual([
+    'personIds.1',
+    'personIds.2',
+  ]);
   expect((await columns(owner.id)).row.boatIds).toEqual([]);
 });
 

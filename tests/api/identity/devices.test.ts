@@ -17,7 +17,9 @@ beforeAll(async () => {
 afterAll(() => server.close());
 
 async function devicesOf(session: SignedIn): Promise<DeviceRow[]> {
-  const response = await request(server.app).get('/api/devices').auth(session.accessToken, { type: 'bearer' });
+  const response = await request(server.app)
+    .get('/api/devices')
+    .auth(session.accessToken, { type: 'bearer' });
   expect(response.status).toBe(200);
   return (response.body as { devices: DeviceRow[] }).devices;
 }
@@ -39,16 +41,25 @@ test('a revoked device is signed out at once', async () => {
   const lost = await signIn(server, shop.people.crew);
   const response = await revoke(foreman, lost.deviceId);
   expect(response.status).toBe(200);
-  expect(response.body.device).toMatchObject({ id: lost.deviceId, revokedAt: new Date(server.clock.now()).toISOString() });
-  expect((await request(server.app).post('/api/session/refresh').set('Cookie', lost.cookie)).status).toBe(401);
-  expect((await request(server.app).get('/api/devices').auth(lost.accessToken, { type: 'bearer' })).status).toBe(403);
+  expect(response.body.device).toMatchObject({
+    id: lost.deviceId,
+    revokedAt: new Date(server.clock.now()).toISOString(),
+  });
+  expect((await request(server.app).post('/api/session/refresh').set('Cookie', lost.cookie)).status).toBe(
+    401,
+  );
+  expect(
+    (await request(server.app).get('/api/devices').auth(lost.accessToken, { type: 'bearer' })).status,
+  ).toBe(403);
 });
 
 test('a revoked device may sign in with the password, so that its unsent work can still come, and reads nothing', async () => {
   const lost = await signIn(server, shop.people.crew);
   await revoke(foreman, lost.deviceId);
   const again = await signIn(server, shop.people.crew, lost.deviceId);
-  expect((await request(server.app).get('/api/devices').auth(again.accessToken, { type: 'bearer' })).status).toBe(403);
+  expect(
+    (await request(server.app).get('/api/devices').auth(again.accessToken, { type: 'bearer' })).status,
+  ).toBe(403);
   const shown = (await devicesOf(foreman)).find((device) => device.id === lost.deviceId);
   expect(shown?.revokedAt).not.toBeNull();
 });
@@ -58,7 +69,11 @@ test('a device that is revoked twice keeps its first date and number', async () 
   const first = await revoke(foreman, lost.deviceId);
   const read = () =>
     server.database.inShop(shop.shopId, (transaction) =>
-      server.database.models.Device.findOne({ where: { id: lost.deviceId }, transaction, rejectOnEmpty: true }),
+      server.database.models.Device.findOne({
+        where: { id: lost.deviceId },
+        transaction,
+        rejectOnEmpty: true,
+      }),
     );
   const { seq } = await read();
   server.clock.advance(60_000);

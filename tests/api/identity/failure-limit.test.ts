@@ -17,7 +17,9 @@ beforeEach(async () => {
 afterEach(() => server.close());
 
 function attempt(email: string, password: string, app = server.app): request.Test {
-  return request(app).post('/api/session').send({ email, password, shopId: shop.shopId, device: { id: v7(), label: 'phone' } });
+  return request(app)
+    .post('/api/session')
+    .send({ email, password, shopId: shop.shopId, device: { id: v7(), label: 'phone' } });
 }
 
 async function failTimes(count: number, email: string): Promise<void> {
@@ -35,7 +37,7 @@ test('the eleventh failure of an e-mail is told to wait, right password or not, 
   expect((await attempt(shop.people.foreman.email, PASSWORD)).status).toBe(200);
 
   const database = openDatabase(server.databaseUrl);
-  const second = createApp({ database, now: server.clock.now, log: pino({ level: 'silent' }) });
+  const second = createApp({ database, now: server.clock.now, hails: server.hails, log: pino({ level: 'silent' }) });
   expect((await attempt(email, PASSWORD, second)).status).toBe(429);
   await database.close();
 });
@@ -53,11 +55,14 @@ test('after a quarter of an hour it may be tried again', async () => {
 });
 
 test('what succeeds is not counted', async () => {
-  for (let done = 0; done < 12; done += 1) expect((await attempt(shop.people.crew.email, PASSWORD)).status).toBe(200);
+  for (let done = 0; done < 12; done += 1)
+    expect((await attempt(shop.people.crew.email, PASSWORD)).status).toBe(200);
 });
 
 test('an address that fails with ever other e-mails is told to wait as well', async () => {
   await failTimes(1, 'first@ribband.test');
-  await server.database.sequelize.query(`UPDATE rate_limits SET hits = 100 WHERE key LIKE 'sign-in-address:%'`);
+  await server.database.sequelize.query(
+    `UPDATE rate_limits SET hits = 100 WHERE key LIKE 'sign-in-address:%'`,
+  );
   expect((await attempt('second@ribband.test', 'wrong')).status).toBe(429);
 });

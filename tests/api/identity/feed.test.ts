@@ -19,7 +19,9 @@ function number(shopId: string, count: number) {
 test('numbers are given in blocks without gap or overlap, whoever asks at the same time', async () => {
   const { last: start } = await number(shop.shopId, 0);
   const blocks = await Promise.all([1, 4, 2, 3, 5].map((count) => number(shop.shopId, count)));
-  const given = blocks.flatMap(({ first, last }) => Array.from({ length: last - first + 1 }, (_, index) => first + index));
+  const given = blocks.flatMap(({ first, last }) =>
+    Array.from({ length: last - first + 1 }, (_, index) => first + index),
+  );
   expect(given.sort((a, b) => a - b)).toEqual(Array.from({ length: 15 }, (_, index) => start + 1 + index));
 });
 
@@ -35,7 +37,9 @@ test('what is rolled back gives its numbers back', async () => {
 
 test("a shop's numbers cannot be taken from within another", async () => {
   const other = await makeShop(world.database);
-  const taking = world.database.inShop(other.shopId, (transaction) => numberRows(transaction, shop.shopId, 1));
+  const taking = world.database.inShop(other.shopId, (transaction) =>
+    numberRows(transaction, shop.shopId, 1),
+  );
   await expect(taking).rejects.toThrow('There is no shop');
 });
 

@@ -17,7 +17,9 @@ const shop = { name: 'Marram Boatworks', timeZone: 'America/Halifax', currency: 
 const person = { name: 'Edda Quill', email: 'edda@ribband.test', password: 'pitch and oakum' };
 
 function run(more: object = {}): request.Test {
-  return request(server.app).post('/api/first-run').send({ code, shop, person, ...more });
+  return request(server.app)
+    .post('/api/first-run')
+    .send({ code, shop, person, ...more });
 }
 
 test('the code makes a shop and its first foreman, who can sign in', async () => {

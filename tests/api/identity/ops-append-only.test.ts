@@ -25,11 +25,26 @@ afterAll(async () => {
 
 function keep(key: string, op: unknown): Promise<unknown> {
   const { shopId } = crew.person;
-  const receipt = { receivedAt: new Date(), receivedOn: '2026-06-01', orderedAt: 'x', orderedOn: '2026-06-01' };
+  const receipt = {
+    receivedAt: new Date(),
+    receivedOn: '2026-06-01',
+    orderedAt: 'x',
+    orderedOn: '2026-06-01',
+  };
   const judged = { roles: ['crew'], outcome: 'set-aside', reason: 'malformed' };
   return server.database.inShop(shopId, (transaction) =>
     server.database.models.Op.create(
-      { shopId, opKey: key, op, sha256: 'x', deviceId: crew.deviceId, personId: null, kind: null, ...receipt, ...judged },
+      {
+        shopId,
+        opKey: key,
+        op,
+        sha256: 'x',
+        deviceId: crew.deviceId,
+        personId: null,
+        kind: null,
+        ...receipt,
+        ...judged,
+      },
       { transaction },
     ),
   );
@@ -44,13 +59,19 @@ test('an op is kept once', async () => {
   await expect(keep(opKey, {})).rejects.toThrow('duplicate key');
 });
 
-test.each(['UPDATE ops SET outcome = $$kept$$', 'DELETE FROM ops', 'TRUNCATE ops CASCADE'])('the app may not %s', async (sql) => {
-  const asApp = server.database.inShop(crew.person.shopId, (transaction) =>
-    server.database.sequelize.query(sql, { transaction }),
-  );
-  await expect(asApp).rejects.toThrow('permission denied');
-});
+test.each(['UPDATE ops SET outcome = $$kept$$', 'DELETE FROM ops', 'TRUNCATE ops CASCADE'])(
+  'the app may not %s',
+  async (sql) => {
+    const asApp = server.database.inShop(crew.person.shopId, (transaction) =>
+      server.database.sequelize.query(sql, { transaction }),
+    );
+    await expect(asApp).rejects.toThrow('permission denied');
+  },
+);
 
-test.each(['UPDATE ops SET outcome = $$kept$$', 'DELETE FROM ops', 'TRUNCATE ops CASCADE'])('the owner may not %s', async (sql) => {
-  await expect(owner.query(sql)).rejects.toThrow('Ops are kept as they came');
-});
+test.each(['UPDATE ops SET outcome = $$kept$$', 'DELETE FROM ops', 'TRUNCATE ops CASCADE'])(
+  'the owner may not %s',
+  async (sql) => {
+    await expect(owner.query(sql)).rejects.toThrow('Ops are kept as they came');
+  },
+);

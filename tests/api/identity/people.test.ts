@@ -50,7 +50,14 @@ describe('a person who is added', () => {
     const body = somebody({ email: 'Imke.Rood@Ribband.test', roles: ['crew', 'owner'] });
     const response = await add(office, body);
     expect(response.status).toBe(201);
-    const row = { id: body.id, name: 'Imke Rood', email: 'imke.rood@ribband.test', roles: ['crew', 'owner'], leftAt: null, boatIds: [] };
+    const row = {
+      id: body.id,
+      name: 'Imke Rood',
+      email: 'imke.rood@ribband.test',
+      roles: ['crew', 'owner'],
+      leftAt: null,
+      boatIds: [],
+    };
     expect(response.body).toEqual({ person: row });
     const kept = await columns(body.id);
     expect(kept.row).toEqual(row);

@@ -33,7 +33,9 @@ test('a refresh answers as a sign-in does', async () => {
     person: { id: person.id, name: person.name, roles: ['crew'], shopId: shop.shopId },
     device: { id: deviceId },
   });
-  const devices = await request(server.app).get('/api/devices').auth(response.body.accessToken, { type: 'bearer' });
+  const devices = await request(server.app)
+    .get('/api/devices')
+    .auth(response.body.accessToken, { type: 'bearer' });
   expect(devices.status).toBe(200);
 });
 
@@ -71,7 +73,12 @@ test('a token that was not written here is refused and ends nothing', async () =
   const { cookie } = await signIn(server, shop.people.crew);
   const [name, value] = cookie.split('=') as [string, string];
   const [shopId, family, number, seal] = value.split('.') as [string, string, string, string];
-  for (const forged of [[shopId, family, '2', seal], [shopId, family, number, 'x'], [shopId, family, number], ['nonsense']]) {
+  for (const forged of [
+    [shopId, family, '2', seal],
+    [shopId, family, number, 'x'],
+    [shopId, family, number],
+    ['nonsense'],
+  ]) {
     expect((await refresh(`${name}=${forged.join('.')}`)).status).toBe(401);
   }
   expect((await request(server.app).post('/api/session/refresh')).status).toBe(401);
@@ -100,7 +107,9 @@ test('who has left the shop is signed in no more', async () => {
     server.database.models.Person.update({ leftAt: new Date() }, { where: { id: leaver.id }, transaction }),
   );
   expect((await refresh(cookie)).status).toBe(401);
-  expect((await request(server.app).get('/api/devices').auth(accessToken, { type: 'bearer' })).status).toBe(401);
+  expect((await request(server.app).get('/api/devices').auth(accessToken, { type: 'bearer' })).status).toBe(
+    401,
+  );
 });
 
 test('a phone that stays away for half a year has to sign in again, a day less not', async () => {

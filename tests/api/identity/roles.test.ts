@@ -29,12 +29,23 @@ interface Line {
 const FOREMAN_ONLY = { crew: 403, office: 403, owner: 403 };
 
 const lines: Line[] = [
-  { name: 'list people', method: 'get', path: () => '/api/people', own: { crew: 403, foreman: 200, office: 200, owner: 403 } },
+  {
+    name: 'list people',
+    method: 'get',
+    path: () => '/api/people',
+    own: { crew: 403, foreman: 200, office: 200, owner: 403 },
+  },
   {
     name: 'add a person',
     method: 'post',
     path: () => '/api/people',
-    body: () => ({ id: v7(), name: 'New', email: `${v7()}@ribband.test`, password: PASSWORD, roles: ['crew'] }),
+    body: () => ({
+      id: v7(),
+      name: 'New',
+      email: `${v7()}@ribband.test`,
+      password: PASSWORD,
+      roles: ['crew'],
+    }),
     own: { crew: 403, foreman: 201, office: 201, owner: 403 },
   },
   {
@@ -45,7 +56,12 @@ const lines: Line[] = [
     own: { crew: 403, foreman: 200, office: 200, owner: 403 },
     foreign: { crew: 403, foreman: 404, office: 404, owner: 403 },
   },
-  { name: 'list devices', method: 'get', path: () => '/api/devices', own: { crew: 200, foreman: 200, office: 200, owner: 403 } },
+  {
+    name: 'list devices',
+    method: 'get',
+    path: () => '/api/devices',
+    own: { crew: 200, foreman: 200, office: 200, owner: 403 },
+  },
   {
     name: 'revoke a device',
     method: 'post',
@@ -80,7 +96,12 @@ afterAll(() => server.close());
 
 async function targetIn({ shopId, people }: TestShop): Promise<Target> {
   const { deviceId } = await signIn(server, people.crew);
-  return { personId: people.crew.id, deviceId, boatId: await makeBoat(server.database, shopId), ownerId: people.owner.id };
+  return {
+    personId: people.crew.id,
+    deviceId,
+    boatId: await makeBoat(server.database, shopId),
+    ownerId: people.owner.id,
+  };
 }
 
 function send({ method, path, body }: Line, target: Target, token?: string): request.Test {

@@ -93,7 +93,10 @@ describe('the app', () => {
   test("cannot change another shop's row, nor move one of its own there", async () => {
     const { Person } = world.database.models;
     await world.database.inShop(ours!.shopId, async (transaction) => {
-      const [changed] = await Person.update({ name: 'x' }, { where: { id: theirs!.people.crew.id }, transaction });
+      const [changed] = await Person.update(
+        { name: 'x' },
+        { where: { id: theirs!.people.crew.id }, transaction },
+      );
       expect(changed).toBe(0);
     });
     const moving = world.database.inShop(ours!.shopId, (transaction) =>
@@ -107,7 +110,10 @@ describe('the app', () => {
     await makePerson(world.database, ours!.shopId, ['crew'], email);
     await makePerson(world.database, theirs!.shopId, ['crew'], email);
     const found = await world.database.sequelize.transaction(async (transaction) => {
-      await world.database.sequelize.query(`SELECT set_config('ribband.sign_in_email', $1, true)`, { bind: [email], transaction });
+      await world.database.sequelize.query(`SELECT set_config('ribband.sign_in_email', $1, true)`, {
+        bind: [email],
+        transaction,
+      });
       return world.database.models.Person.findAll({ transaction });
     });
     expect(found.map((person) => person.email)).toEqual([email, email]);
@@ -128,12 +134,18 @@ test('an owner who is no superuser can migrate, twice at once, and the app works
   const name = `ribband_test_${randomBytes(6).toString('hex')}`;
   await owner.query(`CREATE ROLE ${name} LOGIN CREATEROLE PASSWORD 'plain'`);
   await owner.query(`CREATE DATABASE ${name} OWNER ${name}`);
-  const url = Object.assign(new URL(world.url), { username: name, password: 'plain', pathname: `/${name}` }).href;
+  const url = Object.assign(new URL(world.url), {
+    username: name,
+    password: 'plain',
+    pathname: `/${name}`,
+  }).href;
   const runs = await Promise.all([migrate(url), migrate(url)]);
   expect(runs.flat().sort()).toEqual(['0001-shops', '0002-identity', '0003-record']);
   const database = openDatabase(url);
   const shop = await makeShop(database);
-  expect(await database.inShop(shop.shopId, (transaction) => database.models.Person.count({ transaction }))).toBe(4);
+  expect(
+    await database.inShop(shop.shopId, (transaction) => database.models.Person.count({ transaction })),
+  ).toBe(4);
   await database.close();
   await dropTestDatabase(name);
   await owner.query(`DROP ROLE ${name}`);
@@ -143,7 +155,8 @@ test('inShop can take a snapshot that refuses to write', async () => {
   const { models, inShop } = world.database;
   const writing = inShop(
     ours!.shopId,
-    (transaction) => models.Person.update({ name: 'x' }, { where: { id: ours!.people.crew.id }, transaction }),
+    (transaction) =>
+      models.Person.update({ name: 'x' }, { where: { id: ours!.people.crew.id }, transaction }),
     { readOnly: true },
   );
   await expect(writing).rejects.toThrow('read-only transaction');

@@ -3,7 +3,14 @@ import { v7 } from 'uuid';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { hashPassword } from '#server/identity/passwords.ts';
 import { startServer, type TestServer } from '#tests/worlds/server.ts';
-import { makePerson, makeShop, PASSWORD, signIn, type TestPerson, type TestShop } from '#tests/worlds/shop.ts';
+import {
+  makePerson,
+  makeShop,
+  PASSWORD,
+  signIn,
+  type TestPerson,
+  type TestShop,
+} from '#tests/worlds/shop.ts';
 
 let server: TestServer;
 let shop: TestShop;
@@ -53,7 +60,9 @@ test('the e-mail may be typed in capitals', async () => {
 test('a field that is not known, or a label that cannot be kept, is refused by name', async () => {
   const unknown = await ask({ ...asking(shop.people.crew.email), remember: true });
   expect([unknown.status, unknown.body.issues[0].path]).toEqual([400, 'remember']);
-  const nul = await ask(asking(shop.people.crew.email, PASSWORD, { device: { id: v7(), label: 'a\u0000b' } }));
+  const nul = await ask(
+    asking(shop.people.crew.email, PASSWORD, { device: { id: v7(), label: 'a\u0000b' } }),
+  );
   expect([nul.status, nul.body.issues[0].path]).toEqual([400, 'device.label']);
 });
 
@@ -72,7 +81,12 @@ describe('a sign-in that fails', () => {
     const before = process.cpuUsage();
     const response = await ask(asking(email, 'not the password'));
     const { status, body } = response;
-    return { cpuMicroseconds: process.cpuUsage(before).user, status, body: body as object, cookies: response.get('Set-Cookie') };
+    return {
+      cpuMicroseconds: process.cpuUsage(before).user,
+      status,
+      body: body as object,
+      cookies: response.get('Set-Cookie'),
+    };
   }
 
   test('answers the same and takes as long whether the e-mail is known or not', async () => {
@@ -83,12 +97,14 @@ describe('a sign-in that fails', () => {
     await timed(known.email); // warm
     const answers: (Awaited<ReturnType<typeof timed>> & { email: string })[] = [];
     for (let round = 0; round < 3; round += 1) {
-      for (const email of [known.email, 'nobody@ribband.test', left.email]) answers.push({ email, ...(await timed(email)) });
+      for (const email of [known.email, 'nobody@ribband.test', left.email])
+        answers.push({ email, ...(await timed(email)) });
     }
     for (const { status, body, cookies } of answers) {
       expect({ status, body, cookies }).toEqual({ status: 401, body: answers[0]!.body, cookies: undefined });
     }
-    const least = (email: string) => Math.min(...answers.filter((one) => one.email === email).map((one) => one.cpuMicroseconds));
+    const least = (email: string) =>
+      Math.min(...answers.filter((one) => one.email === email).map((one) => one.cpuMicroseconds));
     // without the comparison with a decoy the unknown one takes a twentieth
     expect(least('nobody@ribband.test') / least(known.email)).toBeGreaterThan(0.6);
     expect(least('nobody@ribband.test') / least(known.email)).toBeLessThan(1.6);
@@ -174,17 +190,27 @@ describe('a device', () => {
     const { crew } = shop.people;
     const lost = await signIn(server, crew);
     const id = v7();
-    const replaced = await ask({ ...asking(crew.email), device: { id, label: 'new phone', replaces: lost.deviceId } });
+    const replaced = await ask({
+      ...asking(crew.email),
+      device: { id, label: 'new phone', replaces: lost.deviceId },
+    });
     expect(replaced.status).toBe(200);
     expect((await deviceRow(shop.shopId, id)).row.replaces).toBe(lost.deviceId);
-    const unknown = await ask({ ...asking(crew.email), device: { id: v7(), label: 'new phone', replaces: v7() } });
+    const unknown = await ask({
+      ...asking(crew.email),
+      device: { id: v7(), label: 'new phone', replaces: v7() },
+    });
     expect([unknown.status, unknown.body.issues[0].path]).toEqual([400, 'device.replaces']);
   });
 
   test('on which five people sign in at once knows all five', async () => {
-    const people = await Promise.all(Array.from({ length: 5 }, () => makePerson(server.database, shop.shopId, ['crew'])));
+    const people = await Promise.all(
+      Array.from({ length: 5 }, () => makePerson(server.database, shop.shopId, ['crew'])),
+    );
     const deviceId = v7();
     await Promise.all(people.map((person) => signIn(server, person, deviceId)));
-    expect((await deviceRow(shop.shopId, deviceId)).row.personIds).toEqual(people.map((person) => person.id).sort());
+    expect((await deviceRow(shop.shopId, deviceId)).row.personIds).toEqual(
+      people.map((person) => person.id).sort(),
+    );
   });
 });
