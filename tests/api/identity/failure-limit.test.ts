@@ -37,7 +37,12 @@ test('the eleventh failure of an e-mail is told to wait, right password or not, 
   expect((await attempt(shop.people.foreman.email, PASSWORD)).status).toBe(200);
 
   const database = openDatabase(server.databaseUrl);
-  const second = createApp({ database, now: server.clock.now, hails: server.hails, log: pino({ level: 'silent' }) });
+  const second = createApp({
+    database,
+    now: server.clock.now,
+    hails: server.hails,
+    log: pino({ level: 'silent' }),
+  });
   expect((await attempt(email, PASSWORD, second)).status).toBe(429);
   await database.close();
 });

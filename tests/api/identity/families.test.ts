@@ -13,7 +13,7 @@ afterAll(() => server.close());
 
 async function waitersOnLocks(): Promise<number> {
   const [[found]] = (await server.database.sequelize.query(
-    `SELECT count(*) FROM pg_stat_activity WHERE datname = current_database() AND wait_event_type = 'Lock'`,
+    `SELECT count(*) FROM pg_locks JOIN pg_stat_activity USING (pid) WHERE NOT granted AND datname = current_database()`,
   )) as unknown as [[{ count: number }]];
   return found.count;
 }
