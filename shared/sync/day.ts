@@ -3,7 +3,8 @@ import { z } from 'zod';
 /** A calendar day in the shop's time zone, `YYYY-MM-DD`. */
 export type Day = string;
 
-export const daySchema = z.iso.date();
+// PostgreSQL's dates have no year 0
+export const daySchema = z.iso.date().refine((day) => day >= '0001-01-01', 'a day from year 1 on');
 
 const formats = new Map<string, Intl.DateTimeFormat>();
 
