@@ -1,11 +1,14 @@
 import { MemoryStore } from '#shared/sync/memory-store.ts';
 import { mergeBatch, type Outcome } from '#shared/sync/merge.ts';
+import type { DeviceRow } from '#shared/identity/device.ts';
 import { overFor } from '#shared/sync/over.ts';
 import type { Role } from '#shared/identity/role.ts';
 import { opKinds } from '#shared/sync/registry.ts';
 import type { Row } from '#shared/sync/row.ts';
 import { formatStamp } from '#shared/sync/stamp.ts';
 import { v7 } from 'uuid';
+import type { View } from '#src/replica/view.ts';
+import { viewOf } from '#tests/worlds/view.ts';
 
 export const SHOP_ID = '0193a000-0000-7000-8000-000000000001';
 
@@ -27,6 +30,19 @@ export class TestRecord {
   constructor() {
     const shop = { id: SHOP_ID, name: 'Hornbeam Slip', timeZone: 'Europe/Dublin', currency: 'EUR', units: 'imperial' };
     this.store.put('shop', SHOP_ID, shop);
+  }
+
+  /** What this hand's device shows once it has heard everything. */
+  viewAs(hand: Hand): View {
+    const { name } = this.store.row('person', hand.personId) as { name: string };
+    const me = { personId: hand.personId, name, roles: hand.roles, shopId: SHOP_ID, deviceId: hand.deviceId };
+    return viewOf(this.store, { me, nowMs: this.nowMs });
+  }
+
+  /** A device of a person's, as the server last heard it. */
+  device(device: Partial<DeviceRow> & Pick<DeviceRow, 'id' | 'label' | 'personIds'>): void {
+    const known = { replaces: null, lastHeardAt: null, appVersion: '0.1.0', held: null, revokedAt: null };
+    this.store.put('device', device.id, { ...known, ...device });
   }
 
   newId(): string {
