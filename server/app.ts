@@ -21,7 +21,7 @@ export function createApp(parts: AppParts): Express {
   const app = express();
   app.disable('x-powered-by');
   app.use(requestLog(parts.log), ...securityHeaders, compressed);
-  app.use('/api', apiRoutes({ ...parts, onChanged: () => {} }));
+  app.use('/api', apiRoutes({ ...parts, onChanged: (shopId, seq) => parts.hails.announce(shopId, seq) }));
   if (parts.distDir) app.use(appShell(parts.distDir));
   app.use(notFound, problemHandler);
   return app;

@@ -2,6 +2,7 @@ import path from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { pino } from 'pino';
 import { createApp } from '#server/app.ts';
+import { Hails } from '#server/hails/hails.ts';
 import { listen } from '#server/main.ts';
 import { migrate } from '#server/migrations/migrate.ts';
 import { openDatabase } from '#server/models/database.ts';
@@ -39,12 +40,15 @@ async function start(stopping: Stopping): Promise<void> {
   stopping.before(() => database.close());
 
   const ways = await waysIn(database);
-  const app = createApp({ database, now: Date.now, log: pino(), ...(distDir ? { distDir } : {}) });
+  const log = pino();
+  const hails = new Hails({ url: databaseUrl, database, log });
+  const app = createApp({ database, now: Date.now, log, hails, ...(distDir ? { distDir } : {}) });
   const { url, close } = await listen(app, environment.port, environment.host).catch((error: NodeJS.ErrnoException) => {
     throw error.code === 'EADDRINUSE' || error.code === 'EACCES' || error.code === 'EADDRNOTAVAIL'
       ? new LaunchFailure(`Cannot listen on ${environment.host}:${environment.port} (${error.code}). Set PORT or HOST.`)
       : error;
   });
   stopping.before(close);
+  stopping.before(() => hails.close()); // first of all, since its streams would hold the server open
   console.log([`Ribband is ready at ${url}`, ...ways].join('\n'));
 }

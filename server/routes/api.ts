@@ -5,6 +5,7 @@ import type { Operation } from '#server/openapi/operation.ts';
 import type { Parts } from '#server/parts.ts';
 import { boatOperations, boatRoutes } from './boats.ts';
 import { deviceOperations, deviceRoutes } from './devices.ts';
+import { eventOperations, eventRoutes } from './events.ts';
 import { firstRunOperations, firstRunRoutes } from './first-run.ts';
 import { healthOperations, healthRoutes } from './health.ts';
 import { peopleOperations, peopleRoutes } from './people.ts';
@@ -20,6 +21,7 @@ const modules: { routes: (parts: Parts) => Router; operations: Operation[] }[] =
   { routes: deviceRoutes, operations: deviceOperations },
   { routes: boatRoutes, operations: boatOperations },
   { routes: syncRoutes, operations: syncOperations },
+  { routes: eventRoutes, operations: eventOperations },
 ];
 
 export const apiOperations: Operation[] = modules.flatMap((module) => module.operations);

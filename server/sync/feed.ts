@@ -21,6 +21,13 @@ export async function numberRows(transaction: Transaction, shopId: string, count
   return { first: shop.seq - count + 1, last: shop.seq };
 }
 
+/** The last number given in the shop's feed. */
+export async function feedSeq(transaction: Transaction, shopId: string): Promise<number> {
+  const [shop] = await query<{ seq: number }>(transaction, 'SELECT seq FROM shops WHERE shop_id = $1', [shopId]);
+  if (!shop) throw new Error(`There is no shop ${shopId} in this transaction.`);
+  return shop.seq;
+}
+
 /** Holds the shop's row until the transaction ends, as `numberRows` does; other tables may still refer to it. */
 export async function lockShop(transaction: Transaction, shopId: string): Promise<{ timeZone: string }> {
   const [shop] = await query<{ timeZone: string }>(

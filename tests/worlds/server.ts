@@ -1,6 +1,7 @@
 import type { Express } from 'express';
 import { pino } from 'pino';
 import { createApp } from '#server/app.ts';
+import { Hails } from '#server/hails/hails.ts';
 import { listen } from '#server/main.ts';
 import type { Database } from '#server/models/database.ts';
 import { makeClock } from './clock.ts';
@@ -19,6 +20,7 @@ export type TestServer = {
   app: Express;
   database: Database;
   databaseUrl: string;
+  hails: Hails;
   clock: Clock;
   close: () => Promise<void>;
 };
@@ -27,11 +29,13 @@ export type TestServer = {
 export async function startServer({ clock = makeClock(), distDir }: ServerOptions = {}): Promise<TestServer> {
   const { database, url: databaseUrl, drop } = await createTestDatabase();
   const log = pino({ level: process.env.RIBBAND_TEST_LOG ?? 'silent' });
-  const app = createApp({ database, now: clock.now, log, ...(distDir ? { distDir } : {}) });
+  const hails = new Hails({ url: databaseUrl, database, log });
+  const app = createApp({ database, now: clock.now, log, hails, ...(distDir ? { distDir } : {}) });
   const { url, close: closeServer } = await listen(app, 0, '127.0.0.1');
   const close = async () => {
+    await hails.close();
     await closeServer();
     await drop();
   };
-  return { url, app, database, databaseUrl, clock, close };
+  return { url, app, database, databaseUrl, hails, clock, close };
 }
