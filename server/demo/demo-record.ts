@@ -32,8 +32,8 @@ export interface DemoDeviceLine {
 }
 
 /** A shop's four weeks as ops in the order in which the server hears them, and what stands beside the record. */
-export interface DemoRecord {
-  people: Map<PersonKey, string>;
+export interface DemoRecord<Key extends string = PersonKey> {
+  people: Map<Key, string>;
   devices: DemoDeviceLine[];
   owners: { boatId: string; personId: string }[];
   batches: DemoBatch[];

@@ -6,6 +6,7 @@ import { Hails } from '#server/hails/hails.ts';
 import { listen } from '#server/main.ts';
 import { migrate } from '#server/migrations/migrate.ts';
 import { openDatabase } from '#server/models/database.ts';
+import { judgeAllAgain } from '#server/sync/judge-again.ts';
 import { claimDataFolder } from './data-folder.ts';
 import { readEnvironment } from './environment.ts';
 import { LaunchFailure } from './failure.ts';
@@ -39,9 +40,11 @@ async function start(stopping: Stopping): Promise<void> {
   const database = openDatabase(databaseUrl);
   stopping.before(() => database.close());
 
-  const ways = await waysIn(database);
+  const { timeZone } = Intl.DateTimeFormat().resolvedOptions();
+  const ways = await waysIn(database, { isDemoWanted: environment.isDemoWanted, nowMs: Date.now(), timeZone });
   const log = pino();
   const hails = new Hails({ url: databaseUrl, database, log });
+  await judgeAllAgain({ database, log, onChanged: (shopId, seq) => hails.announce(shopId, seq) });
   const app = createApp({ database, now: Date.now, log, hails, ...(distDir ? { distDir } : {}) });
   const { url, close } = await listen(app, environment.port, environment.host).catch((error: NodeJS.ErrnoException) => {
     throw error.code === 'EADDRINUSE' || error.code === 'EACCES' || error.code === 'EADDRNOTAVAIL'

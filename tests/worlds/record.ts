@@ -1,7 +1,7 @@
 import { MemoryStore } from '#shared/sync/memory-store.ts';
 import { mergeBatch, type Outcome } from '#shared/sync/merge.ts';
 import type { DeviceRow } from '#shared/identity/device.ts';
-import { overFor } from '#shared/sync/over.ts';
+import { fieldsOfSet, overFor } from '#shared/sync/over.ts';
 import type { Role } from '#shared/identity/role.ts';
 import { opKinds } from '#shared/sync/registry.ts';
 import type { Row } from '#shared/sync/row.ts';
@@ -92,8 +92,5 @@ export class TestRecord {
 
 function fieldsOf(kind: string, data: Record<string, unknown>): string[] {
   if (/\.(strike|restore)$/.test(kind)) return ['struck'];
-  if (!kind.endsWith('.amend')) return [];
-  const { hours = [], boatId, stageId, ...others } = data.set as Record<string, unknown> & { hours?: { personId: string }[] };
-  const isMoved = boatId !== undefined || stageId !== undefined;
-  return [...Object.keys(others), ...(isMoved ? ['stageId'] : []), ...hours.map((figure) => `hours/${figure.personId}`)];
+  return kind.endsWith('.amend') ? fieldsOfSet(data.set as Record<string, unknown>) : [];
 }
