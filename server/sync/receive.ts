@@ -2,10 +2,12 @@ import type { Transaction } from 'sequelize';
 import { mergeBatch, type Outcome } from '#shared/sync/merge.ts';
 import { isDatabaseAway } from '#server/models/database-away.ts';
 import { query } from '#server/models/query.ts';
+import { underSavepoint } from '#server/models/savepoint.ts';
 import type { Parts } from '#server/parts.ts';
 import { readBatchFrom, readDevice, type Sender } from './batch-from.ts';
 import { lockShop } from './feed.ts';
 import { hearDevice, type Heard } from './hear-device.ts';
+import { logFault } from './log-fault.ts';
 import { PostgresStore } from './postgres-store.ts';
 
 export interface Receipt {
@@ -26,7 +28,7 @@ export async function receive(parts: Parts, sender: Sender, ops: unknown[], hear
     return await mergeAs(parts, sender, heard, (transaction, store) => mergeTogether(transaction, store, sender, ops, heard.nowMs));
   } catch (error) {
     if (isDatabaseAway(error)) throw error;
-    logFault(parts, error, 'a batch could not be merged; its ops are taken one by one');
+    logFault(parts.log, error, 'a batch could not be merged; its ops are taken one by one');
     return mergeAs(parts, sender, heard, (transaction, store) => mergeApart(parts, transaction, store, sender, ops, heard.nowMs));
   }
 }
@@ -77,22 +79,13 @@ async function mergeApart(
   for (const op of ops) {
     const device = await readDevice(transaction, sender);
     const from = await readBatchFrom(transaction, sender, device, timeZone, nowMs);
-    await query(transaction, 'SAVEPOINT one_op');
     try {
-      outcomes.push(...(await mergeBatch(store, from, [op])));
+      outcomes.push(...(await underSavepoint(transaction, () => mergeBatch(store, from, [op]))));
     } catch (error) {
       if (isDatabaseAway(error)) throw error;
-      logFault(parts, error, 'an op could not be merged; it is set aside');
-      await query(transaction, 'ROLLBACK TO SAVEPOINT one_op');
+      logFault(parts.log, error, 'an op could not be merged; it is set aside');
       outcomes.push(...(await mergeBatch(store, from, [op], new Set([0]))));
     }
-    await query(transaction, 'RELEASE SAVEPOINT one_op');
   }
   return outcomes;
-}
-
-// not the error itself, to which Sequelize adds what was to be written: people's words
-function logFault({ log }: Parts, error: unknown, message: string): void {
-  const { name, stack } = error instanceof Error ? error : { name: typeof error, stack: undefined };
-  log.error({ fault: { name, stack } }, message);
 }
