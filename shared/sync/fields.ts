@@ -6,7 +6,7 @@ import type { Facts, Row, Statement, Struck } from './row.ts';
 /** Boat and stage are one field: who moves a thing moves it to a boat and a stage of hers, or none. */
 export const STAGE_FIELD = 'stageId';
 export const STRUCK_FIELD = 'struck';
-const HOURS_PREFIX = 'hours/';
+export const HOURS_PREFIX = 'hours/';
 
 type Fields = Record<string, unknown>;
 

@@ -46,14 +46,15 @@ function after(clock: Clock): Clock {
     : { ms: clock.ms + 1, counter: 0 };
 }
 
-/** The clock for something done here now. */
+/** The clock for something done here now; parts of a millisecond, as a corrected clock may have, are dropped. */
 export function tick(last: Clock | null, nowMs: number): Clock {
-  return last && last.ms >= nowMs ? after(last) : { ms: nowMs, counter: 0 };
+  const ms = Math.floor(nowMs);
+  return last && last.ms >= ms ? after(last) : { ms, counter: 0 };
 }
 
 /** The clock after hearing of `heard`, so that what is done next comes after it. */
 export function hear(last: Clock | null, heard: Clock, nowMs: number): Clock {
-  const latest = Math.max(last?.ms ?? 0, heard.ms, nowMs);
+  const latest = Math.max(last?.ms ?? 0, heard.ms, Math.floor(nowMs));
   const counters = [last, heard].filter((clock) => clock?.ms === latest).map((clock) => clock!.counter);
   return counters.length > 0 ? after({ ms: latest, counter: Math.max(...counters) }) : { ms: latest, counter: 0 };
 }
