@@ -8,17 +8,42 @@ interface NameBarProps {
   subTitle?: ReactNode;
   /** The right end: who is here, another boat, a key. */
   right?: ReactNode;
+  /** Makes the title and what stands under it one key, described by `pressWords`, for example 'other boat'. */
+  onPress?: () => void;
+  pressWords?: string;
 }
 
 /** The boat's name bar, a varnished coaming; its title is the page's heading. */
-export function NameBar({ title, subTitle, right }: NameBarProps) {
+export function NameBar({ title, subTitle, right, onPress, pressWords }: NameBarProps) {
   return (
     <div className="focus-deep flex min-h-[76px] items-center gap-3 bg-coaming px-4 pt-[calc(8px+env(safe-area-inset-top))] pb-3 text-on-coaming md:px-6 print:bg-transparent print:px-0 print:text-black">
-      <div className="min-w-0 flex-1">
+      <div className="relative min-w-0 flex-1">
         <h1 className="text-[27px] leading-[1.1] font-bold tracking-[-0.01em] break-words md:text-[32px]">
-          {title}
+          {onPress ? (
+            <button
+              type="button"
+              aria-haspopup="dialog"
+              className="text-left after:absolute after:-inset-y-2 after:inset-x-0"
+              onClick={onPress}
+            >
+              {title}
+              {pressWords !== undefined && <span className="sr-only">, {pressWords}</span>}
+            </button>
+          ) : (
+            title
+          )}
         </h1>
-        {subTitle !== undefined && <p className="text-[18px] leading-snug">{subTitle}</p>}
+        {subTitle !== undefined && (
+          <p className="text-[18px] leading-snug">
+            {subTitle}
+            {pressWords !== undefined && (
+              <span aria-hidden="true">
+                {' · '}
+                <span className="underline decoration-2 underline-offset-4">{pressWords}</span>
+              </span>
+            )}
+          </p>
+        )}
       </div>
       {right !== undefined && (
         <div className="shrink-0 text-right text-[18px] leading-snug print:hidden">{right}</div>

@@ -11,13 +11,15 @@ interface QuarterHoursProps {
   /** Null where nothing is said yet. */
   minutes: number | null;
   onChange: (minutes: number | null) => void;
+  /** Without the keys of the common figures, for one of several people. */
+  isShort?: boolean;
 }
 
 const QUARTER_MINUTES = 15;
 const COMMON_MINUTES = [60, 120, 240, 480];
 
 /** Hours by quarter-hour keys, by the common figures, or typed: `2.5`, `2 1/2`, `2:30`. */
-export function QuarterHours({ label, minutes, onChange }: QuarterHoursProps) {
+export function QuarterHours({ label, minutes, onChange, isShort = false }: QuarterHoursProps) {
   const id = useId();
   // what is being typed stands until it can be read; then the figure speaks
   const [typed, setTyped] = useState<string | null>(null);
@@ -64,19 +66,21 @@ export function QuarterHours({ label, minutes, onChange }: QuarterHoursProps) {
         />
         <IconKey icon="plus" word="A quarter hour more" isBare onClick={() => take(stepped(minutes, 1))} />
       </div>
-      <div className="grid grid-cols-4 gap-3">
-        {COMMON_MINUTES.map((common) => (
-          <button
-            key={common}
-            type="button"
-            className={`${keyLook('plain')} aria-pressed:bg-bilge aria-pressed:text-primer`}
-            aria-pressed={minutes === common}
-            onClick={() => take(common)}
-          >
-            <Hours minutes={common} />
-          </button>
-        ))}
-      </div>
+      {!isShort && (
+        <div className="grid grid-cols-4 gap-3">
+          {COMMON_MINUTES.map((common) => (
+            <button
+              key={common}
+              type="button"
+              className={`${keyLook('plain')} aria-pressed:bg-bilge aria-pressed:text-primer`}
+              aria-pressed={minutes === common}
+              onClick={() => take(common)}
+            >
+              <Hours minutes={common} />
+            </button>
+          ))}
+        </div>
+      )}
       <FieldProblem
         id={`${id}-problem`}
         problem={

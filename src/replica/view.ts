@@ -61,6 +61,8 @@ export interface View {
   /** In the shop's time zone, by corrected time. */
   today: Day;
   timeZone: string;
+  /** Corrected time when this picture was made, in milliseconds since 1970. */
+  nowMs: number;
 }
 
 type ById = ReadonlyMap<string, object>;
@@ -90,6 +92,7 @@ class KnownView implements View {
   readonly held: HeldItem[];
   readonly today: Day;
   readonly timeZone: string;
+  readonly nowMs: number;
   private readonly known: Known;
   private readonly groups: Map<string, ById>;
   private readonly lists = new Map<Entity, object[]>();
@@ -102,6 +105,7 @@ class KnownView implements View {
     this.me = { ...known.me, roles: this.rolesOf(known.me.personId) };
     const [shop] = (this.groups.get('shop')?.values() ?? []) as Iterable<RowOf['shop']>;
     this.timeZone = shop?.timeZone ?? known.deviceTimeZone;
+    this.nowMs = known.nowMs;
     this.today = dayAt(known.nowMs, this.timeZone);
     this.heldRefs = new Set(known.held.flatMap(({ op }) => changedRef(op)).map(refKey));
     this.lay(replay(this.pending(), (ref) => this.groups.get(ref.entity)?.get(ref.id)));

@@ -1,0 +1,36 @@
+import { useMemo, useState } from 'react';
+import { useReplica } from '#src/replica/hooks.tsx';
+import { DraftWriter } from '#src/routes/alongside/draft-writer.ts';
+
+export interface DraftHandle<T> {
+  draft: T;
+  /** Shows it at once and keeps it on the device. */
+  change: (next: T) => void;
+  /** Ends it: an empty one on the screen, none on the device. Resolves when that is so. */
+  clear: () => Promise<void>;
+  /** The device could not keep it, so that it lives on this screen alone. */
+  isUnkept: boolean;
+}
+
+/** A draft of this person's, as they left it, or a new one. `read` makes a draft of whatever an older version kept. */
+export function useDraft<T>(key: string, read: (kept: unknown) => T): DraftHandle<T> {
+  const replica = useReplica();
+  const [draft, setDraft] = useState(() => read(replica.draft.read(key)));
+  const [isUnkept, setUnkept] = useState(false);
+  const writer = useMemo(
+    () => new DraftWriter(replica.draft, key, () => setUnkept(true)),
+    [replica, key],
+  );
+  return {
+    draft,
+    change(next) {
+      setDraft(next);
+      void writer.keep(next);
+    },
+    clear() {
+      setDraft(read(undefined));
+      return writer.clear();
+    },
+    isUnkept,
+  };
+}
