@@ -12,7 +12,11 @@ export default defineConfig({
     projects: [
       {
         extends: true,
-        test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'], exclude: ['tests/unit/screens/**'] },
+        test: {
+          name: 'unit',
+          include: ['tests/unit/**/*.test.{ts,tsx}'],
+          exclude: ['tests/unit/screens/**'],
+        },
       },
       {
         extends: true,

@@ -36,7 +36,13 @@ async function prepare(): Promise<boolean> {
 async function runTests(): Promise<RunnerReport | null> {
   const file = path.join(os.tmpdir(), `ribband-counts-${process.pid}.json`);
   const only = process.argv.slice(2);
-  await tool('vitest/vitest.mjs', ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${file}`, ...only]);
+  await tool('vitest/vitest.mjs', [
+    'run',
+    '--reporter=default',
+    '--reporter=json',
+    `--outputFile.json=${file}`,
+    ...only,
+  ]);
   const text = await readFile(file, 'utf8').catch(() => null);
   await rm(file, { force: true });
   return text === null ? null : (JSON.parse(text) as RunnerReport);

@@ -37,7 +37,10 @@ export function runAsPostgres(program: string, args: string[], how: CommandOptio
 }
 
 /** Makes the cluster's files. They appear under their name only when whole, so a start that was cut short can begin again. */
-export async function createCluster({ programs, directory, password }: Cluster, isDurable = true): Promise<void> {
+export async function createCluster(
+  { programs, directory, password }: Cluster,
+  isDurable = true,
+): Promise<void> {
   const unfinished = `${directory}.new`;
   const passwordFile = `${directory}.password`;
   await rm(unfinished, { recursive: true, force: true });
@@ -50,12 +53,15 @@ export async function createCluster({ programs, directory, password }: Cluster, 
     ...(isDurable ? [] : ['--no-sync']),
   ]);
   await rm(passwordFile);
-  if (finished.code !== 0) throw new LaunchFailure(`PostgreSQL could not make its files in ${directory}:\n${finished.output}`);
+  if (finished.code !== 0)
+    throw new LaunchFailure(`PostgreSQL could not make its files in ${directory}:\n${finished.output}`);
   await rename(unfinished, directory);
 }
 
 async function giveToPostgres(paths: string[]): Promise<void> {
-  const [uid, gid] = await Promise.all(['-u', '-g'].map(async (what) => Number((await run('id', [what, 'postgres'])).output)));
+  const [uid, gid] = await Promise.all(
+    ['-u', '-g'].map(async (what) => Number((await run('id', [what, 'postgres'])).output)),
+  );
   for (const each of paths) await chown(each, uid!, gid!);
 }
 
@@ -76,10 +82,16 @@ export async function bringUp(cluster: Cluster): Promise<Cluster> {
 }
 
 /** Stops the cluster if it runs; sessions that are open are cut, nothing committed is lost. */
-export async function bringDown({ programs, directory }: Pick<Cluster, 'programs' | 'directory'>): Promise<void> {
+export async function bringDown({
+  programs,
+  directory,
+}: Pick<Cluster, 'programs' | 'directory'>): Promise<void> {
   if ((await runningPostmaster(directory)) === null) return;
   const how = ['-D', directory, '-w', '-t', '60', '-m', 'fast', 'stop'];
-  const { code, output } = await runAsPostgres(path.join(programs.bin, 'pg_ctl'), how, { isLeftToFinish: true, isPartOfStop: true });
+  const { code, output } = await runAsPostgres(path.join(programs.bin, 'pg_ctl'), how, {
+    isLeftToFinish: true,
+    isPartOfStop: true,
+  });
   if (code !== 0) throw new LaunchFailure(`PostgreSQL in ${directory} does not stop:\n${output}`);
 }
 
@@ -87,14 +99,23 @@ async function start(cluster: Cluster): Promise<void> {
   const { programs, directory, port, settings = {} } = cluster;
   await waitForOrphans(directory);
   await dropForeignPid(directory);
-  const all = { listen_addresses: '127.0.0.1', port: String(port), unix_socket_directories: "''", ...settings };
+  const all = {
+    listen_addresses: '127.0.0.1',
+    port: String(port),
+    unix_socket_directories: "''",
+    ...settings,
+  };
   const options = Object.entries(all).map(([name, value]) => `-c ${name}=${value}`);
   const log = path.join(directory, 'server.log');
   const how = ['-D', directory, '-w', '-t', '30', '-l', log, '-o', options.join(' '), 'start'];
-  const { code, output } = await runAsPostgres(path.join(programs.bin, 'pg_ctl'), how, { isLeftToFinish: true });
+  const { code, output } = await runAsPostgres(path.join(programs.bin, 'pg_ctl'), how, {
+    isLeftToFinish: true,
+  });
   // a long recovery outlasts the wait above; then it is there, only not ready
   if (code !== 0 && (await runningPostmaster(directory)) === null)
-    throw new LaunchFailure(`PostgreSQL does not start in ${directory}:\n${output}\n${await logTail(cluster)}`);
+    throw new LaunchFailure(
+      `PostgreSQL does not start in ${directory}:\n${output}\n${await logTail(cluster)}`,
+    );
 }
 
 // after a hard kill of the postmaster its children need a moment to notice, and it refuses to start beside them

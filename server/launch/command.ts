@@ -22,9 +22,19 @@ let isStopping = false;
 
 /** Runs a program to its end. The code is 127 where it cannot be started, 128 where a signal or a stop ended it. */
 export async function run(program: string, args: string[], options: CommandOptions = {}): Promise<Finished> {
-  const { output = 'keep', cwd = '/', env = process.env, isLeftToFinish = false, isPartOfStop = false } = options;
+  const {
+    output = 'keep',
+    cwd = '/',
+    env = process.env,
+    isLeftToFinish = false,
+    isPartOfStop = false,
+  } = options;
   if (isStopping && !isPartOfStop) return { code: SIGNALLED, output: 'stopped' };
-  const child = spawn(program, args, { cwd, env, stdio: output === 'show' ? 'inherit' : ['ignore', 'pipe', 'pipe'] });
+  const child = spawn(program, args, {
+    cwd,
+    env,
+    stdio: output === 'show' ? 'inherit' : ['ignore', 'pipe', 'pipe'],
+  });
   const command = { child, finished: untilClosed(child), isLeftToFinish };
   running.add(command);
   return command.finished.finally(() => running.delete(command));

@@ -8,7 +8,13 @@ const projectDir = path.resolve(fileURLToPath(import.meta.url), '../../..');
 const node = (...args: string[]) => spawn(process.execPath, args, { cwd: projectDir, stdio: 'inherit' });
 
 const children = [
-  node('node_modules/tsx/dist/cli.mjs', 'watch', '--clear-screen=false', 'server/launch/start.ts', '--api-only'),
+  node(
+    'node_modules/tsx/dist/cli.mjs',
+    'watch',
+    '--clear-screen=false',
+    'server/launch/start.ts',
+    '--api-only',
+  ),
   node('node_modules/vite/bin/vite.js'),
 ];
 

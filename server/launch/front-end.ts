@@ -5,7 +5,15 @@ import path from 'node:path';
 import { run } from './command.ts';
 import { LaunchFailure } from './failure.ts';
 
-const SOURCES = ['src', 'shared', 'public', 'index.html', 'vite.config.ts', 'tailwind.config.ts', 'package-lock.json'];
+const SOURCES = [
+  'src',
+  'shared',
+  'public',
+  'index.html',
+  'vite.config.ts',
+  'tailwind.config.ts',
+  'package-lock.json',
+];
 const STAMP = '.sources';
 
 /** Builds the front end into dist/ unless what is there was built from the very same sources. Returns dist's path. */
@@ -51,7 +59,9 @@ function ignore(...codes: string[]): (error: NodeJS.ErrnoException) => false {
 
 async function hashOf(projectDir: string): Promise<string> {
   const hash = createHash('sha256');
-  for (const file of (await Promise.all(SOURCES.map((name) => filesUnder(path.join(projectDir, name))))).flat()) {
+  for (const file of (
+    await Promise.all(SOURCES.map((name) => filesUnder(path.join(projectDir, name))))
+  ).flat()) {
     hash.update(`${path.relative(projectDir, file)}\0`).update(await readFile(file));
   }
   return hash.digest('hex');

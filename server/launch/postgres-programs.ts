@@ -24,14 +24,20 @@ export async function findPrograms(wantedMajor: number | null): Promise<Programs
   await withoutPackagedCluster();
   await installPackages([packageName]);
   const installed = await present(wantedMajor);
-  if (!installed) throw new LaunchFailure(`${packageName} was installed, but no PostgreSQL ${MAJOR_MIN} or newer came of it.`);
+  if (!installed)
+    throw new LaunchFailure(
+      `${packageName} was installed, but no PostgreSQL ${MAJOR_MIN} or newer came of it.`,
+    );
   return installed;
 }
 
 /** Installs Debian packages; throws a LaunchFailure when apt-get does not manage. */
 export async function installPackages(names: string[]): Promise<void> {
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
-  for (const args of [['update', '-q'], ['install', '-q', '-y', '--no-install-recommends', ...names]]) {
+  for (const args of [
+    ['update', '-q'],
+    ['install', '-q', '-y', '--no-install-recommends', ...names],
+  ]) {
     const { code } = await run('apt-get', args, { output: 'show', env });
     if (code !== 0) throw new LaunchFailure(`apt-get ${args.join(' ')} failed; see the lines above.`);
   }
@@ -64,7 +70,9 @@ async function packaged(): Promise<Programs[]> {
 }
 
 async function onPath(): Promise<Programs[]> {
-  const folders = (process.env.PATH ?? '').split(path.delimiter).filter((folder) => existsSync(path.join(folder, 'initdb')));
+  const folders = (process.env.PATH ?? '')
+    .split(path.delimiter)
+    .filter((folder) => existsSync(path.join(folder, 'initdb')));
   const found = await Promise.all(
     folders.map(async (bin) => {
       const { output } = await run(path.join(bin, 'postgres'), ['--version']);

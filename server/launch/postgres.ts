@@ -4,7 +4,14 @@ import { mkdir, readFile, rename, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import pg from 'pg';
 import { z } from 'zod';
-import { bringDown, bringUp, clusterUrl, createCluster, runAsPostgres, runningPostmaster } from './cluster.ts';
+import {
+  bringDown,
+  bringUp,
+  clusterUrl,
+  createCluster,
+  runAsPostgres,
+  runningPostmaster,
+} from './cluster.ts';
 import type { Cluster } from './cluster.ts';
 import { LaunchFailure } from './failure.ts';
 import { freePort, isFree } from './free-port.ts';
@@ -21,7 +28,10 @@ type Remembered = z.infer<typeof rememberedSchema>;
  * Brings up the PostgreSQL cluster that belongs to the data folder, making it the first time.
  * Returns the URL of the database; `onStop` is told how to stop the cluster before anything is started.
  */
-export async function ownPostgres(dataDir: string, onStop: (stop: () => Promise<void>) => void): Promise<string> {
+export async function ownPostgres(
+  dataDir: string,
+  onStop: (stop: () => Promise<void>) => void,
+): Promise<string> {
   const file = path.join(dataDir, 'postgres.json');
   const known = await recall(file);
   const directory = known?.directory ?? (await placeFor(dataDir));
@@ -42,7 +52,8 @@ export async function ownPostgres(dataDir: string, onStop: (stop: () => Promise<
 async function recall(file: string): Promise<Remembered | null> {
   if (!existsSync(file)) return null;
   const read = rememberedSchema.safeParse(JSON.parse(await readFile(file, 'utf8')));
-  if (!read.success) throw new LaunchFailure(`${file} cannot be read; it says where the database is and its password.`);
+  if (!read.success)
+    throw new LaunchFailure(`${file} cannot be read; it says where the database is and its password.`);
   return read.data;
 }
 

@@ -41,16 +41,24 @@ async function start(stopping: Stopping): Promise<void> {
   stopping.before(() => database.close());
 
   const { timeZone } = Intl.DateTimeFormat().resolvedOptions();
-  const ways = await waysIn(database, { isDemoWanted: environment.isDemoWanted, nowMs: Date.now(), timeZone });
+  const ways = await waysIn(database, {
+    isDemoWanted: environment.isDemoWanted,
+    nowMs: Date.now(),
+    timeZone,
+  });
   const log = pino();
   const hails = new Hails({ url: databaseUrl, database, log });
   await judgeAllAgain({ database, log, onChanged: (shopId, seq) => hails.announce(shopId, seq) });
   const app = createApp({ database, now: Date.now, log, hails, ...(distDir ? { distDir } : {}) });
-  const { url, close } = await listen(app, environment.port, environment.host).catch((error: NodeJS.ErrnoException) => {
-    throw error.code === 'EADDRINUSE' || error.code === 'EACCES' || error.code === 'EADDRNOTAVAIL'
-      ? new LaunchFailure(`Cannot listen on ${environment.host}:${environment.port} (${error.code}). Set PORT or HOST.`)
-      : error;
-  });
+  const { url, close } = await listen(app, environment.port, environment.host).catch(
+    (error: NodeJS.ErrnoException) => {
+      throw error.code === 'EADDRINUSE' || error.code === 'EACCES' || error.code === 'EADDRNOTAVAIL'
+        ? new LaunchFailure(
+            `Cannot listen on ${environment.host}:${environment.port} (${error.code}). Set PORT or HOST.`,
+          )
+        : error;
+    },
+  );
   stopping.before(close);
   stopping.before(() => hails.close()); // first of all, since its streams would hold the server open
   console.log([`Ribband is ready at ${url}`, ...ways].join('\n'));

@@ -29,7 +29,9 @@ export function appShell(distDir: string): Router {
 
 // a missing picture or script must be a 404, not the app's page under a wrong name
 function isNavigation(request: Request): boolean {
-  return path.extname(request.path) === '' && request.accepts(['html', 'json']) === 'html' && wantsHtml(request);
+  return (
+    path.extname(request.path) === '' && request.accepts(['html', 'json']) === 'html' && wantsHtml(request)
+  );
 }
 
 function wantsHtml(request: Request): boolean {

@@ -27,7 +27,12 @@ const TITLES: Record<number, string> = {
   503: 'Not ready',
 };
 
-type ProblemExtras = { title?: string; issues?: Issue[]; headers?: Record<string, string>; more?: Record<string, unknown> };
+type ProblemExtras = {
+  title?: string;
+  issues?: Issue[];
+  headers?: Record<string, string>;
+  more?: Record<string, unknown>;
+};
 
 /** Throw it anywhere below a route; `more` are members of the answer beyond those of RFC 9457. */
 export class Problem extends Error {
@@ -59,7 +64,10 @@ export function parseBody<Schema extends z.ZodType>(schema: Schema, value: unkno
 function issuesFromZod(issue: z.core.$ZodIssue): Issue[] {
   const at = issue.path.map(String);
   if (issue.code !== 'unrecognized_keys') return [{ path: at.join('.'), message: issue.message }];
-  return issue.keys.map((key) => ({ path: [...at, key].join('.'), message: 'This field is not known here.' }));
+  return issue.keys.map((key) => ({
+    path: [...at, key].join('.'),
+    message: 'This field is not known here.',
+  }));
 }
 
 export const notFound: RequestHandler = (request) => {

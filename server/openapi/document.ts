@@ -32,7 +32,10 @@ function describe(operation: Operation): Json {
     parameters: [...pathParameters(operation.path), ...queryParameters(operation.query)],
     ...(body ? { requestBody: requestBody(body, operation.bodyType) } : {}),
     responses: Object.fromEntries(
-      Object.entries(operation.responses).map(([status, answer]) => [status, response(Number(status), answer)]),
+      Object.entries(operation.responses).map(([status, answer]) => [
+        status,
+        response(Number(status), answer),
+      ]),
     ),
   };
 }

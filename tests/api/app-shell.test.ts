@@ -20,20 +20,29 @@ afterAll(async () => {
   await rm(distDir, { recursive: true });
 });
 
-const navigate = (to: string) => fetch(server.url + to, { headers: { Accept: 'text/html,application/xhtml+xml,*/*;q=0.8' } });
+const navigate = (to: string) =>
+  fetch(server.url + to, { headers: { Accept: 'text/html,application/xhtml+xml,*/*;q=0.8' } });
 
-test.each(['/', '/day-sheet/2026-06-01', '/entries/0190c5a0'])('a person who opens %s gets the app, asked for anew each time', async (to) => {
-  const response = await navigate(to);
-  expect(await response.text()).toContain('the app');
-  expect([response.status, response.headers.get('Cache-Control')]).toEqual([200, 'no-cache']);
-});
+test.each(['/', '/day-sheet/2026-06-01', '/entries/0190c5a0'])(
+  'a person who opens %s gets the app, asked for anew each time',
+  async (to) => {
+    const response = await navigate(to);
+    expect(await response.text()).toContain('the app');
+    expect([response.status, response.headers.get('Cache-Control')]).toEqual([200, 'no-cache']);
+  },
+);
 
-test.each(['/assets/gone-9f9f.js', '/robots.txt', '/icons/none.png'])('%s is missing and says so', async (to) => {
-  expect((await navigate(to)).status).toBe(404);
-});
+test.each(['/assets/gone-9f9f.js', '/robots.txt', '/icons/none.png'])(
+  '%s is missing and says so',
+  async (to) => {
+    expect((await navigate(to)).status).toBe(404);
+  },
+);
 
 test('a program that asks for no page gets none', async () => {
-  expect((await fetch(`${server.url}/day-sheet`, { headers: { Accept: 'application/json' } })).status).toBe(404);
+  expect((await fetch(`${server.url}/day-sheet`, { headers: { Accept: 'application/json' } })).status).toBe(
+    404,
+  );
 });
 
 test('hashed files are kept for ever and travel compressed, the worker is asked for anew', async () => {

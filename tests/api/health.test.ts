@@ -23,7 +23,10 @@ test('an unknown path of the API is a problem, never the app', async () => {
 });
 
 test('the contract is served as OpenAPI 3.1', async () => {
-  const document = (await (await fetch(`${server.url}/api/openapi.json`)).json()) as { openapi: string; paths: object };
+  const document = (await (await fetch(`${server.url}/api/openapi.json`)).json()) as {
+    openapi: string;
+    paths: object;
+  };
   expect(document.openapi).toBe('3.1.0');
   expect(document.paths).toHaveProperty(['/api/health', 'get', 'responses', '503']);
 });

@@ -9,7 +9,10 @@ import { parseBody, Problem, problemHandler } from '#server/middleware/problem.t
 const BYTES_MAX = 1024 * 1024;
 const app = express()
   .post('/', jsonBody(BYTES_MAX), (req, res) => {
-    const { text } = parseBody(z.strictObject({ text: z.string(), at: z.object({ day: z.iso.date() }).optional() }), req.body);
+    const { text } = parseBody(
+      z.strictObject({ text: z.string(), at: z.object({ day: z.iso.date() }).optional() }),
+      req.body,
+    );
     res.json({ length: text.length });
   })
   .get('/busy', () => {

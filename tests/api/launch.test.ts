@@ -83,7 +83,9 @@ test('a data folder that the postgres user cannot enter still works, and it says
   const dataDir = await dataFolder();
   await mkdir(dataDir, { mode: 0o700 });
   const launched = await started(dataDir);
-  const { directory } = JSON.parse(await readFile(path.join(dataDir, 'postgres.json'), 'utf8')) as { directory: string };
+  const { directory } = JSON.parse(await readFile(path.join(dataDir, 'postgres.json'), 'utf8')) as {
+    directory: string;
+  };
   const isElsewhere = path.dirname(directory) === '/var/lib/ribband';
   if (isElsewhere) cleanUps.unshift(() => rm(directory, { recursive: true }));
   expect(await isHealthy(launched)).toBe(true);
@@ -121,7 +123,11 @@ test('an empty start prints a code that makes the first shop, once; later starts
     person: { name: 'Ada Holm', email: 'ada@slipnine.test', password: 'larch on oak frames' },
   });
   const ask = () =>
-    fetch(`${first.url}/api/first-run`, { method: 'POST', headers: { 'Content-Type': 'application/json' }, body });
+    fetch(`${first.url}/api/first-run`, {
+      method: 'POST',
+      headers: { 'Content-Type': 'application/json' },
+      body,
+    });
   expect((await ask()).status).toBe(201);
   expect((await ask()).status).toBe(409);
   await stopped(first);

@@ -16,11 +16,17 @@ test('a clean run names two figures', () => {
 });
 
 test('skipped tests are named only where there are some', () => {
-  expect(countsLine(countTests({ ...clean, numPendingTests: 1, numTodoTests: 1 }))).toBe('3 passed, 0 failed, 2 skipped');
+  expect(countsLine(countTests({ ...clean, numPendingTests: 1, numTodoTests: 1 }))).toBe(
+    '3 passed, 0 failed, 2 skipped',
+  );
 });
 
 test('a file that cannot be loaded is a failure', () => {
-  const counts = countTests({ ...clean, success: false, testResults: [passedFile, { status: 'failed', assertionResults: [] }] });
+  const counts = countTests({
+    ...clean,
+    success: false,
+    testResults: [passedFile, { status: 'failed', assertionResults: [] }],
+  });
   expect(countsLine(counts)).toBe('3 passed, 1 failed');
   expect(counts.isSuccess).toBe(false);
 });

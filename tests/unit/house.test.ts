@@ -22,7 +22,9 @@ function sourcesIn(folder: string): Source[] {
 
 /** Every import as a path from the project's root, or a package's name. */
 function importsOf(file: string, text: string): string[] {
-  const named = [...text.matchAll(/(?:\bfrom|\bimport|\bimport\()\s*['"]([^'"]+)['"]/g)].map(([, name]) => name!);
+  const named = [...text.matchAll(/(?:\bfrom|\bimport|\bimport\()\s*['"]([^'"]+)['"]/g)].map(
+    ([, name]) => name!,
+  );
   return named.map((name) => {
     if (name.startsWith('.')) return path.posix.join(path.posix.dirname(file), name);
     return name.replace(/^#/, '');
@@ -31,7 +33,9 @@ function importsOf(file: string, text: string): string[] {
 
 function crossings(sources: Source[], isForbidden: (imported: string, file: string) => boolean): string[] {
   return sources.flatMap(({ file, imports }) =>
-    imports.filter((imported) => isForbidden(imported, file)).map((imported) => `${file} imports ${imported}`),
+    imports
+      .filter((imported) => isForbidden(imported, file))
+      .map((imported) => `${file} imports ${imported}`),
   );
 }
 
@@ -56,7 +60,8 @@ describe('who imports whom', () => {
   });
 
   test('shared imports itself and a few pure packages', () => {
-    const isPure = (name: string) => SHARED_PACKAGES.some((pure) => name === pure || name.startsWith(`${pure}/`));
+    const isPure = (name: string) =>
+      SHARED_PACKAGES.some((pure) => name === pure || name.startsWith(`${pure}/`));
     expect(crossings(shared, (imported) => !imported.startsWith('shared/') && !isPure(imported))).toEqual([]);
   });
 
@@ -75,7 +80,8 @@ describe('who imports whom', () => {
   });
 
   test('only the replica touches IndexedDB', () => {
-    const touches = ({ file, text }: Source) => !file.startsWith('src/replica/') && /\bindexedDB\b|idb-keyval/.test(text);
+    const touches = ({ file, text }: Source) =>
+      !file.startsWith('src/replica/') && /\bindexedDB\b|idb-keyval/.test(text);
     expect(src.filter(touches).map(({ file }) => file)).toEqual([]);
   });
 });
@@ -93,7 +99,8 @@ describe('names and sizes', () => {
 
   test('imports of our own files say their extension', () => {
     const isBare = (imported: string) =>
-      /^(shared|server|src|tests)\//.test(imported) && !/\.(tsx?|m?js|css|json|svg|woff2)(\?\w+)?$/.test(imported);
+      /^(shared|server|src|tests)\//.test(imported) &&
+      !/\.(tsx?|m?js|css|json|svg|woff2)(\?\w+)?$/.test(imported);
     expect(crossings([...product, ...tests], isBare)).toEqual([]);
   });
 

@@ -35,7 +35,14 @@ export type Launched = {
 /** The real `npm start`, once it says that it is ready; rejects with what it printed if it ends before. */
 export async function launch(dataDir: string, variables: Record<string, string> = {}): Promise<Launched> {
   const { PATH, HOME } = process.env;
-  const env = { PATH, HOME, HOST: '127.0.0.1', PORT: String(await freePort()), RIBBAND_DATA: dataDir, ...variables };
+  const env = {
+    PATH,
+    HOME,
+    HOST: '127.0.0.1',
+    PORT: String(await freePort()),
+    RIBBAND_DATA: dataDir,
+    ...variables,
+  };
   const npm = spawn('npm', ['start'], { cwd: projectDir, env, stdio: ['ignore', 'pipe', 'pipe'] });
   const exited = once(npm, 'close'); // 'exit' may come before the last lines
   const lines: string[] = [];

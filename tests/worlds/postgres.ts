@@ -33,7 +33,8 @@ export async function prepareTemplate(): Promise<void> {
 
 /** Drops a test's database with whoever is still connected to it; refuses any other. */
 export async function dropTestDatabase(name: string): Promise<void> {
-  if (!new RegExp(`^${PREFIX}\\w+$`).test(name)) throw new Error(`${name} is not a test's database; it is left alone.`);
+  if (!new RegExp(`^${PREFIX}\\w+$`).test(name))
+    throw new Error(`${name} is not a test's database; it is left alone.`);
   await inCluster(`DROP DATABASE IF EXISTS ${name} WITH (FORCE)`);
 }
 
@@ -45,7 +46,8 @@ function urlOf(name: string): string {
 
 function clusterUrl(): string {
   const url = process.env[CLUSTER_URL];
-  if (!url) throw new Error(`${CLUSTER_URL} is not set: this test belongs to a project without the test PostgreSQL.`);
+  if (!url)
+    throw new Error(`${CLUSTER_URL} is not set: this test belongs to a project without the test PostgreSQL.`);
   return url;
 }
 
