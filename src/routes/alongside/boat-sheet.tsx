@@ -50,7 +50,11 @@ function OpenBoatSheet({ where, onClose, onChoose }: Omit<BoatSheetProps, 'isOpe
   );
 }
 
-function Stages({ boat, where, onChoose }: { boat: BoatToChoose } & Pick<BoatSheetProps, 'where' | 'onChoose'>) {
+function Stages({
+  boat,
+  where,
+  onChoose,
+}: { boat: BoatToChoose } & Pick<BoatSheetProps, 'where' | 'onChoose'>) {
   return (
     <div role="group" aria-label={`Stages of ${boat.name}`} className="grid gap-3">
       <h3 className="pt-1 font-semibold">Her stage</h3>

@@ -17,10 +17,7 @@ export function useDraft<T>(key: string, read: (kept: unknown) => T): DraftHandl
   const replica = useReplica();
   const [draft, setDraft] = useState(() => read(replica.draft.read(key)));
   const [isUnkept, setUnkept] = useState(false);
-  const writer = useMemo(
-    () => new DraftWriter(replica.draft, key, () => setUnkept(true)),
-    [replica, key],
-  );
+  const writer = useMemo(() => new DraftWriter(replica.draft, key, () => setUnkept(true)), [replica, key]);
   return {
     draft,
     change(next) {

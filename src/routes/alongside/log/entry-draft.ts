@@ -1,27 +1,35 @@
-import type { HoursGiven, HoursKind } from '#shared/entry/hours.ts';
-import type { Day } from '#shared/sync/day.ts';
+import { z } from 'zod';
+import { hoursKindSchema, type HoursGiven } from '#shared/entry/hours.ts';
+import { daySchema, type Day } from '#shared/sync/day.ts';
+import { newIdSchema } from '#shared/sync/ids.ts';
 import { TEXT_UNITS_MAX } from '#shared/sync/op.ts';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 
 export const DRAFT_KEY = 'log';
 
-/** Somebody who worked along; no minutes of their own means: as long as I did. */
-export interface Along {
-  personId: string;
-  minutes: number | null;
-}
-
-/** What is on the form before 'Log it'. Its ids are made with it, so that a log cut off halfway is not made twice. */
-export interface EntryDraft extends Where {
-  entryId: string;
-  text: string;
-  workDate: Day;
-  minutes: number | null;
-  kind: HoursKind | null;
-  along: Along[];
-  ticked: { taskId: string; markId: string }[];
+/**
+ * What is on the form before 'Log it'. Its ids are made with it, so that a log cut off halfway is not made twice.
+ * A part that an older version kept differently is left out, never the words.
+ */
+const draftSchema = z.object({
+  entryId: newIdSchema,
+  boatId: z.string(),
+  stageId: z.string().nullable().catch(null),
+  text: z.string(),
+  workDate: daySchema,
+  minutes: z.int().nullable().catch(null),
+  kind: hoursKindSchema.nullable().catch(null),
+  /** who worked along; no minutes of their own means: as long as I did */
+  along: z.array(z.object({ personId: z.string(), minutes: z.int().nullable() })).catch([]),
+  ticked: z.array(z.object({ taskId: z.string(), markId: newIdSchema })).catch([]),
   /** ISO time of the last change; null while nothing is on it */
-  keptAt: string | null;
+  keptAt: z.string().nullable().catch(null),
+});
+export type EntryDraft = z.infer<typeof draftSchema>;
+
+/** A draft as it was kept; undefined where there is none that can be read. */
+export function readDraft(kept: unknown): EntryDraft | undefined {
+  return draftSchema.safeParse(kept).data;
 }
 
 /** An empty form at a place and day. */
@@ -77,4 +85,10 @@ export function tooLongWords(text: string): string | undefined {
   const over = text.trim().length - TEXT_UNITS_MAX;
   if (over <= 0) return undefined;
   return `That is ${over} characters too many for one entry. Nothing is lost: cut the end out, log this, and put the rest into a second entry.`;
+}
+
+/** What a part of the form is given: the draft, and the way to change some of it. */
+export interface DraftFields {
+  draft: EntryDraft;
+  change: (next: Partial<EntryDraft>) => void;
 }

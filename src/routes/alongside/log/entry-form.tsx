@@ -1,0 +1,118 @@
+import { useState } from 'react';
+import { BackBar } from '#src/components/back-bar.tsx';
+import { Key } from '#src/components/key.tsx';
+import { Notice } from '#src/components/notice.tsx';
+import { KeyRack, Page } from '#src/components/page.tsx';
+import { TextBox } from '#src/components/text-box.tsx';
+import { Undo } from '#src/components/undo.tsx';
+import { useRead } from '#src/replica/hooks.tsx';
+import { BoatSheet } from '#src/routes/alongside/boat-sheet.tsx';
+import { AlongFields } from '#src/routes/alongside/log/along-fields.tsx';
+import { draftProblems, isWorthKeeping, tooLongWords } from '#src/routes/alongside/log/entry-draft.ts';
+import type { Logged } from '#src/routes/alongside/log/logged-undo.tsx';
+import { OwnHours } from '#src/routes/alongside/log/own-hours.tsx';
+import { readLog } from '#src/routes/alongside/log/read-log.ts';
+import { TickFields } from '#src/routes/alongside/log/tick-fields.tsx';
+import { useEntryForm } from '#src/routes/alongside/log/use-entry-form.ts';
+import type { Where } from '#src/routes/alongside/read-boats.ts';
+import { DayChoice } from '#src/components/day-choice.tsx';
+import { dayWords, momentWords } from '#src/words/day-words.ts';
+
+interface EntryFormProps {
+  /** where the work was, unless a draft says otherwise */
+  where: Where;
+  onMove: (where: Where) => void;
+  onLogged: (logged: Logged) => void;
+}
+
+/** What was done, in how long, with whom: kept on the device at every keystroke until it is logged. */
+export function EntryForm({ where, onMove, onLogged }: EntryFormProps) {
+  const form = useEntryForm(where, onLogged);
+  const { draft, change } = form;
+  const here = { boatId: draft.boatId, stageId: draft.stageId };
+  const shown = useRead(['log', here], (view) => readLog(view, here));
+  const { me, timeZone } = useRead(['me'], (view) => ({ me: view.me.personId, timeZone: view.timeZone }));
+  const [isMoving, setMoving] = useState(false);
+  const problems = form.isAsked ? draftProblems(draft, me) : { text: tooLongWords(draft.text) };
+
+  return (
+    <Page
+      bars={
+        <>
+          <title>Log it · Ribband</title>
+          <BackBar
+            title={shown.boatName}
+            subTitle={shown.stageName}
+            to="/alongside"
+            backWord="Back to Alongside; your words are kept"
+            right={
+              <Key kind="onDeep" onClick={() => setMoving(true)}>
+                Other boat
+              </Key>
+            }
+          />
+        </>
+      }
+      foot={
+        <KeyRack>
+          {form.emptied && (
+            <div className="-mx-3 -mt-3">
+              <Undo words="The form is empty" onUndo={form.bringBack} onGone={form.forgetEmptied} />
+            </div>
+          )}
+          {form.failure && <Notice tone="error">{form.failure}</Notice>}
+          <Key kind="main" icon="entry" isGreat disabled={form.isLogging} onClick={form.log}>
+            Log it
+          </Key>
+        </KeyRack>
+      }
+    >
+      <form className="grid gap-5 p-4 pb-8 md:p-6" onSubmit={(event) => event.preventDefault()}>
+        {form.restoredAt && (
+          <p className="text-slate">
+            Kept since {momentWords(form.restoredAt, timeZone, shown.today)}, as you left it.
+          </p>
+        )}
+        {form.isUnkept && (
+          <Notice tone="error">
+            This device has no room to keep what you write. Log it before you leave this screen.
+          </Notice>
+        )}
+        <TextBox
+          label="What did you do?"
+          rows={5}
+          autoFocus
+          value={draft.text}
+          onChange={(text) => change({ text })}
+          problem={problems.text}
+        />
+        <OwnHours draft={draft} change={change} />
+        <DayChoice
+          label="Which day was it?"
+          today={shown.today}
+          yesterday={shown.yesterday}
+          value={draft.workDate}
+          onChange={(workDate) => change({ workDate })}
+          words={(day) => dayWords(day, shown.today)}
+        />
+        <AlongFields draft={draft} change={change} people={shown.people} problem={problems.along} />
+        <TickFields draft={draft} change={change} shown={shown} newId={form.newId} />
+        {isWorthKeeping(draft) && (
+          <Key kind="quiet" onClick={form.empty}>
+            Empty the form
+          </Key>
+        )}
+      </form>
+      <BoatSheet
+        isOpen={isMoving}
+        where={here}
+        onClose={() => setMoving(false)}
+        onChoose={(chosen) => {
+          change(chosen);
+          onMove(chosen);
+          setMoving(false);
+        }}
+      />
+    </Page>
+  );
+}

@@ -1,0 +1,79 @@
+import { useState } from 'react';
+import { useMutation } from '@tanstack/react-query';
+import { useReplica } from '#src/replica/hooks.tsx';
+import type { Replica } from '#src/replica/replica.ts';
+import {
+  DRAFT_KEY,
+  draftProblems,
+  emptyDraft,
+  isWorthKeeping,
+  readDraft,
+  type EntryDraft,
+} from '#src/routes/alongside/log/entry-draft.ts';
+import { logEntry, untickedYet } from '#src/routes/alongside/log/log-entry.ts';
+import type { Logged } from '#src/routes/alongside/log/logged-undo.tsx';
+import type { Where } from '#src/routes/alongside/read-boats.ts';
+import { useDraft } from '#src/routes/alongside/use-draft.ts';
+
+/** The form's draft and what can be done with it. */
+export function useEntryForm(where: Where, onLogged: (logged: Logged) => void) {
+  const replica = useReplica();
+  const { draft, change, clear, isUnkept } = useDraft(DRAFT_KEY, (kept) => openDraft(replica, where, kept));
+  const [restoredAt, setRestoredAt] = useState(draft.keptAt);
+  const [emptied, setEmptied] = useState<EntryDraft | null>(null);
+  const [isAsked, setAsked] = useState(false);
+  const logging = useMutation({
+    mutationFn: async () => {
+      const logged = await logEntry(replica, draft);
+      await clear();
+      return logged;
+    },
+    networkMode: 'always',
+    retry: false,
+    onSuccess: onLogged,
+  });
+
+  function log() {
+    setAsked(true);
+    if (Object.keys(draftProblems(draft, replica.view().me.personId)).length === 0) logging.mutate();
+  }
+
+  return {
+    draft,
+    isUnkept,
+    /** when the draft that was found here was last changed; null for a new one */
+    restoredAt,
+    /** 'Log it' was pressed, so that what is missing is told */
+    isAsked,
+    isLogging: logging.isPending,
+    failure: logging.error?.message ?? null,
+    emptied,
+    newId: () => replica.newId(),
+    change(next: Partial<EntryDraft>) {
+      change({ ...draft, ...next, keptAt: new Date(replica.view().nowMs).toISOString() });
+    },
+    log,
+    empty() {
+      setEmptied(draft);
+      setRestoredAt(null);
+      setAsked(false);
+      void clear();
+    },
+    bringBack() {
+      if (emptied) change(emptied);
+      setEmptied(null);
+    },
+    forgetEmptied: () => setEmptied(null),
+  };
+}
+
+/** The draft as it was left; a new one where nothing is on it, or where its entry is already in the record. */
+function openDraft(replica: Replica, where: Where, kept: unknown): EntryDraft {
+  const view = replica.view();
+  const fresh = emptyDraft(where, view.today, replica.newId());
+  const draft = readDraft(kept);
+  if (!draft || !isWorthKeeping(draft) || !view.find('boat', draft.boatId)) return fresh;
+  // cut off between the entry and its ticks: the ticks are still to be made
+  if (view.find('entry', draft.entryId)) return { ...fresh, ticked: untickedYet(view, draft) };
+  return draft;
+}
