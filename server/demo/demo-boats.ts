@@ -56,8 +56,16 @@ const PENNY: DemoBoat = {
       finished: -13,
       tasks: [
         { title: 'Lift the port sole panels', estimateHours: 8, ticked: [['rosa', -20, '11:50']] },
-        { title: 'Pull eight sample screws, frames 4 to 9', estimateHours: 4, ticked: [['wes', -19, '15:35']] },
-        { title: 'Look at floor 7 starboard, mirror first', estimateHours: 1, ticked: [['wes', -17, '10:10']] },
+        {
+          title: 'Pull eight sample screws, frames 4 to 9',
+          estimateHours: 4,
+          ticked: [['wes', -19, '15:35']],
+        },
+        {
+          title: 'Look at floor 7 starboard, mirror first',
+          estimateHours: 1,
+          ticked: [['wes', -17, '10:10']],
+        },
         { title: 'Sketch of what is soft, with sizes', estimateHours: 3, ticked: [['rosa', -14, '15:20']] },
       ],
     },
@@ -69,8 +77,20 @@ const PENNY: DemoBoat = {
         { title: 'Cut the rot out of floor 7, port', estimateHours: 6, ticked: [['rosa', -12, '15:55']] },
         { title: 'Scarf the port bilge stringer', estimateHours: 10, ticked: [['rosa', -7, '15:45']] },
         { title: 'Splice floor 7, starboard', estimateHours: 8, ticked: [['wes', -9, '15:30']] },
-        { title: 'Sister frames 8 and 9, port', estimateHours: 9, ticked: [['wes', -4, '15:50'], ['rosa', -4, '15:52']] },
-        { title: 'Prime the bilge, frames 4 to 10', estimateHours: 6, assignees: ['wes'], started: ['wes', -1, '13:05'] },
+        {
+          title: 'Sister frames 8 and 9, port',
+          estimateHours: 9,
+          ticked: [
+            ['wes', -4, '15:50'],
+            ['rosa', -4, '15:52'],
+          ],
+        },
+        {
+          title: 'Prime the bilge, frames 4 to 10',
+          estimateHours: 6,
+          assignees: ['wes'],
+          started: ['wes', -1, '13:05'],
+        },
         { title: 'Steam two new ribs, 11 and 12', estimateHours: 7, assignees: ['rosa', 'wes'] },
         { title: 'Photographs before the sole goes back', estimateHours: 1 },
       ],
@@ -84,7 +104,12 @@ const PENNY: DemoBoat = {
         { title: 'Refasten where the samples failed', estimateHours: 16 },
       ],
     },
-    { key: 'machinery', name: 'Engine and shaft', after: ['frames'], tasks: [{ title: 'Engine bed painted', estimateHours: 3 }] },
+    {
+      key: 'machinery',
+      name: 'Engine and shaft',
+      after: ['frames'],
+      tasks: [{ title: 'Engine bed painted', estimateHours: 3 }],
+    },
   ],
 };
 
@@ -121,7 +146,12 @@ const WIDDER: DemoBoat = {
       tasks: [
         { title: 'Coats 1 to 4', estimateHours: 24, ticked: [['tamsin', -8, '15:10']] },
         { title: 'Coats 5 to 8', estimateHours: 24, started: ['tamsin', -7, '09:20'] },
-        { title: 'Hatches, both sides, six coats', estimateHours: 14, assignees: ['tamsin'], started: ['tamsin', -5, '08:10'] },
+        {
+          title: 'Hatches, both sides, six coats',
+          estimateHours: 14,
+          assignees: ['tamsin'],
+          started: ['tamsin', -5, '08:10'],
+        },
         { title: 'Rub down and finish coats', estimateHours: 16 },
       ],
     },
@@ -134,7 +164,12 @@ const WIDDER: DemoBoat = {
         { title: 'Mask, pay and pull the tape', estimateHours: 10 },
       ],
     },
-    { key: 'hardware', name: 'Hardware and glass', after: ['varnish', 'seams'], tasks: [{ title: 'Bed the windshield feet', estimateHours: 4 }] },
+    {
+      key: 'hardware',
+      name: 'Hardware and glass',
+      after: ['varnish', 'seams'],
+      tasks: [{ title: 'Bed the windshield feet', estimateHours: 4 }],
+    },
   ],
 };
 
@@ -168,7 +203,14 @@ const HICKORY: DemoBoat = {
       after: ['strip'],
       tasks: [
         { title: 'Sister rib 9, port', estimateHours: 4, ticked: [['hob', -12, '16:00']] },
-        { title: 'Graving piece, stem rabbet', estimateHours: 3, ticked: [['hob', -6, '15:20'], ['wes', -6, '15:58']] },
+        {
+          title: 'Graving piece, stem rabbet',
+          estimateHours: 3,
+          ticked: [
+            ['hob', -6, '15:20'],
+            ['wes', -6, '15:58'],
+          ],
+        },
         { title: 'Keel bolts out and looked at', estimateHours: 5, started: ['hob', -1, '07:45'] },
         { title: 'Ribs 11 and 12, starboard', estimateHours: 6, assignees: ['hob'] },
       ],
@@ -178,7 +220,12 @@ const HICKORY: DemoBoat = {
       name: 'Laps and rivets',
       after: ['ribs'],
       tasks: [
-        { title: 'Clean laps 3 and 4, port', estimateHours: 4, assignees: ['lenny'], ticked: [['lenny', -2, '14:45']] },
+        {
+          title: 'Clean laps 3 and 4, port',
+          estimateHours: 4,
+          assignees: ['lenny'],
+          ticked: [['lenny', -2, '14:45']],
+        },
         { title: 'Missing rivets, port, ribs 5 to 8', estimateHours: 3, assignees: ['lenny'] },
       ],
     },

@@ -15,7 +15,12 @@ export class DemoDays {
 
   constructor(nowMs: number, timeZone: string) {
     this.timeZone = timeZone;
-    this.clock = new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', minute: '2-digit', hourCycle: 'h23' });
+    this.clock = new Intl.DateTimeFormat('en-GB', {
+      timeZone,
+      hour: '2-digit',
+      minute: '2-digit',
+      hourCycle: 'h23',
+    });
     this.today = dayAt(nowMs, timeZone);
   }
 

@@ -21,7 +21,8 @@ export const DEMO_PASSWORD = 'tightseam';
 
 export const DEMO_SHOP: ShopWords = { name: 'Hornbeam Slip Boat Shop', currency: 'USD', units: 'imperial' };
 
-export type PersonKey = 'orrin' | 'imelda' | 'rosa' | 'wes' | 'tamsin' | 'hob' | 'lenny' | 'ottilie' | 'castor';
+export type PersonKey =
+  'orrin' | 'imelda' | 'rosa' | 'wes' | 'tamsin' | 'hob' | 'lenny' | 'ottilie' | 'castor';
 
 export const DEMO_PEOPLE: Record<PersonKey, DemoPerson> = {
   orrin: { name: 'Orrin', email: 'orrin@hornbeam.example', roles: ['foreman'] },
@@ -36,14 +37,7 @@ export const DEMO_PEOPLE: Record<PersonKey, DemoPerson> = {
 };
 
 export type DeviceKey =
-  | 'laptop'
-  | 'desk'
-  | 'rosaPhone'
-  | 'wesPhone'
-  | 'tamsinPhone'
-  | 'hobOldPhone'
-  | 'hobPhone'
-  | 'benchTablet';
+  'laptop' | 'desk' | 'rosaPhone' | 'wesPhone' | 'tamsinPhone' | 'hobOldPhone' | 'hobPhone' | 'benchTablet';
 
 export const DEMO_DEVICES: Record<DeviceKey, DemoDevice> = {
   laptop: { label: "Orrin's laptop", people: ['orrin'] },

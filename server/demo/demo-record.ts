@@ -73,7 +73,9 @@ class Telling {
     for (const entry of DEMO_ENTRIES) this.entry(entry);
     for (const change of DEMO_CHANGES) this.change(change);
     this.lennyFinishesAStage();
-    const happened = this.events.filter((event) => event.atMs < this.latestMs).sort((a, b) => a.atMs - b.atMs);
+    const happened = this.events
+      .filter((event) => event.atMs < this.latestMs)
+      .sort((a, b) => a.atMs - b.atMs);
     for (const event of happened) event.happen();
     const batches = this.script.heard();
     return { people: this.people, devices: this.deviceLines(batches), owners: this.owners(), batches };
@@ -118,7 +120,12 @@ class Telling {
     return isAtDesk || passing > this.latestMs ? atMs + MINUTE_MS : passing;
   }
 
-  private say(by: PersonKey, day: number, time: string, op: (atMs: number) => Parameters<Telling['put']>[3]): void {
+  private say(
+    by: PersonKey,
+    day: number,
+    time: string,
+    op: (atMs: number) => Parameters<Telling['put']>[3],
+  ): void {
     const atMs = this.at(day, time);
     this.events.push({ atMs, happen: () => this.put(by, this.days.workday(day), atMs, op(atMs)) });
   }
@@ -127,10 +134,21 @@ class Telling {
     by: PersonKey,
     day: Day,
     atMs: number,
-    op: { kind: string; data: Record<string, unknown>; makes?: string; sets?: { rowId: string; fields: string[] }; isUnheard?: boolean },
+    op: {
+      kind: string;
+      data: Record<string, unknown>;
+      makes?: string;
+      sets?: { rowId: string; fields: string[] };
+      isUnheard?: boolean;
+    },
   ): void {
     const { makes, ...said } = op;
-    const where = { deviceId: this.deviceOf(by, atMs), personId: this.person(by), atMs, sentMs: this.sentMs(by, day, atMs) };
+    const where = {
+      deviceId: this.deviceOf(by, atMs),
+      personId: this.person(by),
+      atMs,
+      sentMs: this.sentMs(by, day, atMs),
+    };
     const opId = this.script.say({ ...where, ...said });
     if (makes) this.script.made(makes, opId);
   }
@@ -139,7 +157,11 @@ class Telling {
     const { particulars, arrivedDaysAgo, stages } = DEMO_BOATS[key];
     const boatId = this.id(key);
     const arrivedOn = addDays(this.days.today, -arrivedDaysAgo);
-    this.say('orrin', FIRST_DAY, '16:30', () => ({ kind: 'boat.add', makes: boatId, data: { boatId, ...particulars, arrivedOn } }));
+    this.say('orrin', FIRST_DAY, '16:30', () => ({
+      kind: 'boat.add',
+      makes: boatId,
+      data: { boatId, ...particulars, arrivedOn },
+    }));
     for (const [index, stage] of stages.entries()) this.stage(key, stage, index + 1);
   }
 
@@ -155,7 +177,11 @@ class Telling {
     }));
   }
 
-  private task(boatId: string, stageId: string, { title, estimateHours, assignees, started, ticked = [] }: DemoTask): void {
+  private task(
+    boatId: string,
+    stageId: string,
+    { title, estimateHours, assignees, started, ticked = [] }: DemoTask,
+  ): void {
     const taskId = this.id(`task/${stageId}/${title}`);
     const data = {
       taskId,
@@ -168,11 +194,17 @@ class Telling {
     this.say('orrin', FIRST_DAY, '16:32', () => ({ kind: 'task.add', makes: taskId, data }));
     if (started) {
       const [by, day, time] = started;
-      this.say(by, day, time, (atMs) => ({ kind: 'task.start', data: { taskId, startId: this.ids.next(atMs) } }));
+      this.say(by, day, time, (atMs) => ({
+        kind: 'task.start',
+        data: { taskId, startId: this.ids.next(atMs) },
+      }));
     }
     for (const [by, day, time] of ticked) {
       const workDate = this.days.workday(day);
-      this.say(by, day, time, (atMs) => ({ kind: 'task.mark', data: { taskId, markId: this.ids.next(atMs), workDate } }));
+      this.say(by, day, time, (atMs) => ({
+        kind: 'task.mark',
+        data: { taskId, markId: this.ids.next(atMs), workDate },
+      }));
     }
   }
 
@@ -203,7 +235,10 @@ class Telling {
   private kinds(entryId: string, entry: DemoEntry): void {
     const corrected = DEMO_CHANGES.find((change) => change.key === entry.key && 'hours' in change.does);
     const latest = corrected && 'hours' in corrected.does ? corrected.does.hours : {};
-    const hours = this.figures({ ...entry.hours, ...latest }).map((figure) => ({ ...figure, kind: figure.kind ?? 'agreed' }));
+    const hours = this.figures({ ...entry.hours, ...latest }).map((figure) => ({
+      ...figure,
+      kind: figure.kind ?? 'agreed',
+    }));
     this.say('imelda', entry.day + KINDS_SET_AFTER_DAYS, '14:00', () => ({
       kind: 'entry.amend',
       data: { entryId, set: { hours } },
@@ -214,15 +249,24 @@ class Telling {
   private change({ key, day, time, by, does }: DemoChange): void {
     const entryId = this.id(`entry/${key}`);
     this.say(by, day, time, (atMs) => {
-      if ('adds' in does) return { kind: 'entry.addTo', data: { entryId, additionId: this.ids.next(atMs), text: does.adds } };
+      if ('adds' in does)
+        return { kind: 'entry.addTo', data: { entryId, additionId: this.ids.next(atMs), text: does.adds } };
       if ('strikes' in does) {
         const sets = { rowId: entryId, fields: ['struck'] };
-        return { kind: 'entry.strike', data: { entryId, why: does.strikes, saw: [this.script.makerOf(entryId)] }, sets };
+        return {
+          kind: 'entry.strike',
+          data: { entryId, why: does.strikes, saw: [this.script.makerOf(entryId)] },
+          sets,
+        };
       }
       if ('movesTo' in does) {
         const { boat, stage } = does.movesTo;
         const set = { boatId: this.id(boat), stageId: this.id(`${boat}/${stage}`) };
-        return { kind: 'entry.amend', data: { entryId, set, why: does.why }, sets: { rowId: entryId, fields: ['stageId'] } };
+        return {
+          kind: 'entry.amend',
+          data: { entryId, set, why: does.why },
+          sets: { rowId: entryId, fields: ['stageId'] },
+        };
       }
       const hours = this.figures(does.hours).map((figure) => ({ ...figure, kind: null }));
       const fields = hours.map((figure) => `hours/${figure.personId}`);
@@ -235,7 +279,10 @@ class Telling {
   private lennyFinishesAStage(): void {
     const stageId = this.id('hickory/laps');
     const workDate = this.days.workday(-1);
-    this.say('lenny', -1, '15:42', (atMs) => ({ kind: 'stage.mark', data: { stageId, markId: this.ids.next(atMs), workDate } }));
+    this.say('lenny', -1, '15:42', (atMs) => ({
+      kind: 'stage.mark',
+      data: { stageId, markId: this.ids.next(atMs), workDate },
+    }));
   }
 
   private owners(): DemoRecord['owners'] {
@@ -247,7 +294,10 @@ class Telling {
     return (Object.keys(DEMO_DEVICES) as DeviceKey[]).map((key) => {
       const { label, people, replaces } = DEMO_DEVICES[key];
       const id = this.devices.get(key)!;
-      const lastMs = Math.max(this.startMs, ...batches.filter((batch) => batch.deviceId === id).map((batch) => batch.receivedMs));
+      const lastMs = Math.max(
+        this.startMs,
+        ...batches.filter((batch) => batch.deviceId === id).map((batch) => batch.receivedMs),
+      );
       return {
         id,
         label,

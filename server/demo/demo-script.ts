@@ -59,7 +59,15 @@ export class DemoScript {
     this.clocks.set(deviceId, clock);
     const id = this.ids.next(atMs);
     const over = sets ? this.over(sets.rowId, sets.fields, isUnheard) : {};
-    this.put(deviceId, personId, sentMs, { id, v: 1, kind, at: formatStamp(clock, deviceId), personId, over, data });
+    this.put(deviceId, personId, sentMs, {
+      id,
+      v: 1,
+      kind,
+      at: formatStamp(clock, deviceId),
+      personId,
+      over,
+      data,
+    });
     if (sets) for (const field of sets.fields) this.replace(`${sets.rowId}/${field}`, id, isUnheard);
     return id;
   }
@@ -80,7 +88,9 @@ export class DemoScript {
 
   private over(rowId: string, fields: string[], isUnheard: boolean): Op['over'] {
     const made = this.makerOf(rowId);
-    return Object.fromEntries(fields.map((field) => [field, isUnheard ? [made] : (this.heads.get(`${rowId}/${field}`) ?? [made])]));
+    return Object.fromEntries(
+      fields.map((field) => [field, isUnheard ? [made] : (this.heads.get(`${rowId}/${field}`) ?? [made])]),
+    );
   }
 
   private replace(key: string, id: string, isUnheard: boolean): void {

@@ -12,7 +12,15 @@ import { readBatchFrom, readDevice, type Sender } from '#server/sync/batch-from.
 import { hearDevice } from '#server/sync/hear-device.ts';
 import { PostgresStore } from '#server/sync/postgres-store.ts';
 import { version } from '#server/version.ts';
-import { DEMO_PASSWORD, DEMO_PEOPLE, DEMO_SHOP, SECOND_PEOPLE, SECOND_SHOP, type DemoPerson, type ShopWords } from './demo-people.ts';
+import {
+  DEMO_PASSWORD,
+  DEMO_PEOPLE,
+  DEMO_SHOP,
+  SECOND_PEOPLE,
+  SECOND_SHOP,
+  type DemoPerson,
+  type ShopWords,
+} from './demo-people.ts';
 import { makeDemoRecord, type DemoDeviceLine, type DemoRecord } from './demo-record.ts';
 import type { DemoBatch } from './demo-script.ts';
 import { makeSecondRecord } from './second-record.ts';
@@ -42,7 +50,12 @@ export async function seedDemo(database: Database, now: number, timeZone: string
   const passwordHash = await hashPassword(DEMO_PASSWORD);
   const shops: ShopToSeed[] = [
     { shopId: DEMO_SHOP_ID, words: DEMO_SHOP, people: DEMO_PEOPLE, record: makeDemoRecord(now, timeZone) },
-    { shopId: SECOND_SHOP_ID, words: SECOND_SHOP, people: SECOND_PEOPLE, record: makeSecondRecord(now, timeZone) },
+    {
+      shopId: SECOND_SHOP_ID,
+      words: SECOND_SHOP,
+      people: SECOND_PEOPLE,
+      record: makeSecondRecord(now, timeZone),
+    },
   ];
   await database.inShop(DEMO_SHOP_ID, async (transaction) => {
     for (const shop of shops) {
@@ -73,7 +86,8 @@ async function seedShop(
   }
   for (const device of record.devices) await addDevice(database, transaction, shopId, device);
   for (const batch of record.batches) await takeIn(database, transaction, shopId, batch, timeZone);
-  for (const { boatId, personId } of record.owners) await setBoatOwners(database, transaction, shopId, boatId, [personId]);
+  for (const { boatId, personId } of record.owners)
+    await setBoatOwners(database, transaction, shopId, boatId, [personId]);
   for (const device of record.devices) await hearLast(database, transaction, shopId, device);
 }
 
@@ -83,7 +97,8 @@ async function addDevice(
   shopId: string,
   { id, label, replaces, personIds }: DemoDeviceLine,
 ): Promise<void> {
-  for (const personId of personIds) await enrol(database, transaction, { shopId, personId, deviceId: id }, { id, label, replaces });
+  for (const personId of personIds)
+    await enrol(database, transaction, { shopId, personId, deviceId: id }, { id, label, replaces });
 }
 
 async function takeIn(

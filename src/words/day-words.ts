@@ -2,6 +2,21 @@ import { addDays, dayAt, daysBetween, type Day } from '#shared/sync/day.ts';
 
 const WEEKDAYS = ['Sun', 'Mon', 'Tue', 'Wed', 'Thu', 'Fri', 'Sat'] as const;
 const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'] as const;
+const LONG_WEEKDAYS = ['Sunday', 'Monday', 'Tuesday', 'Wednesday', 'Thursday', 'Friday', 'Saturday'] as const;
+const LONG_MONTHS = [
+  'January',
+  'February',
+  'March',
+  'April',
+  'May',
+  'June',
+  'July',
+  'August',
+  'September',
+  'October',
+  'November',
+  'December',
+] as const;
 const WEEK_DAYS = 7;
 const MINUTE_MS = 60_000;
 const HOUR_MS = 60 * MINUTE_MS;
@@ -24,6 +39,13 @@ export function dayWords(day: Day, today: Day): string {
   const date = new Date(day);
   const year = day.slice(0, 4) === today.slice(0, 4) ? '' : ` ${day.slice(0, 4)}`;
   return `${weekdayWords(day)} ${date.getUTCDate()} ${MONTHS[date.getUTCMonth()]}${year}`;
+}
+
+/** 'Monday 31 August'; with the year where it is not today's. */
+export function longDayWords(day: Day, today: Day): string {
+  const year = day.slice(0, 4) === today.slice(0, 4) ? '' : ` ${day.slice(0, 4)}`;
+  const date = new Date(day);
+  return `${LONG_WEEKDAYS[date.getUTCDay()]} ${date.getUTCDate()} ${LONG_MONTHS[date.getUTCMonth()]}${year}`;
 }
 
 /** 'today', 'yesterday', or the day written out. */

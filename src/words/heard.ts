@@ -4,7 +4,21 @@ import { parseStamp, stampMs } from '#shared/sync/stamp.ts';
 import type { View } from '#src/replica/view.ts';
 import { counted, momentWords } from '#src/words/day-words.ts';
 
-const SMALL_COUNTS = ['none', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten', 'eleven', 'twelve'];
+const SMALL_COUNTS = [
+  'none',
+  'one',
+  'two',
+  'three',
+  'four',
+  'five',
+  'six',
+  'seven',
+  'eight',
+  'nine',
+  'ten',
+  'eleven',
+  'twelve',
+];
 
 /** 'four'; '23'. */
 export function countWords(count: number): string {
@@ -44,7 +58,10 @@ export function readGaps(view: View): Gap[] {
 
 function gapOf(view: View, replaced: DeviceRow, successor: DeviceRow): Gap[] {
   const successorFrom = firstHeardOf(view, successor.id);
-  const isBack = replaced.lastHeardAt !== null && successorFrom !== null && Date.parse(replaced.lastHeardAt) >= successorFrom;
+  const isBack =
+    replaced.lastHeardAt !== null &&
+    successorFrom !== null &&
+    Date.parse(replaced.lastHeardAt) >= successorFrom;
   if (isBack && heldCount(replaced) === 0) return [];
   const dayOf = (at: string | number) => dayAt(new Date(at).getTime(), view.timeZone);
   const heardDay = replaced.lastHeardAt ? dayOf(replaced.lastHeardAt) : null;
@@ -66,7 +83,8 @@ function gapOf(view: View, replaced: DeviceRow, successor: DeviceRow): Gap[] {
 
 function gapWords(view: View, replaced: DeviceRow): string {
   const { label, lastHeardAt, held } = replaced;
-  if (!lastHeardAt) return `${label} was replaced before it was ever heard. What was logged on it is not here.`;
+  if (!lastHeardAt)
+    return `${label} was replaced before it was ever heard. What was logged on it is not here.`;
   const heard = `${label} was last heard ${momentWords(lastHeardAt, view.timeZone, view.today)}`;
   const count = heldCount(replaced);
   if (count === 0) return `${heard}, and was replaced. What was logged on it after that is not here.`;

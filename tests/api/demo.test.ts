@@ -23,7 +23,12 @@ afterAll(() => server.close());
 const signIn = (email: string, shopId?: string) =>
   request(server.app)
     .post('/api/session')
-    .send({ email, password: DEMO_PASSWORD, device: { id: v7(), label: 'demo phone' }, ...(shopId ? { shopId } : {}) });
+    .send({
+      email,
+      password: DEMO_PASSWORD,
+      device: { id: v7(), label: 'demo phone' },
+      ...(shopId ? { shopId } : {}),
+    });
 
 test('the demo is there within seconds', () => {
   expect(seededInMs).toBeLessThan(SECONDS_MAX * 1000);
@@ -31,9 +36,18 @@ test('the demo is there within seconds', () => {
 
 test('every account that is printed can sign in and has the role it is printed with', async () => {
   const accounts = demoAccounts();
-  expect(accounts.map(({ role }) => role).sort()).toEqual(
-    ['crew', 'crew', 'crew', 'crew', 'crew', 'foreman', 'office', 'owner', 'owner', 'owner'],
-  );
+  expect(accounts.map(({ role }) => role).sort()).toEqual([
+    'crew',
+    'crew',
+    'crew',
+    'crew',
+    'crew',
+    'foreman',
+    'office',
+    'owner',
+    'owner',
+    'owner',
+  ]);
   for (const { role, email } of accounts) {
     const answer = await signIn(email, DEMO_SHOP_ID);
     expect(answer.status, email).toBe(200);
@@ -62,7 +76,12 @@ test('what a device holds and when it was last heard is as the demo tells it', a
     server.database.models.Device.findAll({ where: { shopId: DEMO_SHOP_ID }, transaction }),
   );
   const devices = found.filter(({ row }) => row.label !== 'demo phone');
-  const holding = devices.filter(({ row }) => (row.held?.ops ?? 0) > 0).map(({ row }) => [row.label, row.held!.ops]);
-  expect(holding.sort()).toEqual([["Hob's first phone", 2], ["Hob's phone", 4]]);
+  const holding = devices
+    .filter(({ row }) => (row.held?.ops ?? 0) > 0)
+    .map(({ row }) => [row.label, row.held!.ops]);
+  expect(holding.sort()).toEqual([
+    ["Hob's first phone", 2],
+    ["Hob's phone", 4],
+  ]);
   expect(devices.every(({ lastHeardAt }) => lastHeardAt!.getTime() < TUESDAY_NOON)).toBe(true);
 });

@@ -37,12 +37,21 @@ function putShop(store: MemoryStore, { people, devices, owners }: DemoRecord): v
     store.put('person', id, { id, ...DEMO_PEOPLE[key], leftAt: null, boatIds });
   }
   for (const { lastHeardMs, ...device } of devices) {
-    const row = { ...device, lastHeardAt: new Date(lastHeardMs).toISOString(), appVersion: '0.1.0', revokedAt: null };
+    const row = {
+      ...device,
+      lastHeardAt: new Date(lastHeardMs).toISOString(),
+      appVersion: '0.1.0',
+      revokedAt: null,
+    };
     store.put('device', device.id, row);
   }
 }
 
-function merge(store: MemoryStore, record: DemoRecord, batch: DemoRecord['batches'][number]): Promise<Outcome[]> {
+function merge(
+  store: MemoryStore,
+  record: DemoRecord,
+  batch: DemoRecord['batches'][number],
+): Promise<Outcome[]> {
   const device = record.devices.find((one) => one.id === batch.deviceId)!;
   const from = {
     shop: { id: DEMO_SHOP_ID, timeZone: DEMO_ZONE },

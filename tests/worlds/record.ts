@@ -28,7 +28,13 @@ export class TestRecord {
   nowMs = START_MS;
 
   constructor() {
-    const shop = { id: SHOP_ID, name: 'Hornbeam Slip', timeZone: 'Europe/Dublin', currency: 'EUR', units: 'imperial' };
+    const shop = {
+      id: SHOP_ID,
+      name: 'Hornbeam Slip',
+      timeZone: 'Europe/Dublin',
+      currency: 'EUR',
+      units: 'imperial',
+    };
     this.store.put('shop', SHOP_ID, shop);
   }
 
@@ -56,7 +62,12 @@ export class TestRecord {
   }
 
   /** Says one thing, over what stands; `over` names what its author had before them where they had not heard the latest. */
-  async say(hand: Hand, kind: string, data: Record<string, unknown>, over?: Record<string, string[]>): Promise<Outcome> {
+  async say(
+    hand: Hand,
+    kind: string,
+    data: Record<string, unknown>,
+    over?: Record<string, string[]>,
+  ): Promise<Outcome> {
     this.nowMs += MINUTE_MS;
     const op = {
       id: this.newId(),

@@ -39,7 +39,12 @@ export interface BoatOnSheet {
 }
 
 /** A day's entries under their boats and stages; a boat stands here where something was logged, ticked or finished on her. */
-export function readBoats(view: View, day: Day, entries: EntryRow[], looseIds: ReadonlySet<string>): BoatOnSheet[] {
+export function readBoats(
+  view: View,
+  day: Day,
+  entries: EntryRow[],
+  looseIds: ReadonlySet<string>,
+): BoatOnSheet[] {
   return view
     .all('boat')
     .map((boat): BoatOnSheet => {
@@ -86,7 +91,11 @@ function readBrief(view: View, entry: EntryRow, looseIds: ReadonlySet<string>): 
     mark: markOf(view, entry, looseIds),
     text: entry.text,
     author: whoWords(view, entry.authorId),
-    people: entry.hours.map(({ personId, minutes }) => ({ personId, name: whoWords(view, personId), minutes })),
+    people: entry.hours.map(({ personId, minutes }) => ({
+      personId,
+      name: whoWords(view, personId),
+      minutes,
+    })),
   };
 }
 

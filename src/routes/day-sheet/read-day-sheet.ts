@@ -46,7 +46,10 @@ export interface DaySheet {
 
 /** Everything about one day, by person and by boat. */
 export function readDaySheet(view: View, day: Day): DaySheet {
-  const entries = view.all('entry').filter((entry) => entry.workDate === day).sort(byWriting);
+  const entries = view
+    .all('entry')
+    .filter((entry) => entry.workDate === day)
+    .sort(byWriting);
   const looseIds = new Set(view.all('looseEnd').map((end) => end.rowId));
   const people = readPeople(view, day, entries, looseIds);
   return {
@@ -64,27 +67,36 @@ function byWriting(a: EntryRow, b: EntryRow): number {
   return a.id < b.id ? -1 : 1;
 }
 
-function readPeople(view: View, day: Day, entries: EntryRow[], looseIds: ReadonlySet<string>): PersonOnSheet[] {
+function readPeople(
+  view: View,
+  day: Day,
+  entries: EntryRow[],
+  looseIds: ReadonlySet<string>,
+): PersonOnSheet[] {
   const ticks = ticksByPerson(view, day);
   const gaps = readGaps(view).filter((gap) => gap.fromDay <= day && day <= gap.toDay);
   const lines = hoursLines(entries);
-  const everybody = view.all('person').map(({ id, name, roles, leftAt }): PersonOnSheet & { isExpected: boolean } => {
-    const own = entries.filter((entry) => entry.authorId === id || entry.hours.some((figure) => figure.personId === id));
-    const ticked = ticks.get(id) ?? [];
-    const hasNothing = own.length === 0 && ticked.length === 0;
-    return {
-      personId: id,
-      name,
-      isMe: id === view.me.personId,
-      minutes: totalMinutes(lines.filter((line) => line.personId === id)),
-      entries: own.map((entry) => readEntryLine(view, entry, id, looseIds)),
-      ticks: ticked,
-      heard: readHeard(view, id),
-      nothing: hasNothing ? readNothing(view, id, day) : null,
-      gaps: gaps.filter((gap) => gap.personIds.includes(id)).map((gap) => gap.words),
-      isExpected: roles.includes('crew') && leftAt === null,
-    };
-  });
+  const everybody = view
+    .all('person')
+    .map(({ id, name, roles, leftAt }): PersonOnSheet & { isExpected: boolean } => {
+      const own = entries.filter(
+        (entry) => entry.authorId === id || entry.hours.some((figure) => figure.personId === id),
+      );
+      const ticked = ticks.get(id) ?? [];
+      const hasNothing = own.length === 0 && ticked.length === 0;
+      return {
+        personId: id,
+        name,
+        isMe: id === view.me.personId,
+        minutes: totalMinutes(lines.filter((line) => line.personId === id)),
+        entries: own.map((entry) => readEntryLine(view, entry, id, looseIds)),
+        ticks: ticked,
+        heard: readHeard(view, id),
+        nothing: hasNothing ? readNothing(view, id, day) : null,
+        gaps: gaps.filter((gap) => gap.personIds.includes(id)).map((gap) => gap.words),
+        isExpected: roles.includes('crew') && leftAt === null,
+      };
+    });
   return everybody
     .filter((person) => !person.nothing || person.isExpected)
     .sort((a, b) => Number(a.nothing !== null) - Number(b.nothing !== null) || a.name.localeCompare(b.name));
@@ -106,7 +118,12 @@ function ticksByPerson(view: View, day: Day): Map<string, TickLine[]> {
 }
 
 /** The days beside one: their paths and words for the keys. */
-export function readNeighbours(day: Day): { previous: Day; next: Day; previousWords: string; nextWords: string } {
+export function readNeighbours(day: Day): {
+  previous: Day;
+  next: Day;
+  previousWords: string;
+  nextWords: string;
+} {
   const [previous, next] = [addDays(day, -1), addDays(day, 1)];
   return { previous, next, previousWords: dayWords(previous, day), nextWords: dayWords(next, day) };
 }

@@ -53,7 +53,12 @@ export function markOf(view: View, entry: EntryRow, looseIds: ReadonlySet<string
   return view.isHeld('entry', entry.id) ? 'held' : 'sent';
 }
 
-export function readEntryLine(view: View, entry: EntryRow, personId: string, looseIds: ReadonlySet<string>): EntryLine {
+export function readEntryLine(
+  view: View,
+  entry: EntryRow,
+  personId: string,
+  looseIds: ReadonlySet<string>,
+): EntryLine {
   return {
     id: entry.id,
     mark: markOf(view, entry, looseIds),
@@ -88,10 +93,14 @@ function minutesOf({ value }: Statement): number {
 
 function readCorrections(view: View, entry: EntryRow, personId: string): Correction[] {
   const said = statementsOf(entry, `hours/${personId}`);
-  return said.flatMap((statement) => {
-    const replaced = said.filter((other) => statement.over.includes(other.opId) && minutesOf(other) !== minutesOf(statement));
-    return replaced.map((other) => correction(view, other, statement));
-  }).reverse();
+  return said
+    .flatMap((statement) => {
+      const replaced = said.filter(
+        (other) => statement.over.includes(other.opId) && minutesOf(other) !== minutesOf(statement),
+      );
+      return replaced.map((other) => correction(view, other, statement));
+    })
+    .reverse();
 }
 
 function correction(view: View, before: Statement, after: Statement): Correction {
@@ -122,5 +131,7 @@ function movedFlags(view: View, entry: EntryRow): string[] {
   const by = said.find((statement) => statement.over.includes(from?.opId ?? ''));
   if (!from || !by) return [];
   const why = by.why ? `: ${by.why}` : '';
-  return [`moved from ${boatWords(view, (from.value as { boatId: string }).boatId)} by ${whoWords(view, by.personId)}${why}`];
+  return [
+    `moved from ${boatWords(view, (from.value as { boatId: string }).boatId)} by ${whoWords(view, by.personId)}${why}`,
+  ];
 }

@@ -25,7 +25,8 @@ function devicesOf(view: View, personId: string): DeviceRow[] {
 export function readHeard(view: View, personId: string): Heard {
   const devices = devicesOf(view, personId);
   const holding = devices.filter((device) => heldCount(device) > 0);
-  if (holding.length > 0) return { holding: holding.map((device) => holdingWords(view, device, devices.length)), words: null };
+  if (holding.length > 0)
+    return { holding: holding.map((device) => holdingWords(view, device, devices.length)), words: null };
   const [latest] = devices;
   return { holding: [], words: latest ? heardWords(view, latest) : 'no device here' };
 }
@@ -46,14 +47,22 @@ export function readNothing(view: View, personId: string, day: Day): Nothing {
   const devices = devicesOf(view, personId);
   const holding = devices.filter((device) => heldCount(device) > 0);
   if (holding.length > 0) {
-    const said = holding.map((device) => `${device.label} was last ${heardWords(view, device)} and held ${countWords(heldCount(device))}`);
+    const said = holding.map(
+      (device) =>
+        `${device.label} was last ${heardWords(view, device)} and held ${countWords(heldCount(device))}`,
+    );
     return { words: `Nothing yet. ${listWords(said)}.`, isSure: false };
   }
   const [latest] = devices;
   if (!latest) return { words: 'Nothing yet. No device is signed in.', isSure: true };
-  if (!latest.lastHeardAt) return { words: `Nothing yet. ${latest.label} has not been heard.`, isSure: false };
+  if (!latest.lastHeardAt)
+    return { words: `Nothing yet. ${latest.label} has not been heard.`, isSure: false };
   const heardOn = dayAt(Date.parse(latest.lastHeardAt), view.timeZone);
   const heard = momentWords(latest.lastHeardAt, view.timeZone, view.today);
-  if (heardOn > day) return { words: `Nothing logged. All was sent when ${latest.label} was last heard ${heard}.`, isSure: true };
+  if (heardOn > day)
+    return {
+      words: `Nothing logged. All was sent when ${latest.label} was last heard ${heard}.`,
+      isSure: true,
+    };
   return { words: `Nothing yet, as last heard ${heard}.`, isSure: heardOn === day };
 }

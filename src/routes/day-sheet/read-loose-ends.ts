@@ -45,7 +45,9 @@ export function readLooseEnds(view: View, day: Day): EndOnSheet[] {
   return view
     .all('looseEnd')
     .map((end) => readEnd(view, end))
-    .sort((a, b) => Number(b.day === day) - Number(a.day === day) || ((a.day ?? '') < (b.day ?? '') ? 1 : -1));
+    .sort(
+      (a, b) => Number(b.day === day) - Number(a.day === day) || ((a.day ?? '') < (b.day ?? '') ? 1 : -1),
+    );
 }
 
 function readEnd(view: View, end: LooseEnd): EndOnSheet {
@@ -57,7 +59,9 @@ function readEnd(view: View, end: LooseEnd): EndOnSheet {
     id: end.id,
     about: isField ? fieldWords(view, end.field!) : 'Struck, and changed by somebody who did not know',
     of: titleOf(row),
-    where: [end.boatId && boatWords(view, end.boatId), workDate && dayWords(workDate, view.today)].filter(Boolean).join(', '),
+    where: [end.boatId && boatWords(view, end.boatId), workDate && dayWords(workDate, view.today)]
+      .filter(Boolean)
+      .join(', '),
     entryId: end.entity === 'entry' ? end.rowId : null,
     day: workDate,
     values: end.values.map((value) => ({
@@ -83,11 +87,18 @@ function titleOf(row: Row): string {
 function said(view: View, end: LooseEnd, row: Row, value: unknown): Pick<EndValue, 'words' | 'hours'> {
   if (end.kind === 'field') return inField(view, end.field!, value);
   const unseen = value as { field?: string; value?: unknown; added?: string };
-  if (unseen.field) return { words: `${fieldWords(view, unseen.field)}: ${valueWords(view, unseen.field, unseen.value)}`, hours: null };
+  if (unseen.field)
+    return {
+      words: `${fieldWords(view, unseen.field)}: ${valueWords(view, unseen.field, unseen.value)}`,
+      hours: null,
+    };
   const item = itemsOf(row).find(({ id }) => id === unseen.added) as { text?: string } | undefined;
   return { words: item?.text ? `Added: ${item.text}` : 'Ticked or started', hours: null };
 }
 
 function inField(view: View, field: string, value: unknown): Pick<EndValue, 'words' | 'hours'> {
-  return { words: valueWords(view, field, value), hours: field.startsWith('hours/') ? (value as HoursValue) : null };
+  return {
+    words: valueWords(view, field, value),
+    hours: field.startsWith('hours/') ? (value as HoursValue) : null,
+  };
 }

@@ -50,9 +50,11 @@ export function valueWords(view: View, field: string, value: unknown): string {
   if (field === STRUCK_FIELD) return value === null ? 'keep it' : `struck: ${(value as Struck).why}`;
   if (value === null || value === '') return 'none';
   if (field === STAGE_FIELD) return whereOf(view, value as { boatId: string; stageId: string | null });
-  if (field === 'workDate' || field === 'plannedFor' || field === 'arrivedOn') return dayWords(value as string, view.today);
+  if (field === 'workDate' || field === 'plannedFor' || field === 'arrivedOn')
+    return dayWords(value as string, view.today);
   if (field === 'place') return placeWords(value as Place);
-  if (field === 'assigneeIds') return listWords((value as string[]).map((id) => whoWords(view, id))) || 'nobody';
+  if (field === 'assigneeIds')
+    return listWords((value as string[]).map((id) => whoWords(view, id))) || 'nobody';
   if (field === 'after') return listWords((value as string[]).map((id) => stageWords(view, id))) || 'nothing';
   if (field === 'estimateMinutes') return `${hoursText(value as number)} h`;
   if (field === 'lies') return liesWords(view, value as { way: string; since: string });

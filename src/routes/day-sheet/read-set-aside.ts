@@ -22,7 +22,8 @@ export interface SetAsideOnSheet {
 
 const REASONS: Record<Reason, (who: string) => string> = {
   malformed: () => 'It could not be read.',
-  'not-understood': () => 'This server does not know such a thing yet. It is judged again when a newer one is here.',
+  'not-understood': () =>
+    'This server does not know such a thing yet. It is judged again when a newer one is here.',
   'id-reused': () => 'Something else had come under the same mark before.',
   'not-entitled': (who) => `${capital(who)} may not do this; you can let it count.`,
   'no-such-row': () => 'What it is about has not come yet. It counts by itself as soon as it has.',

@@ -7,7 +7,9 @@ const MONDAY = '2026-05-04';
 async function shop() {
   const record = new TestRecord();
   const orrin = record.hand('Orrin', 'foreman');
-  const [rosa, wes, tamsin, hob] = ['Rosa', 'Wes', 'Tamsin', 'Hob'].map((name) => record.hand(name, 'crew')) as [Hand, Hand, Hand, Hand];
+  const [rosa, wes, tamsin, hob] = ['Rosa', 'Wes', 'Tamsin', 'Hob'].map((name) =>
+    record.hand(name, 'crew'),
+  ) as [Hand, Hand, Hand, Hand];
   const boats: Record<string, { boatId: string; stageId: string }> = {};
   for (const name of ['Penny Candle', 'Brindle', 'Mallow']) {
     const [boatId, stageId] = [record.newId(), record.newId()];
@@ -15,32 +17,73 @@ async function shop() {
     await record.say(orrin, 'stage.add', { stageId, boatId, name: 'Deck', order: 1, after: [] });
     boats[name] = { boatId, stageId };
   }
-  const log = async (hand: Hand, boat: string, minutes: number, text = 'Reefed seams', others: [Hand, number][] = []) => {
+  const log = async (
+    hand: Hand,
+    boat: string,
+    minutes: number,
+    text = 'Reefed seams',
+    others: [Hand, number][] = [],
+  ) => {
     const entryId = record.newId();
-    const hours = [[hand, minutes] as const, ...others].map(([{ personId }, own]) => ({ personId, minutes: own }));
-    await record.say(hand, 'entry.write', { entryId, ...boats[boat], workDate: MONDAY, text, spoken: false, hours });
+    const hours = [[hand, minutes] as const, ...others].map(([{ personId }, own]) => ({
+      personId,
+      minutes: own,
+    }));
+    await record.say(hand, 'entry.write', {
+      entryId,
+      ...boats[boat],
+      workDate: MONDAY,
+      text,
+      spoken: false,
+      hours,
+    });
     return entryId;
   };
-  return { record, orrin, rosa, wes, tamsin, hob, boats, log, sheet: (day = MONDAY) => readDaySheet(record.viewAs(orrin), day) };
+  return {
+    record,
+    orrin,
+    rosa,
+    wes,
+    tamsin,
+    hob,
+    boats,
+    log,
+    sheet: (day = MONDAY) => readDaySheet(record.viewAs(orrin), day),
+  };
 }
 
 describe('who did what, by boat', () => {
   test('ten entries by four people stand under the right boats, and under the right people', async () => {
     const { rosa, wes, tamsin, hob, log, sheet } = await shop();
     const plan: [Hand, string, number][] = [
-      [rosa, 'Penny Candle', 60], [rosa, 'Penny Candle', 90], [rosa, 'Brindle', 30],
-      [wes, 'Penny Candle', 120], [wes, 'Mallow', 45], [wes, 'Brindle', 15],
-      [tamsin, 'Mallow', 200], [tamsin, 'Mallow', 100],
-      [hob, 'Brindle', 240], [hob, 'Penny Candle', 60],
+      [rosa, 'Penny Candle', 60],
+      [rosa, 'Penny Candle', 90],
+      [rosa, 'Brindle', 30],
+      [wes, 'Penny Candle', 120],
+      [wes, 'Mallow', 45],
+      [wes, 'Brindle', 15],
+      [tamsin, 'Mallow', 200],
+      [tamsin, 'Mallow', 100],
+      [hob, 'Brindle', 240],
+      [hob, 'Penny Candle', 60],
     ];
     const written = new Map<string, string[]>();
-    for (const [hand, boat, minutes] of plan) written.set(boat, [...(written.get(boat) ?? []), await log(hand, boat, minutes)]);
+    for (const [hand, boat, minutes] of plan)
+      written.set(boat, [...(written.get(boat) ?? []), await log(hand, boat, minutes)]);
     const { boats, people, minutes } = sheet();
-    const shown = new Map(boats.map((boat) => [boat.name, boat.stages.flatMap((stage) => stage.entries.map((entry) => entry.id))]));
+    const shown = new Map(
+      boats.map((boat) => [
+        boat.name,
+        boat.stages.flatMap((stage) => stage.entries.map((entry) => entry.id)),
+      ]),
+    );
     expect(shown.size).toBe(3);
     for (const [boat, ids] of written) expect(new Set(shown.get(boat))).toEqual(new Set(ids));
     expect(people.map((person) => [person.name, person.entries.length, person.minutes])).toEqual([
-      ['Hob', 2, 300], ['Rosa', 3, 180], ['Tamsin', 2, 300], ['Wes', 3, 180],
+      ['Hob', 2, 300],
+      ['Rosa', 3, 180],
+      ['Tamsin', 2, 300],
+      ['Wes', 3, 180],
     ]);
     expect(minutes).toBe(960);
     expect(boats.map((boat) => boat.minutes).reduce((sum, own) => sum + own)).toBe(960);
@@ -62,7 +105,10 @@ describe('who did what, by boat', () => {
     const entryId = await log(rosa, 'Penny Candle', 240);
     await record.say(rosa, 'entry.strike', { entryId, why: 'said it twice', saw: [] });
     const [person] = sheet().people;
-    expect(person).toMatchObject({ minutes: 0, entries: [{ mark: 'struck', struck: 'struck by Rosa: said it twice' }] });
+    expect(person).toMatchObject({
+      minutes: 0,
+      entries: [{ mark: 'struck', struck: 'struck by Rosa: said it twice' }],
+    });
   });
 
   test('a moved entry stands under its new boat and says where it came from and why', async () => {
@@ -99,7 +145,10 @@ describe('corrected hours', () => {
   test('a kind that is set changes no figure and is no correction', async () => {
     const { record, orrin, rosa, log, sheet } = await shop();
     const entryId = await log(rosa, 'Penny Candle', 60);
-    await record.say(orrin, 'entry.amend', { entryId, set: { hours: [{ personId: rosa.personId, minutes: 60, kind: 'extra' }] } });
+    await record.say(orrin, 'entry.amend', {
+      entryId,
+      set: { hours: [{ personId: rosa.personId, minutes: 60, kind: 'extra' }] },
+    });
     const figure = sheet().people[0]!.entries[0]!.figure!;
     expect(figure).toMatchObject({ kind: 'extra', proposed: false, corrections: [] });
   });
@@ -107,9 +156,16 @@ describe('corrected hours', () => {
   test('two figures that nobody has settled are both told', async () => {
     const { record, rosa, wes, log, sheet } = await shop();
     const entryId = await log(rosa, 'Penny Candle', 60, 'Sole up', [[wes, 240]]);
-    const made = { [`hours/${wes.personId}`]: [(record.store.row('entry', entryId) as { madeBy: string }).madeBy] };
+    const made = {
+      [`hours/${wes.personId}`]: [(record.store.row('entry', entryId) as { madeBy: string }).madeBy],
+    };
     const say = (hand: Hand, minutes: number) =>
-      record.say(hand, 'entry.amend', { entryId, set: { hours: [{ personId: wes.personId, minutes, kind: null }] } }, made);
+      record.say(
+        hand,
+        'entry.amend',
+        { entryId, set: { hours: [{ personId: wes.personId, minutes, kind: null }] } },
+        made,
+      );
     await say(rosa, 180);
     await say(wes, 270);
     const entry = sheet().people.find((person) => person.name === 'Wes')!.entries[0]!;
@@ -122,7 +178,8 @@ describe('ticked tasks', () => {
     const { record, orrin, rosa, wes, boats, sheet } = await shop();
     const taskId = record.newId();
     await record.say(orrin, 'task.add', { taskId, ...boats.Brindle, title: 'Graving piece' });
-    for (const hand of [wes, rosa]) await record.say(hand, 'task.mark', { taskId, markId: record.newId(), workDate: MONDAY });
+    for (const hand of [wes, rosa])
+      await record.say(hand, 'task.mark', { taskId, markId: record.newId(), workDate: MONDAY });
     const ticked = sheet().people.filter((person) => person.ticks.length > 0);
     expect(ticked.map((person) => [person.name, person.ticks[0]!.twice])).toEqual([
       ['Rosa', 'twice: Wes and Rosa'],
@@ -144,13 +201,21 @@ describe('who has nothing', () => {
       held: { ops: 4, photos: 0, oldest: '2026-05-04T06:00:00.000Z' },
     });
     const person = sheet().people.find((one) => one.name === 'Hob')!;
-    expect(person.nothing).toEqual({ words: "Nothing yet. Hob's phone was last heard 07:35 and held four.", isSure: false });
+    expect(person.nothing).toEqual({
+      words: "Nothing yet. Hob's phone was last heard 07:35 and held four.",
+      isSure: false,
+    });
     expect(person.heard.holding).toEqual(['4 held, heard 07:35']);
   });
 
   test('is told as last heard where the device held nothing', async () => {
     const { record, hob, sheet } = await shop();
-    record.device({ id: hob.deviceId, label: "Hob's phone", personIds: [hob.personId], lastHeardAt: '2026-05-04T06:35:00.000Z' });
+    record.device({
+      id: hob.deviceId,
+      label: "Hob's phone",
+      personIds: [hob.personId],
+      lastHeardAt: '2026-05-04T06:35:00.000Z',
+    });
     expect(sheet().people.find((one) => one.name === 'Hob')!.nothing).toEqual({
       words: 'Nothing yet, as last heard 07:35.',
       isSure: true,

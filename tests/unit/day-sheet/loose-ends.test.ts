@@ -8,11 +8,25 @@ const MONDAY = '2026-05-04';
 async function shopWithEntry() {
   const record = new TestRecord();
   const [orrin, imelda] = [record.hand('Orrin', 'foreman'), record.hand('Imelda', 'office')];
-  const [rosa, wes, kit] = ['Rosa', 'Wes', 'Kit'].map((name) => record.hand(name, 'crew')) as [Hand, Hand, Hand];
+  const [rosa, wes, kit] = ['Rosa', 'Wes', 'Kit'].map((name) => record.hand(name, 'crew')) as [
+    Hand,
+    Hand,
+    Hand,
+  ];
   const [boatId, entryId] = [record.newId(), record.newId()];
   await record.say(orrin, 'boat.add', { boatId, name: 'Penny Candle' });
-  const hours = [{ personId: rosa.personId, minutes: 240 }, { personId: wes.personId, minutes: 240 }];
-  await record.say(rosa, 'entry.write', { entryId, boatId, workDate: MONDAY, text: 'King plank up', spoken: false, hours });
+  const hours = [
+    { personId: rosa.personId, minutes: 240 },
+    { personId: wes.personId, minutes: 240 },
+  ];
+  await record.say(rosa, 'entry.write', {
+    entryId,
+    boatId,
+    workDate: MONDAY,
+    text: 'King plank up',
+    spoken: false,
+    hours,
+  });
   const { madeBy } = record.store.row('entry', entryId) as { madeBy: string };
   const ends = (hand = orrin) => readLooseEnds(record.viewAs(hand), MONDAY);
   return { record, orrin, imelda, rosa, wes, kit, boatId, entryId, madeBy, ends };
@@ -21,7 +35,11 @@ async function shopWithEntry() {
 type Shop = Awaited<ReturnType<typeof shopWithEntry>>;
 
 function wesHours({ wes, entryId }: Shop, minutes: number) {
-  return { entryId, set: { hours: [{ personId: wes.personId, minutes, kind: null }] }, why: 'as I remember it' };
+  return {
+    entryId,
+    set: { hours: [{ personId: wes.personId, minutes, kind: null }] },
+    why: 'as I remember it',
+  };
 }
 
 async function twoFigures(shop: Shop) {
@@ -43,9 +61,22 @@ describe('only what two people said differently is listed', () => {
       const hand = hands[count % 3]!;
       const entryId = shop.record.newId();
       const hours = [{ personId: hand.personId, minutes: 15 + count }];
-      await shop.record.say(hand, 'entry.write', { entryId, boatId: shop.boatId, workDate: MONDAY, text: `Plank ${count}`, spoken: false, hours });
-      if (count % 4 === 0) await shop.record.say(hand, 'entry.amend', { entryId, set: { text: `Plank ${count}, port` } });
-      if (count % 5 === 0) await shop.record.say(shop.kit, 'entry.addTo', { entryId: shop.entryId, additionId: shop.record.newId(), text: `and ${count}` });
+      await shop.record.say(hand, 'entry.write', {
+        entryId,
+        boatId: shop.boatId,
+        workDate: MONDAY,
+        text: `Plank ${count}`,
+        spoken: false,
+        hours,
+      });
+      if (count % 4 === 0)
+        await shop.record.say(hand, 'entry.amend', { entryId, set: { text: `Plank ${count}, port` } });
+      if (count % 5 === 0)
+        await shop.record.say(shop.kit, 'entry.addTo', {
+          entryId: shop.entryId,
+          additionId: shop.record.newId(),
+          text: `and ${count}`,
+        });
     }
     expect(shop.ends()).toEqual([]);
     await twoFigures(shop);
@@ -58,7 +89,11 @@ describe('two figures of hours', () => {
     const shop = await shopWithEntry();
     await twoFigures(shop);
     const [end] = shop.ends();
-    expect(end).toMatchObject({ about: "Wes's hours", of: 'King plank up', where: 'Penny Candle, Mon 4 May' });
+    expect(end).toMatchObject({
+      about: "Wes's hours",
+      of: 'King plank up',
+      where: 'Penny Candle, Mon 4 May',
+    });
     expect(end!.values.map(({ words, who, when, why, stands }) => [words, who, when, why, stands])).toEqual([
       ['4 1/2 h', 'Wes', '07:04', 'as I remember it', true],
       ['3 h', 'Rosa', '07:03', 'as I remember it', false],
@@ -72,7 +107,9 @@ describe('two figures of hours', () => {
     const outcome = await press(shop, end!.values[1]!.take!);
     expect(outcome.outcome).toBe('kept');
     expect(shop.ends()).toEqual([]);
-    const { hours } = shop.record.store.row('entry', shop.entryId) as { hours: { personId: string; minutes: number }[] };
+    const { hours } = shop.record.store.row('entry', shop.entryId) as {
+      hours: { personId: string; minutes: number }[];
+    };
     expect(hours.find((figure) => figure.personId === shop.wes.personId)!.minutes).toBe(180);
   });
 
@@ -88,10 +125,23 @@ describe('other fields', () => {
   test('two wordings are both read whole, and one is taken', async () => {
     const shop = await shopWithEntry();
     const made = { text: [shop.madeBy] };
-    await shop.record.say(shop.rosa, 'entry.amend', { entryId: shop.entryId, set: { text: 'King plank up, two screws left' } }, made);
-    await shop.record.say(shop.orrin, 'entry.amend', { entryId: shop.entryId, set: { text: 'King plank up whole' } }, made);
+    await shop.record.say(
+      shop.rosa,
+      'entry.amend',
+      { entryId: shop.entryId, set: { text: 'King plank up, two screws left' } },
+      made,
+    );
+    await shop.record.say(
+      shop.orrin,
+      'entry.amend',
+      { entryId: shop.entryId, set: { text: 'King plank up whole' } },
+      made,
+    );
     const [end] = shop.ends();
-    expect(end!.values.map(({ words }) => words)).toEqual(['King plank up whole', 'King plank up, two screws left']);
+    expect(end!.values.map(({ words }) => words)).toEqual([
+      'King plank up whole',
+      'King plank up, two screws left',
+    ]);
     await press(shop, end!.values[1]!.take!);
     expect(shop.ends()).toEqual([]);
   });
@@ -102,8 +152,18 @@ describe('other fields', () => {
     await shop.record.say(shop.orrin, 'boat.add', { boatId: boatB, name: 'Brindle' });
     await shop.record.say(shop.orrin, 'boat.add', { boatId: boatC, name: 'Mallow' });
     const made = { stageId: [shop.madeBy] };
-    await shop.record.say(shop.rosa, 'entry.amend', { entryId: shop.entryId, set: { boatId: boatB, stageId: null } }, made);
-    await shop.record.say(shop.orrin, 'entry.amend', { entryId: shop.entryId, set: { boatId: boatC, stageId: null } }, made);
+    await shop.record.say(
+      shop.rosa,
+      'entry.amend',
+      { entryId: shop.entryId, set: { boatId: boatB, stageId: null } },
+      made,
+    );
+    await shop.record.say(
+      shop.orrin,
+      'entry.amend',
+      { entryId: shop.entryId, set: { boatId: boatC, stageId: null } },
+      made,
+    );
     const [end] = shop.ends();
     expect(end!.values.map(({ words }) => words)).toEqual(['Mallow', 'Brindle']);
     await press(shop, end!.values[1]!.take!);
@@ -115,8 +175,18 @@ describe('other fields', () => {
     const shop = await shopWithEntry();
     await shop.record.say(shop.rosa, 'entry.strike', { entryId: shop.entryId, why: 'twice', saw: [] });
     const { heads } = shop.record.store.row('entry', shop.entryId) as { heads: Record<string, string[]> };
-    await shop.record.say(shop.rosa, 'entry.restore', { entryId: shop.entryId, why: 'it was not' }, { struck: heads.struck! });
-    await shop.record.say(shop.orrin, 'entry.strike', { entryId: shop.entryId, why: 'it was twice', saw: [] }, { struck: heads.struck! });
+    await shop.record.say(
+      shop.rosa,
+      'entry.restore',
+      { entryId: shop.entryId, why: 'it was not' },
+      { struck: heads.struck! },
+    );
+    await shop.record.say(
+      shop.orrin,
+      'entry.strike',
+      { entryId: shop.entryId, why: 'it was twice', saw: [] },
+      { struck: heads.struck! },
+    );
     const [end] = shop.ends();
     expect(end!.values.map(({ words }) => words)).toEqual(['struck: it was twice', 'keep it']);
     expect(end!.values[1]!.take).toMatchObject({ kind: 'entry.restore', asksWhy: true });
@@ -128,7 +198,11 @@ describe('other fields', () => {
 describe('struck, and changed by one who did not know', () => {
   const struckAndChanged = async () => {
     const shop = await shopWithEntry();
-    await shop.record.say(shop.rosa, 'entry.strike', { entryId: shop.entryId, why: 'wrong day', saw: [shop.madeBy] });
+    await shop.record.say(shop.rosa, 'entry.strike', {
+      entryId: shop.entryId,
+      why: 'wrong day',
+      saw: [shop.madeBy],
+    });
     await shop.record.say(shop.wes, 'entry.amend', wesHours(shop, 180));
     return shop;
   };
@@ -155,7 +229,10 @@ describe('struck, and changed by one who did not know', () => {
 describe('what was set aside', () => {
   test('is said in words with its reason, and only what may be is admitted', async () => {
     const shop = await shopWithEntry();
-    await shop.record.say(shop.kit, 'entry.amend', { entryId: shop.entryId, set: { text: 'King plank is mine' } });
+    await shop.record.say(shop.kit, 'entry.amend', {
+      entryId: shop.entryId,
+      set: { text: 'King plank is mine' },
+    });
     await shop.record.say(shop.kit, 'winch.polish', { times: 2 });
     const [unknown, foreign] = readSetAsides(shop.record.viewAs(shop.orrin));
     expect(foreign).toMatchObject({
@@ -167,22 +244,34 @@ describe('what was set aside', () => {
       mayAdmit: true,
       mayDismiss: true,
     });
-    expect(unknown).toMatchObject({ what: 'Something this version does not know (winch.polish)', mayAdmit: false, mayDismiss: true });
+    expect(unknown).toMatchObject({
+      what: 'Something this version does not know (winch.polish)',
+      mayAdmit: false,
+      mayDismiss: true,
+    });
     expect(unknown!.raw).toContain('winch.polish');
   });
 
   test('is gone from the list once it is admitted, and then counts', async () => {
     const shop = await shopWithEntry();
-    await shop.record.say(shop.kit, 'entry.amend', { entryId: shop.entryId, set: { text: 'King plank is mine' } }, { text: [shop.madeBy] });
+    await shop.record.say(
+      shop.kit,
+      'entry.amend',
+      { entryId: shop.entryId, set: { text: 'King plank is mine' } },
+      { text: [shop.madeBy] },
+    );
     const [line] = readSetAsides(shop.record.viewAs(shop.orrin));
     await shop.record.say(shop.orrin, 'setAside.admit', { setAsideId: line!.id, why: 'he was there' });
     expect(readSetAsides(shop.record.viewAs(shop.orrin))).toEqual([]);
     expect(shop.record.store.row('entry', shop.entryId)).toMatchObject({ text: 'King plank is mine' });
   });
 
-  test('is the office\'s to read and not to decide', async () => {
+  test("is the office's to read and not to decide", async () => {
     const shop = await shopWithEntry();
     await shop.record.say(shop.kit, 'entry.amend', { entryId: shop.entryId, set: { text: 'mine' } });
-    expect(readSetAsides(shop.record.viewAs(shop.imelda))[0]).toMatchObject({ mayAdmit: false, mayDismiss: false });
+    expect(readSetAsides(shop.record.viewAs(shop.imelda))[0]).toMatchObject({
+      mayAdmit: false,
+      mayDismiss: false,
+    });
   });
 });

@@ -9,10 +9,13 @@ const TUESDAY_NOON = Date.parse('2026-05-05T16:00:00Z');
 const HOUR_MS = 3_600_000;
 
 describe('the demo shop', () => {
-  test('obeys the law: nothing is set aside but the stage that was not Lenny\'s to mark', async () => {
+  test("obeys the law: nothing is set aside but the stage that was not Lenny's to mark", async () => {
     const { outcomes, store, personId } = await demoWorld(TUESDAY_NOON);
     expect(outcomes.filter(({ outcome }) => outcome === 'set-aside')).toHaveLength(1);
-    const [row] = store.feed(0).filter(({ entity }) => entity === 'setAside').map((one) => one.row);
+    const [row] = store
+      .feed(0)
+      .filter(({ entity }) => entity === 'setAside')
+      .map((one) => one.row);
     expect(row).toMatchObject({ reason: 'not-entitled', state: 'waiting', authorId: personId('lenny') });
   });
 
@@ -20,7 +23,9 @@ describe('the demo shop', () => {
     const { view } = await demoWorld(TUESDAY_NOON);
     const ends = view.all('looseEnd');
     expect(ends).toHaveLength(1);
-    expect(ends[0]!.values.map(({ value }) => (value as { minutes: number }).minutes).sort()).toEqual([210, 270]);
+    expect(ends[0]!.values.map(({ value }) => (value as { minutes: number }).minutes).sort()).toEqual([
+      210, 270,
+    ]);
   });
 
   test('has tasks open, started, done, and done twice; an entry struck, one moved, one added to', async () => {
@@ -55,7 +60,8 @@ describe('the demo shop', () => {
     const days = new Set(view.all('entry').map((entry) => entry.workDate));
     for (const day of days) {
       const lines = hoursLines(view.all('entry').filter((entry) => entry.workDate === day));
-      for (const [personId, minutes] of sumHours(lines, 'person')) expect(minutes, `${view.find('person', personId)!.name} on ${day}`).toBeLessThanOrEqual(9 * 60);
+      for (const [personId, minutes] of sumHours(lines, 'person'))
+        expect(minutes, `${view.find('person', personId)!.name} on ${day}`).toBeLessThanOrEqual(9 * 60);
     }
   });
 

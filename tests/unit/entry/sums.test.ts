@@ -20,15 +20,29 @@ async function shopWithTwoBoats() {
 
 type Shop = Awaited<ReturnType<typeof shopWithTwoBoats>>;
 
-async function log({ record, boatA, stageA }: Shop, hand: Hand, hours: { personId: string; minutes: number }[]) {
+async function log(
+  { record, boatA, stageA }: Shop,
+  hand: Hand,
+  hours: { personId: string; minutes: number }[],
+) {
   const entryId = record.newId();
-  const entry = { entryId, boatId: boatA, stageId: stageA, workDate: '2026-05-04', text: 'Reefed seams', spoken: false };
+  const entry = {
+    entryId,
+    boatId: boatA,
+    stageId: stageA,
+    workDate: '2026-05-04',
+    text: 'Reefed seams',
+    spoken: false,
+  };
   await record.say(hand, 'entry.write', { ...entry, hours });
   return entryId;
 }
 
 function entriesOf({ record }: Shop): EntryRow[] {
-  return record.store.feed(0).filter(({ entity }) => entity === 'entry').map(({ row }) => row as EntryRow);
+  return record.store
+    .feed(0)
+    .filter(({ entity }) => entity === 'entry')
+    .map(({ row }) => row as EntryRow);
 }
 
 function linesOf(shop: Shop) {
@@ -92,7 +106,8 @@ test('whatever the entries, every cut comes to the sum of the entries that stand
     fc.property(fc.array(entry, { maxLength: 40 }), (entries) => {
       const standing = new Map(entries.map((row) => [row.id, row]));
       let expected = 0;
-      for (const row of standing.values()) for (const own of row.struck ? [] : row.hours) expected += own.minutes;
+      for (const row of standing.values())
+        for (const own of row.struck ? [] : row.hours) expected += own.minutes;
       const lines = hoursLines(entries);
       for (const cut of CUTS) {
         expect([...sumHours(lines, cut).values()].reduce((sum, minutes) => sum + minutes, 0)).toBe(expected);

@@ -1,0 +1,115 @@
+import { Link } from 'react-router-dom';
+import { BungMark } from '#src/components/bung-mark.tsx';
+import { Hours } from '#src/components/hours.tsx';
+import { KindSelect } from './kind-select.tsx';
+import type { Correction, EntryLine, Figure } from './read-entry.ts';
+
+interface EntryRowProps {
+  entry: EntryLine;
+  personName: string;
+}
+
+/** An entry under one person: its mark on the line, where, the words, and that person's hours. */
+export function EntryRow({ entry, personName }: EntryRowProps) {
+  const { figure, struck } = entry;
+  return (
+    <li className="relative grid grid-cols-[minmax(0,1fr)] gap-x-4 py-[5px] pl-[44px] sm:grid-cols-[minmax(0,1fr)_auto]">
+      <span className="absolute top-[6px] left-[1px] z-20">
+        <BungMark mark={entry.mark} />
+      </span>
+      <div className="min-w-0">
+        <Link
+          to={`/entry/${entry.id}`}
+          className="group block rounded-key break-words focus-visible:outline-offset-[2px]"
+        >
+          <span className="font-bold text-mahogany group-hover:underline">{entry.boatName}</span>
+          <span className="text-slate"> · {entry.stageName}</span>
+          {entry.author && <span className="text-slate"> · written by {entry.author}</span>}
+          <span className={`block ${struck ? 'text-slate line-through' : ''}`}>{entry.text}</span>
+        </Link>
+        <Notes entry={entry} />
+      </div>
+      {figure && (
+        <FigureCell entryId={entry.id} figure={figure} personName={personName} isStruck={struck !== null} />
+      )}
+    </li>
+  );
+}
+
+function Notes({ entry }: { entry: EntryLine }) {
+  const notes = [entry.struck, ...entry.flags].filter((words) => words !== null);
+  return (
+    <div className="text-[16px] leading-snug">
+      {entry.additions.map(({ id, who, text }) => (
+        <p key={id} className="border-l-2 border-bilge pl-2">
+          <span className="font-semibold">{who} added:</span> {text}
+        </p>
+      ))}
+      {notes.map((words) => (
+        <p key={words} className="text-slate">
+          {words}
+        </p>
+      ))}
+      {entry.figure?.corrections.map((correction) => (
+        <CorrectionLine key={correction.when + correction.beforeMinutes} correction={correction} />
+      ))}
+      {entry.figure && entry.figure.others.length > 0 && <OtherFigures figure={entry.figure} />}
+    </div>
+  );
+}
+
+function CorrectionLine({ correction: { beforeMinutes, who, when, why } }: { correction: Correction }) {
+  return (
+    <p className="text-slate">
+      was <Hours minutes={beforeMinutes} />
+      {why && <>: {why}</>} ({who}, {when})
+    </p>
+  );
+}
+
+function OtherFigures({ figure }: { figure: Figure }) {
+  return (
+    <p className="font-semibold">
+      {figure.others.map((minutes) => (
+        <span key={minutes}>
+          or <Hours minutes={minutes} />
+          {'? '}
+        </span>
+      ))}
+      <a href="#loose-ends" className="text-verdigris underline">
+        a loose end
+      </a>
+    </p>
+  );
+}
+
+interface FigureCellProps {
+  entryId: string;
+  figure: Figure;
+  personName: string;
+  isStruck: boolean;
+}
+
+function FigureCell({ entryId, figure, personName, isStruck }: FigureCellProps) {
+  if (isStruck || figure.minutes === 0) {
+    return (
+      <p className="text-slate sm:w-[236px] sm:text-right">
+        {isStruck ? (
+          <s>
+            <Hours minutes={figure.minutes} />
+          </s>
+        ) : (
+          <Hours minutes={0} />
+        )}
+      </p>
+    );
+  }
+  return (
+    <div className="flex items-center justify-between gap-3 py-1 sm:w-[236px] sm:items-start sm:py-0">
+      <p className="sm:w-[64px] sm:text-right">
+        <Hours minutes={figure.minutes} />
+      </p>
+      <KindSelect entryId={entryId} figure={figure} personName={personName} />
+    </div>
+  );
+}

@@ -1,0 +1,155 @@
+import { useState } from 'react';
+import { Link, useNavigate, useSearchParams } from 'react-router-dom';
+import { daySchema } from '#shared/sync/day.ts';
+import { Hours } from '#src/components/hours.tsx';
+import { Key, KeyLink } from '#src/components/key.tsx';
+import { keyLook } from '#src/components/key-look.ts';
+import { Sheet } from '#src/components/sheet.tsx';
+import { TextField } from '#src/components/text-field.tsx';
+import { useRead, useSyncState } from '#src/replica/hooks.tsx';
+import { counted, longDayWords, momentWords } from '#src/words/day-words.ts';
+import { readNeighbours, type DaySheet } from './read-day-sheet.ts';
+
+interface SheetHeadProps {
+  sheet: DaySheet;
+  isByBoat: boolean;
+  endCount: number;
+  setAsideCount: number;
+}
+
+/** The day in words, what it came to, and the ways to other days. */
+export function SheetHead({ sheet, isByBoat, endCount, setAsideCount }: SheetHeadProps) {
+  const today = useRead(['today'], (view) => view.today);
+  return (
+    <div className="grid gap-3 px-4 pt-5 pb-4 md:px-0">
+      <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-3">
+        <div className="flex flex-wrap items-baseline gap-x-4">
+          <h1 className="text-[34px] leading-tight font-bold tracking-[-0.01em]">
+            {longDayWords(sheet.day, today)}
+          </h1>
+          <p className="text-slate">
+            {counted(sheet.loggedCount, 'person', 'people')}, {counted(sheet.boats.length, 'boat')},{' '}
+            <Hours minutes={sheet.minutes} />
+            {sheet.isToday && ' so far'}
+          </p>
+        </div>
+        <DayKeys sheet={sheet} />
+      </div>
+      <AsLastHeard />
+      <div data-keys className="flex flex-wrap items-center justify-between gap-3">
+        <CutChoice isByBoat={isByBoat} />
+        <WaitingLink endCount={endCount} setAsideCount={setAsideCount} />
+      </div>
+    </div>
+  );
+}
+
+function DayKeys({ sheet }: { sheet: DaySheet }) {
+  const [isAsking, setAsking] = useState(false);
+  const [search] = useSearchParams();
+  const suffix = search.size > 0 ? `?${search}` : '';
+  const { previous, next, previousWords, nextWords } = readNeighbours(sheet.day);
+  return (
+    <div data-keys className="grid w-full auto-cols-fr grid-flow-col gap-3 sm:flex sm:w-auto">
+      <KeyLink to={`/day/${previous}${suffix}`}>
+        <span className="sr-only">The day before, </span>
+        {previousWords.slice(0, 3)}
+      </KeyLink>
+      {!sheet.isToday && <KeyLink to={`/day${suffix}`}>Today</KeyLink>}
+      <KeyLink to={`/day/${next}${suffix}`}>
+        <span className="sr-only">The day after, </span>
+        {nextWords.slice(0, 3)}
+      </KeyLink>
+      <Key onClick={() => setAsking(true)}>
+        <span className="sm:hidden">Other</span>
+        <span className="hidden sm:inline">Another day</span>
+      </Key>
+      {isAsking && <OtherDay sheet={sheet} onClose={() => setAsking(false)} />}
+    </div>
+  );
+}
+
+function OtherDay({ sheet, onClose }: { sheet: DaySheet; onClose: () => void }) {
+  const [day, setDay] = useState(sheet.day);
+  const navigate = useNavigate();
+  const isDay = daySchema.safeParse(day).success;
+  const show = () => {
+    if (!isDay) return;
+    onClose();
+    void navigate(`/day/${day}`);
+  };
+  return (
+    <Sheet
+      isOpen
+      onClose={onClose}
+      title="Another day"
+      foot={
+        <Key kind="main" onClick={show} disabled={!isDay}>
+          Show this day
+        </Key>
+      }
+    >
+      <form
+        onSubmit={(event) => {
+          event.preventDefault();
+          show();
+        }}
+      >
+        <TextField label="Which day" type="date" value={day} onChange={setDay} />
+      </form>
+    </Sheet>
+  );
+}
+
+/** Without signal the sheet says how old its news is. */
+function AsLastHeard() {
+  const sync = useSyncState();
+  const { timeZone, today } = useRead(['clock'], (view) => ({ timeZone: view.timeZone, today: view.today }));
+  if (sync.phase !== 'offline' && sync.phase !== 'failed') return null;
+  const heard = sync.lastHeardAt
+    ? `as last heard ${momentWords(sync.lastHeardAt, timeZone, today)}`
+    : 'nothing heard yet';
+  return (
+    <p className="justify-self-start bg-seam px-2 py-1 text-on-seam" role="status">
+      No signal here: this is {heard}. What you settle is held and sent later.
+    </p>
+  );
+}
+
+function CutChoice({ isByBoat }: { isByBoat: boolean }) {
+  const look = (isChosen: boolean) =>
+    `${keyLook('plain')} flex-1 rounded-none first:rounded-l-key last:rounded-r-key last:border-l-0 sm:flex-none ${isChosen ? '!bg-bilge !text-primer' : ''}`;
+  return (
+    <nav aria-label="How the day is laid out" className="flex w-full sm:w-auto">
+      <Link
+        to={{ search: '' }}
+        replace
+        className={look(!isByBoat)}
+        aria-current={!isByBoat ? 'true' : undefined}
+      >
+        By person
+      </Link>
+      <Link
+        to={{ search: 'by=boat' }}
+        replace
+        className={look(isByBoat)}
+        aria-current={isByBoat ? 'true' : undefined}
+      >
+        By boat
+      </Link>
+    </nav>
+  );
+}
+
+function WaitingLink({ endCount, setAsideCount }: Pick<SheetHeadProps, 'endCount' | 'setAsideCount'>) {
+  if (endCount + setAsideCount === 0) return null;
+  const words = [
+    endCount > 0 && counted(endCount, 'loose end'),
+    setAsideCount > 0 && `${setAsideCount} set aside`,
+  ];
+  return (
+    <a href="#loose-ends" className={`${keyLook('quiet')} xl:hidden`}>
+      {words.filter(Boolean).join(', ')}
+    </a>
+  );
+}
