@@ -13,25 +13,37 @@ interface WhyProps {
   /** The word on the key that does it. */
   confirm: string;
   isDanger?: boolean;
+  /** What kept it from being done, after `onConfirm`. */
+  problem?: string | undefined;
   /** Called with the reason, trimmed and never empty. */
   onConfirm: (reason: string) => void;
 }
 
 /** Asks for the reason before something is done that others will want to understand. */
-export function Why({ isOpen, onClose, title, question, confirm, isDanger = false, onConfirm }: WhyProps) {
+export function Why({ isOpen, ...rest }: WhyProps) {
+  return isOpen ? <OpenWhy {...rest} /> : null;
+}
+
+function OpenWhy({
+  onClose,
+  title,
+  question,
+  confirm,
+  isDanger = false,
+  problem,
+  onConfirm,
+}: Omit<WhyProps, 'isOpen'>) {
   const [reason, setReason] = useState('');
   const [isAsked, setAsked] = useState(false);
 
   function confirmReason() {
     if (reason.trim() === '') return setAsked(true);
     onConfirm(reason.trim());
-    setReason('');
-    setAsked(false);
   }
 
   return (
     <Sheet
-      isOpen={isOpen}
+      isOpen
       onClose={onClose}
       title={title}
       foot={
@@ -49,7 +61,7 @@ export function Why({ isOpen, onClose, title, question, confirm, isDanger = fals
         label={question}
         value={reason}
         onChange={setReason}
-        problem={isAsked && reason.trim() === '' ? 'Write the reason in a few words.' : undefined}
+        problem={isAsked && reason.trim() === '' ? 'Write the reason in a few words.' : problem}
       />
     </Sheet>
   );

@@ -60,9 +60,14 @@ function readActions(view: View, row: EntryRow): EntryActions {
     hoursOf: standing ? hoursOf : [],
     hoursOfAnybody: standing && mayAmend(view, row, hoursFor('somebody')),
     addTo: standing && mayDo(view, 'entry.addTo', {}, row),
-    strike: strike && standing,
+    // struck again, by one who knows what came since, it is a loose end no more
+    strike: strike && (standing || isStruckAndChanged(view, row)),
     restore: strike && !standing,
   };
+}
+
+function isStruckAndChanged(view: View, row: EntryRow): boolean {
+  return view.all('looseEnd').some((end) => end.rowId === row.id && end.kind === 'struck-and-changed');
 }
 
 function readRefusal(view: View, row: EntryRow, actions: EntryActions): string | null {

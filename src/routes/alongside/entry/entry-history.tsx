@@ -1,0 +1,37 @@
+import { Plank } from '#src/components/plank.tsx';
+import { Section } from '#src/components/page.tsx';
+import { Planks, Ribband } from '#src/components/ribband.tsx';
+import { Said } from '#src/routes/alongside/entry-parts.tsx';
+import type { HistoryLine } from '#src/routes/alongside/entry/read-history.ts';
+import { capital } from '#src/words/who.ts';
+
+/** Everything that was said about an entry, on the ribband line: nothing earlier is lost. */
+export function EntryHistory({ history }: { history: HistoryLine[] }) {
+  return (
+    <Section title="History">
+      <Ribband label="History of this entry, the newest first">
+        <Planks>
+          {history.map((line) => (
+            <Plank key={line.key} mark={line.mark}>
+              <p className="text-slate">
+                {line.when} · <span className="font-semibold">{capital(line.who)}</span> {line.did}
+              </p>
+              {line.before.map((value, index) => (
+                <p key={index} className="whitespace-pre-line text-slate line-through">
+                  <span className="sr-only">before: </span>
+                  <Said value={value} />
+                </p>
+              ))}
+              {line.value && (
+                <p className="whitespace-pre-line">
+                  <Said value={line.value} />
+                </p>
+              )}
+              {line.why && <p className="text-slate">Why: {line.why}</p>}
+            </Plank>
+          ))}
+        </Planks>
+      </Ribband>
+    </Section>
+  );
+}

@@ -1,0 +1,44 @@
+import { Key } from '#src/components/key.tsx';
+import { Notice } from '#src/components/notice.tsx';
+import { useHold } from '#src/replica/hooks.tsx';
+import { EndQuestion, Said } from '#src/routes/alongside/entry-parts.tsx';
+import type { EntryPage } from '#src/routes/alongside/entry/read-entry-page.ts';
+import { settlingOp } from '#src/routes/alongside/entry/settle.ts';
+import type { EndLine } from '#src/routes/alongside/read-entry-line.ts';
+import { capital } from '#src/words/who.ts';
+
+/** An entry's loose ends, each with the values and who said them; settled here by whoever may set the field. */
+export function LooseEnds({ page }: { page: EntryPage }) {
+  return page.line.ends.map((end) => <OneEnd key={end.id} end={end} page={page} />);
+}
+
+function OneEnd({ end, page }: { end: EndLine; page: EntryPage }) {
+  const hold = useHold();
+  return (
+    <div className="grid gap-3">
+      <EndQuestion end={end} />
+      {end.values.map((value) => {
+        const op = settlingOp(page, end, value.opId);
+        return (
+          <div key={value.opId} className="grid gap-1">
+            <p className="text-slate">
+              <Said value={value} />: {capital(value.who)} {value.at}
+              {value.stands && ', stands meanwhile'}
+            </p>
+            {op && (
+              <Key onClick={() => hold.mutate(op)}>
+                <span>
+                  It is <Said value={value} />
+                </span>
+              </Key>
+            )}
+          </div>
+        );
+      })}
+      {end.kind === 'struck-and-changed' && (
+        <p>Bring it back if what came still counts, or strike it again now that you know of it.</p>
+      )}
+      {hold.error && <Notice tone="error">{hold.error.message}</Notice>}
+    </div>
+  );
+}
