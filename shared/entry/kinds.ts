@@ -1,5 +1,5 @@
 import type { z } from 'zod';
-import { movedFields, movedRefs } from '../stage/moved.ts';
+import { isStageOfBoat, movedFields, movedRefs } from '../stage/moved.ts';
 import { saidFields, statementsOf } from '../sync/fields.ts';
 import { addItem, itemsOf, takeBackItems } from '../sync/items.ts';
 import { isCrewOrForeman, isForeman, isOneOf, type AnyOpKind, type Author, type OpKind, type RowLookup } from '../sync/op-kind.ts';
@@ -81,6 +81,7 @@ const write: OpKind<EntryWrite, EntryRow> = {
   rowId: (data) => data.entryId,
   makes: true,
   names: (data) => [...movedRefs(data), ...personRefs(data.hours)],
+  fits: isStageOfBoat,
   mayMake: isCrewOrForeman,
   reduce: (_row, op, facts) => writtenEntry(op, facts),
 };
@@ -118,6 +119,7 @@ const changes = rowKinds<EntryRow, EntrySet>({
   entity: 'entry',
   set: entrySetSchema,
   names: (set) => [...movedRefs(set), ...personRefs(set.hours)],
+  fits: isStageOfBoat,
   fields: setFields,
   mayAmend,
   mayStrike: (author, row) => isForeman(author) || (isOneOf(author, 'crew') && row.authorId === author.personId),

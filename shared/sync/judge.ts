@@ -40,6 +40,7 @@ export function judge({ kind, op, changes, names }: Understood, author: Author, 
     const isBarred = !isAdmitted && author.roles.every((role) => role === 'owner');
     return isBarred ? { reason: 'not-entitled' } : { reason: 'no-such-row', awaits: missing };
   }
+  if (kind.fits && !kind.fits(op.data, look)) return { reason: 'no-such-row' };
   const itemId = kind.itemId?.(op.data);
   const known = itemId && itemsOf(row).find((item) => item.id === itemId);
   if (known && known.opId !== op.id) return { reason: 'id-reused' };

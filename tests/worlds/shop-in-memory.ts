@@ -159,8 +159,8 @@ export class Phone {
     return (await this.sends()).at(-1)!;
   }
 
-  /** Has these taken in by the server as they are, whatever is held. */
-  sendsOnly(raws: unknown[]): Promise<Outcome[]> {
+  /** Has these taken in by the server as they are, whatever is held; it fails at those of `faulty`. */
+  sendsOnly(raws: unknown[], faulty?: ReadonlySet<number>): Promise<Outcome[]> {
     const { shop, deviceId, isRevoked, personIds } = this;
     return mergeBatch(
       shop.store,
@@ -173,6 +173,7 @@ export class Phone {
       },
       // what arrives has been through JSON
       JSON.parse(JSON.stringify(raws)) as unknown[],
+      faulty,
     );
   }
 
