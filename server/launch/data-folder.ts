@@ -4,7 +4,7 @@ import path from 'node:path';
 import { setTimeout as delay } from 'node:timers/promises';
 import { LaunchFailure } from './failure.ts';
 
-const WAIT_MAX_MS = 6000;
+const WAIT_MAX_MS = 5000;
 const LOOK_AGAIN_MS = 100;
 
 /** Makes the data folder where it is missing, and claims it for this process. */

@@ -1,10 +1,11 @@
 import { mkdir, readFile, rm } from 'node:fs/promises';
 import path from 'node:path';
-import { afterEach, expect, test } from 'vitest';
+import { afterEach, expect, test, vi } from 'vitest';
 import { isRunning, launch, makeDataFolder } from '#tests/worlds/launched.ts';
 import type { Launched } from '#tests/worlds/launched.ts';
 
 // The real `npm start`, with a PostgreSQL of its own, stopped and killed as a shop's machine would.
+vi.setConfig({ testTimeout: 90_000 }); // a busy machine makes several starts in one test slow
 const EMPTY = { RIBBAND_DEMO: '0' };
 const cleanUps: (() => Promise<unknown>)[] = [];
 afterEach(async () => {
@@ -135,4 +136,28 @@ test('an empty start prints a code that makes the first shop, once; later starts
   const second = await started(dataDir);
   await stopped(second);
   expect(second.lines.filter((line) => line.includes('code'))).toEqual([]);
+});
+
+test('a first start makes the demo shop, prints its accounts, and the foreman can sign in; a second start prints the same', async () => {
+  const dataDir = await dataFolder();
+  const first = await started(dataDir, {});
+  await first.says(/^demo owner /);
+  await stopped(first);
+  const second = await started(dataDir, {});
+  await second.says(/^demo owner /);
+
+  const [, , email, password] = (await second.says(/^demo foreman /)).split(' ');
+  const device = { id: '0197a3c0-0000-7000-8000-000000000001', label: 'Laptop' };
+  const response = await fetch(`${second.url}/api/session`, {
+    method: 'POST',
+    headers: { 'Content-Type': 'application/json' },
+    body: JSON.stringify({ email, password, device }),
+  });
+  expect(response.status).toBe(200);
+  await stopped(second);
+  const accounts = ({ lines }: Launched) => lines.filter((line) => /^demo \w+ \S+@\S+ \S+$/.test(line));
+  expect(new Set(accounts(second).map((line) => line.split(' ')[1]))).toEqual(
+    new Set(['crew', 'foreman', 'office', 'owner']),
+  );
+  expect(accounts(second)).toEqual(accounts(first));
 });
