@@ -34,7 +34,8 @@ function fromMetric(text: string): number | null {
 function fromFeet(text: string): number | null {
   const inches = /^(\d+(?:\.\d+)?)\s*(?:in|inch|inches|")$/.exec(text);
   if (inches) return Number(inches[1]) * INCH_MM;
-  const match = /^(\d+(?:\.\d+)?)\s*(?:ft|feet|foot|')\s*(?:(\d+(?:\.\d+)?)\s*(?:in|inch|inches|"|'')?)?$/.exec(text);
+  const match =
+    /^(\d+(?:\.\d+)?)\s*(?:ft|feet|foot|')\s*(?:(\d+(?:\.\d+)?)\s*(?:in|inch|inches|"|'')?)?$/.exec(text);
   return match ? Number(match[1]) * FOOT_MM + Number(match[2] ?? 0) * INCH_MM : null;
 }
 

@@ -23,7 +23,10 @@ export async function ask<T>(
 ): Promise<Asked<T>> {
   let response: Response;
   try {
-    const json = body === undefined ? {} : { headers: { 'Content-Type': 'application/json' }, body: JSON.stringify(body) };
+    const json =
+      body === undefined
+        ? {}
+        : { headers: { 'Content-Type': 'application/json' }, body: JSON.stringify(body) };
     response = await session.fetchAsMe(path, { method, ...json });
   } catch (error) {
     if (error instanceof TypeError) return { offline: true };

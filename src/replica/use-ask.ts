@@ -27,5 +27,7 @@ export function useAsk<T>(schema: z.ZodType<T>) {
 /** What to tell the person; undefined where it was done, or not asked yet. */
 export function askedWords(asked: Asked<unknown> | undefined): string | undefined {
   if (!asked || 'ok' in asked) return undefined;
-  return 'offline' in asked ? 'This needs signal, and there is none here. Try again when there is.' : asked.refused;
+  return 'offline' in asked
+    ? 'This needs signal, and there is none here. Try again when there is.'
+    : asked.refused;
 }

@@ -1,7 +1,12 @@
 import type { Role } from '#shared/identity/role.ts';
 import { listWords } from '#src/words/name-words.ts';
 
-export const ROLE_WORDS: Record<Role, string> = { crew: 'crew', foreman: 'foreman', office: 'office', owner: 'owner' };
+export const ROLE_WORDS: Record<Role, string> = {
+  crew: 'crew',
+  foreman: 'foreman',
+  office: 'office',
+  owner: 'owner',
+};
 
 /** What each role is for, in one line. */
 export const ROLE_NOTES: Record<Role, string> = {

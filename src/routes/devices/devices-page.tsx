@@ -41,8 +41,12 @@ function Device({ line, onRevoke }: { line: DeviceLine; onRevoke: () => void }) 
         <p>
           {line.people || 'nobody'} · {line.heard}
         </p>
-        {line.held && <p className="my-1 w-fit border-2 border-on-seam bg-seam px-2 text-on-seam">{line.held}</p>}
-        <p className="text-[16px] text-slate">{[line.version, ...line.notes, line.revoked].filter(Boolean).join(' · ')}</p>
+        {line.held && (
+          <p className="my-1 w-fit border-2 border-on-seam bg-seam px-2 text-on-seam">{line.held}</p>
+        )}
+        <p className="text-[16px] text-slate">
+          {[line.version, ...line.notes, line.revoked].filter(Boolean).join(' · ')}
+        </p>
         {line.gap && (
           <p className="mt-2 flex gap-2 border-l-[9px] border-redlead pl-3 font-semibold">
             <Icon name="warning" className="mt-[1px]" />

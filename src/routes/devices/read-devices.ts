@@ -27,10 +27,17 @@ export interface DeviceLine {
 export function readDevices(view: View): DeviceLine[] {
   const devices = view.all('device');
   const gaps = new Map(readGaps(view).map((gap) => [gap.deviceId, gap.words]));
-  const replacedBy = new Map(devices.flatMap((device) => (device.replaces ? [[device.replaces, device]] : [])));
+  const replacedBy = new Map(
+    devices.flatMap((device) => (device.replaces ? [[device.replaces, device]] : [])),
+  );
   const isOut = (device: DeviceRow) => Number(device.revokedAt !== null || replacedBy.has(device.id));
   return [...devices]
-    .sort((a, b) => isOut(a) - isOut(b) || heldCount(b) - heldCount(a) || ((a.lastHeardAt ?? '') < (b.lastHeardAt ?? '') ? 1 : -1))
+    .sort(
+      (a, b) =>
+        isOut(a) - isOut(b) ||
+        heldCount(b) - heldCount(a) ||
+        ((a.lastHeardAt ?? '') < (b.lastHeardAt ?? '') ? 1 : -1),
+    )
     .map((device) => ({
       id: device.id,
       label: device.label,
@@ -42,14 +49,18 @@ export function readDevices(view: View): DeviceLine[] {
       version: device.appVersion ? `version ${device.appVersion}` : 'version not known',
       notes: notesOf(devices, device, replacedBy.get(device.id)),
       gap: gaps.get(device.id) ?? null,
-      revoked: device.revokedAt && `shut out ${dayWords(dayAt(Date.parse(device.revokedAt), view.timeZone), view.today)}`,
+      revoked:
+        device.revokedAt &&
+        `shut out ${dayWords(dayAt(Date.parse(device.revokedAt), view.timeZone), view.today)}`,
     }));
 }
 
 function heldWords(view: View, device: DeviceRow): string | null {
   const count = heldCount(device);
   if (count === 0) return null;
-  const oldest = device.held?.oldest ? `, the oldest of ${momentWords(device.held.oldest, view.timeZone, view.today)}` : '';
+  const oldest = device.held?.oldest
+    ? `, the oldest of ${momentWords(device.held.oldest, view.timeZone, view.today)}`
+    : '';
   return `held ${counted(count, 'thing')}${oldest}`;
 }
 

@@ -24,7 +24,9 @@ export default function PeoplePage() {
           </Key>
         }
       >
-        {isOffline && <p className="px-4 pb-3 text-slate md:px-6">People are changed with signal. There is none now.</p>}
+        {isOffline && (
+          <p className="px-4 pb-3 text-slate md:px-6">People are changed with signal. There is none now.</p>
+        )}
         <PersonList lines={here} isOffline={isOffline} onOpen={setOpen} />
       </Section>
       {left.length > 0 && (

@@ -1,6 +1,11 @@
 import { useState } from 'react';
 import { z } from 'zod';
-import { newPersonSchema, personAnswerSchema, personChangeSchema, type PersonRow } from '#shared/identity/person.ts';
+import {
+  newPersonSchema,
+  personAnswerSchema,
+  personChangeSchema,
+  type PersonRow,
+} from '#shared/identity/person.ts';
 import { roleSchema, type Role } from '#shared/identity/role.ts';
 import { CheckKey } from '#src/components/check-key.tsx';
 import { Key } from '#src/components/key.tsx';
@@ -75,7 +80,13 @@ export function PersonSheet({ person, onClose }: PersonSheetProps) {
         }}
       >
         {askedWords(asked) && <Notice tone="error">{askedWords(asked)}</Notice>}
-        <TextField label="Name" value={draft.name} problem={problems.name} onChange={(name) => change({ name })} autoComplete="off" />
+        <TextField
+          label="Name"
+          value={draft.name}
+          problem={problems.name}
+          onChange={(name) => change({ name })}
+          autoComplete="off"
+        />
         <TextField
           label="E-mail"
           type="email"
@@ -87,7 +98,11 @@ export function PersonSheet({ person, onClose }: PersonSheetProps) {
         />
         <TextField
           label={person ? 'New password' : 'Password'}
-          hint={person ? 'Only where it is to change; they then sign in again.' : 'At least 8 characters. Say it to them.'}
+          hint={
+            person
+              ? 'Only where it is to change; they then sign in again.'
+              : 'At least 8 characters. Say it to them.'
+          }
           value={draft.password}
           problem={problems.password}
           onChange={(password) => change({ password })}
@@ -103,7 +118,9 @@ export function PersonSheet({ person, onClose }: PersonSheetProps) {
                 label={ROLE_WORDS[role]}
                 note={ROLE_NOTES[role]}
                 isChecked={draft.roles.includes(role)}
-                onChange={(isOn) => change({ roles: isOn ? [...draft.roles, role] : draft.roles.filter((one) => one !== role) })}
+                onChange={(isOn) =>
+                  change({ roles: isOn ? [...draft.roles, role] : draft.roles.filter((one) => one !== role) })
+                }
               />
             ))}
           {problems.roles && <p className="font-semibold text-redlead">{problems.roles}</p>}
@@ -111,7 +128,11 @@ export function PersonSheet({ person, onClose }: PersonSheetProps) {
         <button type="submit" hidden />
       </form>
       {person && person.id !== me?.personId && (
-        <Key kind={person.leftAt ? 'plain' : 'danger'} disabled={isPending} onClick={() => setLeft(!person.leftAt)}>
+        <Key
+          kind={person.leftAt ? 'plain' : 'danger'}
+          disabled={isPending}
+          onClick={() => setLeft(!person.leftAt)}
+        >
           {person.leftAt ? `${person.name} is back` : `${person.name} has left the shop`}
         </Key>
       )}

@@ -29,6 +29,16 @@ test.each([
 
 test('what is written is read back to within half an inch, or half a centimetre', () => {
   const lengths = fc.integer({ min: 13, max: 60_000 });
-  fc.assert(fc.property(lengths, (mm) => Math.abs((parseBoatLength(boatLengthText(mm, 'imperial'), 'imperial') ?? 0) - mm) <= 13.2));
-  fc.assert(fc.property(lengths, (mm) => Math.abs((parseBoatLength(boatLengthText(mm, 'metric'), 'metric') ?? 0) - mm) <= 5));
+  fc.assert(
+    fc.property(
+      lengths,
+      (mm) => Math.abs((parseBoatLength(boatLengthText(mm, 'imperial'), 'imperial') ?? 0) - mm) <= 13.2,
+    ),
+  );
+  fc.assert(
+    fc.property(
+      lengths,
+      (mm) => Math.abs((parseBoatLength(boatLengthText(mm, 'metric'), 'metric') ?? 0) - mm) <= 5,
+    ),
+  );
 });
