@@ -1,19 +1,9 @@
-import type { Op } from '#shared/sync/op.ts';
+import type { Op, Reason } from '#shared/sync/op.ts';
+import type { HoldOptions } from './compose-op.ts';
+import type { Remembered } from './person-store.ts';
 import type { Session } from './session.ts';
 import type { SyncResult, SyncState } from './sync-state.ts';
 import type { View } from './view.ts';
-
-/** What to compose an op with beyond its kind and data: `rowId` and `fields` where they cannot be told from the data. */
-export interface HoldOptions {
-  rowId?: string;
-  fields?: string[];
-}
-
-/** Where a person was last; null where nothing is remembered. */
-export interface Remembered {
-  boatId: string | null;
-  stageId: string | null;
-}
 
 /** The phone's replica of the record. */
 export interface Replica {
@@ -27,6 +17,8 @@ export interface Replica {
   newId(): string;
   syncNow(): Promise<SyncResult>;
   syncState(): SyncState;
+  /** What this device has sent and still keeps, the newest answer first. */
+  sent(): SentItem[];
   readonly draft: {
     read<T>(key: string): T | undefined;
     write(key: string, value: unknown): Promise<void>;
