@@ -38,7 +38,13 @@ function storageWarning({ storage, heldOps, oldestHeldAt }: SyncState, { device,
 function gapWarning({ replacedDevice }: SyncState, { timeZone, today }: Here): Warning[] {
   if (!replacedDevice) return [];
   const { label, lastHeardAt } = replacedDevice;
-  if (!lastHeardAt) return [{ kind: 'gap', words: `${label} was never heard. What was said on it is not here.` }];
+  if (!lastHeardAt)
+    return [{ kind: 'gap', words: `${label} was never heard. What was said on it is not here.` }];
   const heard = momentWords(lastHeardAt, timeZone, today);
-  return [{ kind: 'gap', words: `Your old device, ${label}, was last heard ${heard}. Anything said on it after that is not here.` }];
+  return [
+    {
+      kind: 'gap',
+      words: `Your old device, ${label}, was last heard ${heard}. Anything said on it after that is not here.`,
+    },
+  ];
 }

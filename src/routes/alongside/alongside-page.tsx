@@ -20,7 +20,7 @@ import { Warnings } from '#src/shell/warnings.tsx';
 const DAYS_AT_FIRST = 14;
 
 /** Where the crew log: a boat's days on the ribband line, and the keys to add to them. */
-export function Component() {
+export default function AlongsidePage() {
   const [where, choose] = useWhere();
   const [isChoosing, setChoosing] = useState(false);
   const [daysMax, setDaysMax] = useState(DAYS_AT_FIRST);

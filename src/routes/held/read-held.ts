@@ -1,4 +1,5 @@
 import type { SetAsideRow } from '#shared/set-aside/set-aside.ts';
+import type { SentItem } from '#src/replica/replica.ts';
 import type { View } from '#src/replica/view.ts';
 import { momentWords, spanWords } from '#src/words/day-words.ts';
 import { opWords, type OpInWords } from '#src/words/op-words.ts';
@@ -23,13 +24,22 @@ export interface SetAsideLine extends OpInWords {
   isWaiting: boolean;
 }
 
+export interface SentLine extends OpInWords {
+  id: string;
+  /** 'Kept 14:05' */
+  became: string;
+  isLoose: boolean;
+}
+
+const SENT_SHOWN_MAX = 30;
+
 /** What this device has not sent yet, the oldest first. */
-export function readHeld(view: View, nowMs: number): HeldLine[] {
+export function readHeld(view: View): HeldLine[] {
   return view.held.map(({ op, personId, heldSince }) => ({
     ...opWords(view, op),
     id: op.id,
     made: momentWords(heldSince, view.timeZone, view.today),
-    age: spanWords(Math.max(nowMs - Date.parse(heldSince), 0)),
+    age: spanWords(Math.max(view.nowMs - Date.parse(heldSince), 0)),
     whose: personId === view.me.personId ? null : whoWords(view, personId),
   }));
 }
@@ -57,4 +67,24 @@ function stateWords(view: View, row: SetAsideRow): string {
   const by = row.by ? ` by ${whoWords(view, row.by)}` : '';
   const at = row.at ? ` ${momentWords(row.at, view.timeZone, view.today)}` : '';
   return `${did}${by}${at}${row.why ? `: ${row.why}` : ''}.`;
+}
+
+/** What this person sent from here lately, and what the server made of it. */
+export function readSent(view: View, sent: SentItem[]): SentLine[] {
+  return sent
+    .filter(({ personId }) => personId === view.me.personId)
+    .slice(0, SENT_SHOWN_MAX)
+    .map((item) => ({
+      ...opWords(view, item.op),
+      id: item.op.id,
+      became: becameWords(view, item),
+      isLoose: item.outcome !== 'kept',
+    }));
+}
+
+function becameWords(view: View, { outcome, reason, answeredAt }: SentItem): string {
+  const at = momentWords(answeredAt, view.timeZone, view.today);
+  if (outcome === 'kept') return `Kept ${at}`;
+  if (outcome === 'loose-end') return `Kept ${at}. Somebody else had said otherwise, so it is a loose end.`;
+  return `Set aside ${at}. ${reason ? REASON_WORDS[reason] : ''}`.trim();
 }

@@ -16,7 +16,7 @@ import { RecordBar } from '#src/shell/record-bar.tsx';
 import { capital } from '#src/words/who.ts';
 
 /** An entry in full: its words, what was said about it since, and what this person may do with it. */
-export function Component() {
+export default function EntryPageScreen() {
   const { id = '' } = useParams();
   const page = useRead(['entry', id], (view) => readEntryPage(view, id));
   const [change, setChange] = useState<Change | null>(null);

@@ -7,7 +7,7 @@ import { EntryForm } from '#src/routes/alongside/log/entry-form.tsx';
 import { useWhere } from '#src/routes/alongside/use-where.ts';
 
 /** The form for a new entry. */
-export function Component() {
+export default function LogPage() {
   const [where, choose] = useWhere();
   const navigate = useNavigate();
   // the form keeps the place that it was opened at, or that its draft has, whatever is remembered meanwhile
