@@ -48,7 +48,12 @@ function Tasks({ where }: { where: Where }) {
         doings.undo && (
           <KeyRack>
             <div className="-m-3">
-              <Undo key={doings.undo.key} {...doings.undo} />
+              <Undo
+                key={doings.undo.markId}
+                words={doings.undo.words}
+                onUndo={doings.undo.onUndo}
+                onGone={doings.undo.onGone}
+              />
             </div>
           </KeyRack>
         )

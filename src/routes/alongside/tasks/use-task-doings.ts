@@ -6,7 +6,7 @@ import { openingWords } from '#src/words/name-words.ts';
 const TITLE_LENGTH_MAX = 40;
 
 interface UndoTick {
-  key: string;
+  markId: string;
   words: string;
   onUndo: () => void;
   onGone: () => void;
@@ -30,7 +30,7 @@ export function useTaskDoings(): TaskDoings {
 
   function undoOf({ taskId, markId, title }: NonNullable<typeof ticked>): UndoTick {
     return {
-      key: markId,
+      markId,
       words: `Ticked off: ${openingWords(title, TITLE_LENGTH_MAX)}`,
       onUndo() {
         setTicked(null);
