@@ -1,6 +1,7 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { createContext, useContext, useEffect, useSyncExternalStore, type ReactNode } from 'react';
-import type { HoldOptions, Replica } from './replica.ts';
+import type { HoldOptions } from './compose-op.ts';
+import type { Replica } from './replica.ts';
 import type { Me, View } from './view.ts';
 
 const ReplicaContext = createContext<Replica | null>(null);
@@ -10,7 +11,11 @@ const READS = 'replica';
 export function ReplicaProvider({ replica, children }: { replica: Replica; children: ReactNode }) {
   const queryClient = useQueryClient();
   useEffect(
-    () => replica.subscribe(() => void queryClient.invalidateQueries({ queryKey: [READS] })),
+    () =>
+      replica.subscribe(() => {
+        // with nobody signed in there is no view to read
+        if (replica.session.current()) void queryClient.invalidateQueries({ queryKey: [READS] });
+      }),
     [replica, queryClient],
   );
   return <ReplicaContext value={replica}>{children}</ReplicaContext>;

@@ -5,6 +5,15 @@ import type { Session } from './session.ts';
 import type { SyncResult, SyncState } from './sync-state.ts';
 import type { View } from './view.ts';
 
+/** An op that was sent, and what its first answer made of it; `answeredAt` is the server's time. */
+export interface SentItem {
+  op: Op;
+  personId: string;
+  outcome: 'kept' | 'loose-end' | 'set-aside';
+  reason?: Reason;
+  answeredAt: string;
+}
+
 /** The phone's replica of the record. */
 export interface Replica {
   readonly session: Session;

@@ -1,0 +1,245 @@
+import { dayAt } from '#shared/sync/day.ts';
+import type { Op } from '#shared/sync/op.ts';
+import { composeOp, readHoldData, type HoldOptions } from './compose-op.ts';
+import { DeviceStore } from './device-store.ts';
+import { HoldError } from './hold-error.ts';
+import { idMaker } from './new-id.ts';
+import { PersonStore, type Remembered } from './person-store.ts';
+import type { Replica, SentItem } from './replica.ts';
+import { unsealed, type Seal } from './seal.ts';
+import { LiveSession } from './session.ts';
+import { composeSyncState, type Attempt } from './standing.ts';
+import { Syncer } from './sync-once.ts';
+import type { SyncResult, SyncState } from './sync-state.ts';
+import { Turns } from './turns.ts';
+import { makeView, type Me, type View } from './view.ts';
+import type { World } from './world.ts';
+
+const NOTHING_REMEMBERED: Remembered = { boatId: null, stageId: null };
+
+/** What a view was made of; while all of it is the same, so is the view. */
+type MadeOf = [Me, PersonStore['rows'], DeviceStore['outbox'], DeviceStore['sent'], string];
+
+/** Opens the replica of whoever is signed in on this device, with signal or without. */
+export async function openReplica(world: World, seal: Seal = unsealed): Promise<LiveReplica> {
+  let now = world.now;
+  const newId = idMaker(() => now(), world.randomBytes);
+  const device = await DeviceStore.open(world, newId);
+  now = () => device.nowMs();
+  const replica = new LiveReplica(world, seal, device, newId);
+  await replica.session.load();
+  await replica.readStorage();
+  return replica;
+}
+
+export class LiveReplica implements Replica {
+  readonly session: LiveSession;
+  readonly newId: () => string;
+  private readonly world: World;
+  private readonly seal: Seal;
+  private readonly device: DeviceStore;
+  private readonly syncer: Syncer;
+  private readonly syncs = new Turns();
+  private readonly listeners = new Set<() => void>();
+  private readonly leaveChannel: () => void;
+  private person: PersonStore | null = null;
+  private seen: { view: View; madeOf: MadeOf } | null = null;
+  private queuedSync: Promise<SyncResult> | null = null;
+  private attempt: Attempt = { phase: 'idle' };
+  private storage: SyncState['storage'] = 'unknown';
+  private isStorageAsked = false;
+  private lastState: SyncState | null = null;
+
+  constructor(world: World, seal: Seal, device: DeviceStore, newId: () => string) {
+    this.world = world;
+    this.seal = seal;
+    this.device = device;
+    this.newId = newId;
+    this.session = new LiveSession({
+      world,
+      device,
+      prepare: (me) => this.prepare(me),
+      onChange: () => this.changed(),
+    });
+    this.syncer = new Syncer({ world, device, fetchAs: (...request) => this.session.fetchAs(...request) });
+    device.onNewRows = async () => this.person?.catchUp();
+    this.leaveChannel = world.channel.listen((about) => void this.hearTab(about));
+  }
+
+  close(): void {
+    this.leaveChannel();
+    this.device.close();
+    this.person?.close();
+  }
+
+  readonly subscribe = (listener: () => void): (() => void) => {
+    this.listeners.add(listener);
+    return () => this.listeners.delete(listener);
+  };
+
+  readonly view = (): View => {
+    const { device, person, session } = this;
+    const me = session.current();
+    if (!me || !person) throw new Error('Nobody is signed in.');
+    const madeOf: MadeOf = [me, person.rows, device.outbox, device.sent, this.today()];
+    if (!this.seen?.madeOf.every((part, index) => part === madeOf[index])) {
+      this.seen = { view: this.makeView(me, person), madeOf };
+    }
+    return this.seen!.view;
+  };
+
+  private makeView(me: Me, person: PersonStore): View {
+    const { device, session, world } = this;
+    return makeView({
+      me,
+      rows: person.rows,
+      held: device.outbox.map(({ op, heldSince }) => ({ op, personId: op.personId, heldSince })),
+      unheard: device.sent
+        .filter(({ outcome, inRowsOf }) => outcome !== 'set-aside' && !inRowsOf.includes(person.personId))
+        .map(({ op, orderedAt, answeredAt }) => ({ op, orderedAt, receivedAt: answeredAt })),
+      rolesOnDevice: session.rolesOnDevice,
+      nowMs: device.nowMs(),
+      deviceTimeZone: world.timeZone,
+    });
+  }
+
+  async hold(kind: string, data: object, options: HoldOptions = {}): Promise<Op> {
+    const me = this.session.current();
+    if (!me) throw new HoldError('Nobody is signed in on this device.');
+    const plain = readHoldData(data);
+    const made = { id: this.newId(), personId: me.personId };
+    for (;;) {
+      const op = await this.device
+        .hold((at) => composeOp(kind, plain, options, { ...made, at, view: this.view() }))
+        .catch(asHoldError);
+      if (op) {
+        this.changed();
+        this.world.channel.post('record');
+        void this.askToKeep();
+        return op;
+      }
+      await this.device.catchUp();
+    }
+  }
+
+  /** Asks while another is under way wait for one more round together. */
+  readonly syncNow = (): Promise<SyncResult> => {
+    this.queuedSync ??= this.syncs.take(() => {
+      this.queuedSync = null;
+      return this.sync();
+    });
+    return this.queuedSync;
+  };
+
+  private async sync(): Promise<SyncResult> {
+    const { person, world } = this;
+    if (!person) return { outcome: 'sign-in-needed' };
+    this.tried({ phase: 'syncing' });
+    const work = () => this.syncer.sync(person);
+    try {
+      const result = await (world.locks ? world.locks.request('ribband-sync', work) : work());
+      this.tried(attemptFrom(result));
+      return result;
+    } catch (error) {
+      this.tried({ phase: 'failed', words: 'Something went wrong on this device. What is held is untouched.' });
+      throw error;
+    } finally {
+      world.channel.post('record');
+    }
+  }
+
+  private tried(attempt: Attempt): void {
+    this.attempt = attempt;
+    this.changed();
+  }
+
+  readonly syncState = (): SyncState => {
+    const { device, person, session, attempt, storage } = this;
+    const state = composeSyncState({ device, person, attempt, storage, needsSignIn: session.record.needsSignIn });
+    if (JSON.stringify(state) !== JSON.stringify(this.lastState)) this.lastState = state;
+    return this.lastState!;
+  };
+
+  readonly sent = (): SentItem[] =>
+    this.device.sent
+      .map(({ op, outcome, reason, answeredAt }) => ({ op, personId: op.personId, outcome, ...(reason ? { reason } : {}), answeredAt }))
+      .reverse();
+
+  readonly draft: Replica['draft'] = {
+    read: <T>(key: string) => this.person?.drafts.get(key) as T | undefined,
+    write: async (key, value) => {
+      await this.signedIn().writeDraft(key, value);
+      this.world.channel.post('drafts');
+    },
+    clear: async (key) => {
+      await this.signedIn().writeDraft(key, undefined);
+      this.world.channel.post('drafts');
+    },
+  };
+
+  readonly remember: Replica['remember'] = {
+    read: () => this.person?.remembered ?? NOTHING_REMEMBERED,
+    write: async (remembered) => this.signedIn().writeRemembered(remembered),
+  };
+
+  /** Tells those who listen where a new day has begun since the last view. */
+  readonly noticeDay = (): void => {
+    if (this.seen && this.seen.view.today !== this.today()) this.changed();
+  };
+
+  async readStorage(): Promise<void> {
+    // a browser that does not answer this has not promised anything
+    const isPersistent = await this.world.storage?.persisted().catch(() => false);
+    if (isPersistent) this.storage = 'persistent';
+  }
+
+  private signedIn(): PersonStore {
+    if (!this.person) throw new Error('Nobody is signed in.');
+    return this.person;
+  }
+
+  private today(): string {
+    const shopZone = this.seen?.view.timeZone ?? this.world.timeZone;
+    return dayAt(this.device.nowMs(), shopZone);
+  }
+
+  private changed(): void {
+    for (const listener of [...this.listeners]) listener();
+  }
+
+  private async prepare(me: Me | null): Promise<() => void> {
+    const before = this.person;
+    if (me?.personId === before?.personId) return () => {};
+    const next = me && (await PersonStore.open(this.world, this.seal, me.personId));
+    return () => {
+      this.person = next;
+      this.attempt = { phase: 'idle' };
+      before?.close();
+    };
+  }
+
+  private async hearTab(about: string): Promise<void> {
+    if (about === 'session') await this.session.load();
+    else if (about === 'drafts') await this.person?.readDrafts();
+    else await this.device.catchUp();
+    this.changed();
+  }
+
+  private async askToKeep(): Promise<void> {
+    if (this.isStorageAsked || !this.world.storage) return;
+    this.isStorageAsked = true;
+    const isKept = await this.world.storage.persist().catch(() => false);
+    this.storage = isKept ? 'persistent' : 'best-effort';
+    this.changed();
+  }
+}
+
+function attemptFrom(result: SyncResult): Attempt {
+  if (result.outcome === 'failed') return { phase: 'failed', words: result.words };
+  return { phase: result.outcome === 'offline' ? 'offline' : 'idle' };
+}
+
+function asHoldError(error: unknown): never {
+  const isFull = error instanceof DOMException && error.name === 'QuotaExceededError';
+  throw isFull ? new HoldError('This device has no room left, so this could not be kept. Free some room and try again.') : error;
+}

@@ -1,0 +1,37 @@
+import type { DeviceRow } from '#shared/identity/device.ts';
+import { clockAheadMs } from './device-clock.ts';
+import type { DeviceStore } from './device-store.ts';
+import type { PersonStore } from './person-store.ts';
+import type { SyncState } from './sync-state.ts';
+
+/** How the last attempt to send and hear stands. */
+export type Attempt = { phase: 'idle' | 'syncing' | 'offline' } | { phase: 'failed'; words: string };
+
+interface Standing {
+  device: DeviceStore;
+  person: PersonStore | null;
+  attempt: Attempt;
+  storage: SyncState['storage'];
+  needsSignIn: boolean;
+}
+
+export function composeSyncState({ device, person, attempt, storage, needsSignIn }: Standing): SyncState {
+  const replaced = person && replacedDevice(device.deviceId, person);
+  return {
+    phase: needsSignIn && attempt.phase !== 'syncing' ? 'sign-in-needed' : attempt.phase,
+    heldOps: device.outbox.length,
+    oldestHeldAt: device.outbox[0]?.heldSince ?? null,
+    lastHeardAt: person?.heardAt ?? null,
+    clockAheadMs: clockAheadMs(device.state.offsetMs),
+    storage,
+    ...('words' in attempt ? { words: attempt.words } : {}),
+    ...(replaced ? { replacedDevice: replaced } : {}),
+  };
+}
+
+function replacedDevice(deviceId: string, { rows }: PersonStore): SyncState['replacedDevice'] | null {
+  const rowOf = (id: string) => rows.get(`device/${id}`)?.row as DeviceRow | undefined;
+  const replaces = rowOf(deviceId)?.replaces;
+  const replaced = replaces && rowOf(replaces);
+  return replaced ? { label: replaced.label, lastHeardAt: replaced.lastHeardAt } : null;
+}
