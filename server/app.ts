@@ -1,15 +1,11 @@
 import express from 'express';
 import type { Express } from 'express';
-import { z } from 'zod';
 import { appShell } from './middleware/app-shell.ts';
 import { notFound, problemHandler } from './middleware/problem.ts';
 import { requestLog } from './middleware/request-log.ts';
 import { compressed, securityHeaders } from './middleware/security.ts';
 import type { Parts } from './parts.ts';
 import { apiRoutes } from './routes/api.ts';
-
-// zod otherwise probes for eval, which the app's content security policy reports as a violation
-z.config({ jitless: true });
 
 export type AppParts = Omit<Parts, 'onChanged'> & {
   /** where the built front end is; without it only the API is served */

@@ -21,7 +21,7 @@ import {
   type DemoPerson,
   type ShopWords,
 } from './demo-people.ts';
-import { makeDemoRecord, type DemoDeviceLine, type DemoRecord } from './demo-record.ts';
+import { makeDemoRecord, type DemoRecord } from './demo-record.ts';
 import type { DemoBatch } from './demo-script.ts';
 import { makeSecondRecord } from './second-record.ts';
 
@@ -85,10 +85,10 @@ async function seedShop(
     await addPerson(database, transaction, shopId, { ...people[key]!, id, passwordHash });
   }
   for (const device of record.devices) await addDevice(database, transaction, shopId, device);
-  for (const batch of record.batches) await takeIn(database, transaction, shopId, batch, timeZone);
+  for (const batch of record.batches) await takeIn(transaction, shopId, batch, timeZone);
   for (const { boatId, personId } of record.owners)
     await setBoatOwners(database, transaction, shopId, boatId, [personId]);
-  for (const device of record.devices) await hearLast(database, transaction, shopId, device);
+  for (const device of record.devices) await hearLast(transaction, shopId, device);
 }
 
 async function addDevice(
@@ -102,7 +102,6 @@ async function addDevice(
 }
 
 async function takeIn(
-  database: Database,
   transaction: Transaction,
   shopId: string,
   { deviceId, personId, receivedMs, ops }: DemoBatch,
@@ -112,16 +111,15 @@ async function takeIn(
   const device = await readDevice(transaction, sender);
   const from = await readBatchFrom(transaction, sender, device, timeZone, receivedMs);
   await mergeBatch(new PostgresStore(transaction, shopId), from, ops);
-  await hearDevice(database, transaction, sender, device, { nowMs: receivedMs });
+  await hearDevice(transaction, sender, device, { nowMs: receivedMs });
 }
 
 async function hearLast(
-  database: Database,
   transaction: Transaction,
   shopId: string,
   { id, personIds, lastHeardMs, held }: DemoDeviceLine,
 ): Promise<void> {
   const sender: Sender = { shopId, deviceId: id, personId: personIds[0]! };
   const device = await readDevice(transaction, sender);
-  await hearDevice(database, transaction, sender, device, { nowMs: lastHeardMs, held, appVersion: version });
+  await hearDevice(transaction, sender, device, { nowMs: lastHeardMs, held, appVersion: version });
 }

@@ -2,7 +2,6 @@ import { Router } from 'express';
 import type { Request, RequestHandler } from 'express';
 import {
   OPS_PER_REQUEST_MAX,
-  ROWS_PER_ANSWER_MAX,
   SYNC_BODY_BYTES_MAX,
   syncAnswerSchema,
   syncRequestSchema,
@@ -13,10 +12,8 @@ import { Problem, parseBody } from '#server/middleware/problem.ts';
 import { requireSession, sessionOf } from '#server/middleware/session.ts';
 import type { Operation } from '#server/openapi/operation.ts';
 import type { Parts } from '#server/parts.ts';
-import { answerText } from '#server/sync/answer.ts';
+import { exchange } from '#server/sync/exchange.ts';
 import { isNestedDeeperThan } from '#server/sync/nesting.ts';
-import { pull, type Page } from '#server/sync/pull.ts';
-import { receive } from '#server/sync/receive.ts';
 
 /** PostgreSQL and the merge both walk JSON by recursion; nothing that people do is nested a tenth as deep. */
 const NESTING_MAX = 500;
@@ -48,14 +45,11 @@ export function syncRoutes(parts: Parts): Router {
 function sync(parts: Parts): RequestHandler {
   return async (request, response) => {
     const session = sessionOf(request);
-    const { deviceId, cursor, ops, limit = ROWS_PER_ANSWER_MAX, held, appVersion } = readRequest(request);
-    if (deviceId !== session.deviceId) throw new Problem(403, 'This token is for another device.');
-    const nowMs = parts.now();
-    const { outcomes, seq } = await receive(parts, session, ops, { held, appVersion, nowMs });
-    if (seq !== null) parts.onChanged(session.shopId, seq);
-    const page = session.isRevoked ? nothingFrom(cursor) : await pull(parts.database, session.shopId, session.personId, cursor, limit);
+    const asked = readRequest(request);
+    if (asked.deviceId !== session.deviceId) throw new Problem(403, 'This token is for another device.');
+    const text = await exchange(parts, session, asked);
     // ended by hand: Express would first hash the whole of it for an ETag that no POST needs
-    response.set('Cache-Control', 'no-store').type('json').end(answerText(outcomes, page, nowMs));
+    response.set('Cache-Control', 'no-store').type('json').end(text);
   };
 }
 
@@ -66,9 +60,4 @@ function readRequest(request: Request): SyncRequest {
   }
   if (isNestedDeeperThan(ops, NESTING_MAX)) throw new Problem(400, `An op is nested deeper than ${NESTING_MAX} levels.`);
   return parseBody(syncRequestSchema, request.body);
-}
-
-/** A revoked device is told nothing. */
-function nothingFrom(cursor: string | null): Page {
-  return { rows: [], cursor: cursor ?? '', more: false, reset: false, replayFrom: null };
 }

@@ -1,8 +1,6 @@
 import type { Transaction } from 'sequelize';
-import type { Held } from '#shared/identity/device.ts';
+import type { DeviceRow, Held } from '#shared/identity/device.ts';
 import { isSameJson } from '#shared/sync/canonical.ts';
-import { deviceRow, enrolledOn } from '#server/identity/device-rows.ts';
-import type { Database } from '#server/models/database.ts';
 import { query } from '#server/models/query.ts';
 import type { KnownDevice, Sender } from './batch-from.ts';
 import { numberRows } from './feed.ts';
@@ -21,14 +19,8 @@ export interface Heard {
  * Writes down that a device was heard. Others are told (its row gets a new number, which is returned) only where that
  * says something new: two devices that hail each other by pulling would otherwise never come to rest.
  */
-export async function hearDevice(
-  database: Database,
-  transaction: Transaction,
-  sender: Sender,
-  known: KnownDevice,
-  heard: Heard,
-): Promise<number | null> {
-  if (isNews(known, heard)) return tellOthers(database, transaction, sender, heard);
+export async function hearDevice(transaction: Transaction, sender: Sender, known: KnownDevice, heard: Heard): Promise<number | null> {
+  if (isNews(known, heard)) return tellOthers(transaction, sender, heard);
   const sql = 'UPDATE devices SET last_heard_at = $3 WHERE shop_id = $1 AND id = $2';
   await query(transaction, sql, [sender.shopId, sender.deviceId, new Date(heard.nowMs)]);
   return null;
@@ -40,20 +32,20 @@ function isNews(known: KnownDevice, { held, appVersion, nowMs }: Heard): boolean
   return known.toldHeardAt === null || nowMs - Date.parse(known.toldHeardAt) > TOLD_AGE_MAX_MS;
 }
 
-async function tellOthers(database: Database, transaction: Transaction, sender: Sender, heard: Heard): Promise<number> {
-  const { shopId, deviceId } = sender;
+// changed where it stands, not read and written back: who signs in or is revoked meanwhile is not undone
+const TELL = `
+  UPDATE devices SET seq = $3, last_heard_at = $4, held = coalesce($5::json, held), app_version = coalesce($6, app_version),
+    row = (row::jsonb || $7::jsonb)::json
+  WHERE shop_id = $1 AND id = $2`;
+
+async function tellOthers(transaction: Transaction, { shopId, deviceId }: Sender, { held, appVersion, nowMs }: Heard): Promise<number> {
   // the shop's row is locked before the device's, here as everywhere
   const { last: seq } = await numberRows(transaction, shopId, 1);
-  const device = await database.models.Device.findOne({ where: { shopId, id: deviceId }, transaction, rejectOnEmpty: true });
-  const columns = {
-    ...device.get(),
-    seq,
-    lastHeardAt: new Date(heard.nowMs),
-    held: heard.held ?? device.held,
-    appVersion: heard.appVersion ?? device.appVersion,
-  };
-  const row = deviceRow(columns, await enrolledOn(database, transaction, shopId, deviceId));
-  const { lastHeardAt, held, appVersion } = columns;
-  await device.update({ seq, lastHeardAt, held, appVersion, row }, { transaction });
+  const lastHeardAt = new Date(nowMs);
+  const told: Partial<DeviceRow> = { lastHeardAt: lastHeardAt.toISOString() };
+  if (held) told.held = held;
+  if (appVersion !== undefined) told.appVersion = appVersion;
+  const heldText = held ? JSON.stringify(held) : null;
+  await query(transaction, TELL, [shopId, deviceId, seq, lastHeardAt, heldText, appVersion ?? null, JSON.stringify(told)]);
   return seq;
 }

@@ -6,7 +6,8 @@ import { query } from '#server/models/query.ts';
 const READ = `
   SELECT op_key AS "key", op, device_id AS "deviceId", person_id AS "personId", kind, received_at AS "receivedAt",
     received_on::text AS "receivedOn", ordered_at AS "orderedAt", ordered_on::text AS "orderedOn", roles, outcome, reason
-  FROM ops WHERE shop_id = $1 AND op_key = ANY($2::text[])`;
+  FROM unnest($2::text[]) wanted(wanted_key)
+    CROSS JOIN LATERAL (SELECT * FROM ops WHERE shop_id = $1 AND op_key = wanted_key LIMIT 1) logged`;
 
 /** Of `keys`, the ops that are in the log. */
 export async function readOps(transaction: Transaction, shopId: string, keys: string[]): Promise<Map<string, LoggedOp>> {
@@ -21,7 +22,7 @@ const APPEND = `
     ordered_on, roles, outcome, reason)
   SELECT $1, line.op_key, line.op::json, line.sha256, line.device_id, line.person_id, line.kind, line.received_at,
     line.received_on, line.ordered_at, line.ordered_on, line.roles, line.outcome, line.reason
-  FROM json_to_recordset($2::json) AS line(op_key text, op text, sha256 text, device_id uuid, person_id uuid, kind text,
+  FROM jsonb_to_recordset($2::jsonb) AS line(op_key text, op text, sha256 text, device_id uuid, person_id uuid, kind text,
     received_at timestamptz, received_on date, ordered_at text, ordered_on date, roles text[], outcome text, reason text)`;
 
 /** Adds ops to the log, with the SHA-256 of each one's text as it is kept. */

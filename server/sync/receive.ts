@@ -1,5 +1,6 @@
 import type { Transaction } from 'sequelize';
 import { mergeBatch, type Outcome } from '#shared/sync/merge.ts';
+import type { BatchFrom } from '#shared/sync/store.ts';
 import { isDatabaseAway } from '#server/models/database-away.ts';
 import { query } from '#server/models/query.ts';
 import { underSavepoint } from '#server/models/savepoint.ts';
@@ -16,8 +17,6 @@ export interface Receipt {
   seq: number | null;
 }
 
-type Merge = (transaction: Transaction, store: PostgresStore) => Promise<Outcome[]>;
-
 /**
  * Takes in what a device sends: all of it in one transaction, which has been committed once this resolves. Ops that
  * cannot be merged are set aside as the server's fault; rejects only where the database is away.
@@ -25,11 +24,11 @@ type Merge = (transaction: Transaction, store: PostgresStore) => Promise<Outcome
 export async function receive(parts: Parts, sender: Sender, ops: unknown[], heard: Heard): Promise<Receipt> {
   if (ops.length === 0) return hearOnly(parts, sender, heard);
   try {
-    return await mergeAs(parts, sender, heard, (transaction, store) => mergeTogether(transaction, store, sender, ops, heard.nowMs));
+    return await receiveBy(mergeTogether, parts, sender, ops, heard);
   } catch (error) {
     if (isDatabaseAway(error)) throw error;
     logFault(parts.log, error, 'a batch could not be merged; its ops are taken one by one');
-    return mergeAs(parts, sender, heard, (transaction, store) => mergeApart(parts, transaction, store, sender, ops, heard.nowMs));
+    return receiveBy(mergeApart, parts, sender, ops, heard);
   }
 }
 
@@ -37,55 +36,50 @@ export async function receive(parts: Parts, sender: Sender, ops: unknown[], hear
 function hearOnly({ database }: Parts, sender: Sender, heard: Heard): Promise<Receipt> {
   return database.inShop(sender.shopId, async (transaction) => {
     const device = await readDevice(transaction, sender);
-    return { outcomes: [], seq: await hearDevice(database, transaction, sender, device, heard) };
+    return { outcomes: [], seq: await hearDevice(transaction, sender, device, heard) };
   });
 }
 
-function mergeAs({ database }: Parts, sender: Sender, heard: Heard, merge: Merge): Promise<Receipt> {
-  return database.inShop(sender.shopId, async (transaction) => {
-    const store = new PostgresStore(transaction, sender.shopId);
-    const outcomes = await merge(transaction, store);
+interface Batch {
+  parts: Parts;
+  transaction: Transaction;
+  store: PostgresStore;
+  sender: Sender;
+  from: BatchFrom;
+  ops: unknown[];
+}
+
+type Merge = (batch: Batch) => Promise<Outcome[]>;
+
+function receiveBy(merge: Merge, parts: Parts, sender: Sender, ops: unknown[], heard: Heard): Promise<Receipt> {
+  return parts.database.inShop(sender.shopId, async (transaction) => {
+    const { timeZone } = await lockShop(transaction, sender.shopId);
     const device = await readDevice(transaction, sender);
-    const told = await hearDevice(database, transaction, sender, device, heard);
+    const from = await readBatchFrom(transaction, sender, device, timeZone, heard.nowMs);
+    const store = new PostgresStore(transaction, sender.shopId);
+    const outcomes = await merge({ parts, transaction, store, sender, from, ops });
+    const told = await hearDevice(transaction, sender, device, heard);
     return { outcomes, seq: told ?? store.seq };
   });
 }
 
-async function mergeTogether(
-  transaction: Transaction,
-  store: PostgresStore,
-  sender: Sender,
-  ops: unknown[],
-  nowMs: number,
-): Promise<Outcome[]> {
-  const { timeZone } = await lockShop(transaction, sender.shopId);
-  const device = await readDevice(transaction, sender);
-  return mergeBatch(store, await readBatchFrom(transaction, sender, device, timeZone, nowMs), ops);
-}
+const mergeTogether: Merge = ({ store, from, ops }) => mergeBatch(store, from, ops);
 
 /** One op after another, each under a savepoint, so that the one that cannot be merged is found and set aside. */
-async function mergeApart(
-  parts: Parts,
-  transaction: Transaction,
-  store: PostgresStore,
-  sender: Sender,
-  ops: unknown[],
-  nowMs: number,
-): Promise<Outcome[]> {
-  const { timeZone } = await lockShop(transaction, sender.shopId);
+const mergeApart: Merge = async ({ parts, transaction, store, sender, from, ops }) => {
   // else what a constraint refuses would come to light only at the commit
   await query(transaction, 'SET CONSTRAINTS ALL IMMEDIATE');
   const outcomes: Outcome[] = [];
   for (const op of ops) {
-    const device = await readDevice(transaction, sender);
-    const from = await readBatchFrom(transaction, sender, device, timeZone, nowMs);
+    const { lastOrderedAt } = await readDevice(transaction, sender);
+    const after = { ...from, device: { ...from.device, lastOrderedAt } };
     try {
-      outcomes.push(...(await underSavepoint(transaction, () => mergeBatch(store, from, [op]))));
+      outcomes.push(...(await underSavepoint(transaction, () => mergeBatch(store, after, [op]))));
     } catch (error) {
       if (isDatabaseAway(error)) throw error;
       logFault(parts.log, error, 'an op could not be merged; it is set aside');
-      outcomes.push(...(await mergeBatch(store, from, [op], new Set([0]))));
+      outcomes.push(...(await mergeBatch(store, after, [op], new Set([0]))));
     }
   }
   return outcomes;
-}
+};

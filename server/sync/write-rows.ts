@@ -29,6 +29,6 @@ function upsertOf({ table, columns }: RowTable): string {
   return `
     INSERT INTO ${table} (shop_id, id, ${list.join(', ')})
     SELECT $1, line.id, line.seq, ${names.map((name) => `line.${name}, `).join('')}line.row::json
-    FROM json_to_recordset($2::json) AS line(id uuid, seq bigint, ${types.join(', ')}, row text)
+    FROM jsonb_to_recordset($2::jsonb) AS line(id uuid, seq bigint, ${types.join(', ')}, row text)
     ON CONFLICT (shop_id, id) DO UPDATE SET ${list.map((name) => `${name} = excluded.${name}`).join(', ')}`;
 }
