@@ -18,7 +18,10 @@ function decideKind(choice: Decision['choice']): OpKind<Decide, SetAsideRow> {
     entity: 'setAside',
     rowId: (data) => data.setAsideId,
     makes: false,
-    mayMake: (author, _data, row) => isForeman(author) && row !== undefined && (choice === 'dismiss' || isAdmissible(row)),
+    // what cannot be admitted now may come to be: judged again once its row has come, it was not its author's to make
+    fits: ({ setAsideId }, look) =>
+      choice === 'dismiss' || isAdmissible(look({ entity: 'setAside', id: setAsideId }) as SetAsideRow),
+    mayMake: isForeman,
     reduce: (row, op, facts) => {
       if (row.decisions.some((decision) => decision.opId === op.id)) return row;
       const decision: Decision = { choice, by: op.personId, at: madeAt(facts), opId: op.id, why: op.data.why || null };

@@ -33,14 +33,14 @@ export type Judgement = { reason: null } | { reason: Reason; awaits?: Ref };
 /** Whether an op may count on the rows as they stand. `isAdmitted` passes over who made it. */
 export function judge({ kind, op, changes, names }: Understood, author: Author, look: RowLookup, isAdmitted = false): Judgement {
   const row = look(changes) as Row | undefined;
-  if (kind.makes && row) return { reason: row.madeBy === op.id ? null : 'id-reused' };
   const missing = [...(kind.makes ? [] : [changes]), ...names].find((ref) => !look(ref));
   if (missing) {
     // who could never make it is told so at once; what hangs on the row waits for it
     const isBarred = !isAdmitted && author.roles.every((role) => role === 'owner');
     return isBarred ? { reason: 'not-entitled' } : { reason: 'no-such-row', awaits: missing };
   }
-  if (kind.fits && !kind.fits(op.data, look)) return { reason: 'no-such-row' };
+  if (kind.fits && !kind.fits(op.data, look)) return { reason: 'no-such-row', awaits: changes };
+  if (kind.makes && row) return { reason: row.madeBy === op.id ? null : 'id-reused' };
   const itemId = kind.itemId?.(op.data);
   const known = itemId && itemsOf(row).find((item) => item.id === itemId);
   if (known && known.opId !== op.id) return { reason: 'id-reused' };

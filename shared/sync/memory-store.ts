@@ -32,7 +32,8 @@ export class MemoryStore implements RecordStore {
 
   async readAwaiting(refs: Ref[]): Promise<SetAsideRow[]> {
     const keys = new Set(refs.map(refKey));
-    const rows = this.feed(0).filter(({ entity }) => entity === 'setAside').map(({ row }) => row as SetAsideRow);
+    const kept = [...this.kept.values()].filter(({ entity }) => entity === 'setAside');
+    const rows = kept.map(({ json }) => JSON.parse(json) as SetAsideRow);
     return rows.filter((row) => row.awaits && keys.has(refKey(row.awaits)));
   }
 

@@ -1,5 +1,5 @@
 import { reconsidered, setAsideRow } from '../set-aside/aside-row.ts';
-import { isAdmitted, type SetAsideRow } from '../set-aside/set-aside.ts';
+import { isAdmissible, isAdmitted, type SetAsideRow } from '../set-aside/set-aside.ts';
 import { differingStatements, saidFields } from './fields.ts';
 import { judge, reduceOp, understand, type Judgement, type Understood } from './judge.ts';
 import { readOp, type Reason } from './op.ts';
@@ -18,7 +18,7 @@ export class Merging {
   private readonly logged = new Map<string, LoggedOp>();
   /** taken in here, but a row that they need has not come */
   private waiting: { received: Received; awaits: Ref }[] = [];
-  /** rows that have come to be here and for which others may have waited */
+  /** rows that have come to be here, or to be admissible, and for which others may have waited */
   private came: Ref[] = [];
   /** set-aside rows that somebody has admitted here */
   private admitted: SetAsideRow[] = [];
@@ -105,7 +105,9 @@ export class Merging {
     for (const { id, opKey } of [...rows].sort(byOrder)) {
       const row = this.space.look({ entity: 'setAside', id }) as SetAsideRow;
       if (row.sinceKept) continue;
-      this.space.put('setAside', reconsidered(row, this.judgeRecalled(row, recalled.get(opKey)!)));
+      const next = reconsidered(row, this.judgeRecalled(row, recalled.get(opKey)!));
+      this.space.put('setAside', next);
+      if (isAdmissible(next) && !isAdmissible(row)) this.came.push({ entity: 'setAside', id });
     }
   }
 

@@ -23,7 +23,7 @@ export interface OpKind<Data, R extends Row = Row> {
   makes: boolean;
   /** the other rows that it names, which must be there */
   names?(data: Data): Ref[];
-  /** whether the rows that it names belong together; where they do not, there is no such row */
+  /** whether the rows that it changes and names are such as it can be about; where not, it has no such row */
   fits?(data: Data, look: RowLookup): boolean;
   /** the id of an item it adds to the row */
   itemId?(data: Data): string;

@@ -13,13 +13,22 @@ beforeEach(async () => {
   shop = new ShopInMemory();
   ({ desk, boatId, stageId } = await shop.withBoat());
   entryId = shop.newId();
-  await desk.says('entry.write', { entryId, boatId, stageId, workDate: TODAY, text: 'ribs', spoken: true, hours: [] });
+  await desk.says('entry.write', {
+    entryId,
+    boatId,
+    stageId,
+    workDate: TODAY,
+    text: 'ribs',
+    spoken: true,
+    hours: [],
+  });
 });
 
 const entry = () => shop.row('entry', entryId);
 const changes = (text: string, over?: Record<string, string[]>) =>
   desk.does('entry.amend', { entryId, set: { text } }, over ? { over } : {});
-const sent = (raws: unknown[]) => desk.sendsOnly(raws).then((all) => all.map(({ outcome, reason }) => reason ?? outcome));
+const sent = (raws: unknown[]) =>
+  desk.sendsOnly(raws).then((all) => all.map(({ outcome, reason }) => reason ?? outcome));
 
 describe('over', () => {
   it('that names its own op leaves its value standing', async () => {
@@ -38,7 +47,11 @@ describe('over', () => {
   });
 
   it('that names what nobody made, or other fields, replaces nothing', async () => {
-    const op = changes('two ribs', { text: [shop.newId()], workDate: [entry().madeBy], struck: [entry().madeBy] });
+    const op = changes('two ribs', {
+      text: [shop.newId()],
+      workDate: [entry().madeBy],
+      struck: [entry().madeBy],
+    });
     await sent([op]);
     expect(shop.looseEnds().map(({ field }) => field)).toEqual(['text']);
     expect(entry().statements.map(({ field }) => field)).toEqual(['text', 'text']);
@@ -46,7 +59,10 @@ describe('over', () => {
 
   it('in names that every object has says nothing', async () => {
     const op = changes('two ribs');
-    const raw = JSON.stringify(op).replace('"over":{', `"over":{"__proto__":["${op.id}"],"constructor":["${op.id}"],`);
+    const raw = JSON.stringify(op).replace(
+      '"over":{',
+      `"over":{"__proto__":["${op.id}"],"constructor":["${op.id}"],`,
+    );
     expect(await sent([JSON.parse(raw)])).toEqual(['kept']);
     expect(Object.keys(entry().heads)).toEqual(['text']);
   });
@@ -58,14 +74,20 @@ describe('over', () => {
 });
 
 describe('names that every object has', () => {
-  it.each(['__proto__', 'constructor', 'toString', 'hasOwnProperty'])('%s is no field of an entry', async (name) => {
-    const raw = JSON.stringify(changes('two ribs')).replace('"set":{', `"set":{"${name}":{"polluted":true},`);
-    const [outcome] = await sent([JSON.parse(raw)]);
-    expect(['not-understood', 'kept']).toContain(outcome);
-    expect(({} as Record<string, unknown>).polluted).toBeUndefined();
-    expect(Object.keys(entry())).not.toContain(name);
-    expect((entry() as unknown as Record<string, unknown>).polluted).toBeUndefined();
-  });
+  it.each(['__proto__', 'constructor', 'toString', 'hasOwnProperty'])(
+    '%s is no field of an entry',
+    async (name) => {
+      const raw = JSON.stringify(changes('two ribs')).replace(
+        '"set":{',
+        `"set":{"${name}":{"polluted":true},`,
+      );
+      const [outcome] = await sent([JSON.parse(raw)]);
+      expect(['not-understood', 'kept']).toContain(outcome);
+      expect(({} as Record<string, unknown>).polluted).toBeUndefined();
+      expect(Object.keys(entry())).not.toContain(name);
+      expect((entry() as unknown as Record<string, unknown>).polluted).toBeUndefined();
+    },
+  );
 
   it('as an op’s own fields leave it unread', async () => {
     const raw = JSON.stringify(changes('two ribs')).replace('{', '{"constructor":1,');
@@ -77,14 +99,26 @@ describe('rows', () => {
   it('an op may change a struck row, and name one', async () => {
     await desk.says('boat.strike', { boatId, why: 'sold' });
     const otherId = shop.newId();
-    const other = { entryId: otherId, boatId, stageId, workDate: TODAY, text: 'knees', spoken: false, hours: [] };
+    const other = {
+      entryId: otherId,
+      boatId,
+      stageId,
+      workDate: TODAY,
+      text: 'knees',
+      spoken: false,
+      hours: [],
+    };
     expect(await desk.says('entry.write', other)).toMatchObject({ outcome: 'kept' });
-    expect(await desk.says('boat.amend', { boatId, set: { name: 'Storm Petrel' } })).toMatchObject({ outcome: 'kept' });
+    expect(await desk.says('boat.amend', { boatId, set: { name: 'Storm Petrel' } })).toMatchObject({
+      outcome: 'kept',
+    });
     expect(shop.row('boat', boatId)).toMatchObject({ name: 'Storm Petrel', struck: { why: 'sold' } });
   });
 
   it('an id of one entity is none of another', async () => {
-    expect(await sent([desk.does('boat.amend', { boatId: entryId, set: { name: 'Tern' } })])).toEqual(['no-such-row']);
+    expect(await sent([desk.does('boat.amend', { boatId: entryId, set: { name: 'Tern' } })])).toEqual([
+      'no-such-row',
+    ]);
   });
 
   it('a stage that comes after itself never comes', async () => {
@@ -95,19 +129,34 @@ describe('rows', () => {
 
   it('rows that wait for one another wait, and hold up nothing', async () => {
     const [one, other] = [shop.newId(), shop.newId()];
-    const add = (id: string, after: string) => desk.does('stage.add', { stageId: id, boatId, name: 'Paint', order: 3, after: [after] });
-    expect(await sent([add(one, other), add(other, one), changes('two ribs')])).toEqual(['no-such-row', 'no-such-row', 'kept']);
+    const add = (id: string, after: string) =>
+      desk.does('stage.add', { stageId: id, boatId, name: 'Paint', order: 3, after: [after] });
+    expect(await sent([add(one, other), add(other, one), changes('two ribs')])).toEqual([
+      'no-such-row',
+      'no-such-row',
+      'kept',
+    ]);
   });
 
   it('an amendment that sets nothing is malformed', async () => {
     expect(await sent([desk.does('entry.amend', { entryId, set: {} })])).toEqual(['malformed']);
-    expect(await sent([desk.does('entry.amend', { entryId, set: { stageId: null } })])).toEqual(['malformed']);
+    expect(await sent([desk.does('entry.amend', { entryId, set: { stageId: null } })])).toEqual([
+      'malformed',
+    ]);
   });
 
   it('a stage of another boat is no stage of this one', async () => {
     const otherId = shop.newId();
     await desk.says('boat.add', { boatId: otherId, name: 'Kittiwake' });
-    const other = { entryId: shop.newId(), boatId: otherId, stageId, workDate: TODAY, text: 'knees', spoken: false, hours: [] };
+    const other = {
+      entryId: shop.newId(),
+      boatId: otherId,
+      stageId,
+      workDate: TODAY,
+      text: 'knees',
+      spoken: false,
+      hours: [],
+    };
     expect(await desk.says('entry.write', other)).toMatchObject({ reason: 'no-such-row' });
     const move = { entryId, set: { boatId: otherId, stageId } };
     expect(await desk.says('entry.amend', move)).toMatchObject({ reason: 'no-such-row' });

@@ -22,11 +22,21 @@ beforeEach(async () => {
 });
 
 function writing(changes: object = {}) {
-  return { entryId: shop.newId(), boatId, stageId, workDate: TODAY, text: 'ribs', spoken: false, hours: [], ...changes };
+  return {
+    entryId: shop.newId(),
+    boatId,
+    stageId,
+    workDate: TODAY,
+    text: 'ribs',
+    spoken: false,
+    hours: [],
+    ...changes,
+  };
 }
 
 const aside = (id: string) => shop.row('setAside', id);
-const admits = (setAsideId: string, why = 'she asked me first') => desk.says('setAside.admit', { setAsideId, why });
+const admits = (setAsideId: string, why = 'she asked me first') =>
+  desk.says('setAside.admit', { setAsideId, why });
 const dismisses = (setAsideId: string, why = 'no') => desk.says('setAside.dismiss', { setAsideId, why });
 
 /** Ida, who may not, rewords Rosa's entry. */
@@ -45,7 +55,11 @@ describe('law 10: authority is judged at receipt', () => {
     ['stage.add', () => ({ stageId: shop.newId(), boatId, name: 'Paint', order: 3, after: [] }), ['foreman']],
     ['stage.amend', () => ({ stageId, set: { order: 4 } }), ['foreman']],
     ['stage.mark', () => ({ stageId, markId: shop.newId(), workDate: TODAY }), ['foreman']],
-    ['task.add', () => ({ taskId: shop.newId(), boatId, stageId, title: 'Fair the keel' }), ['crew', 'foreman']],
+    [
+      'task.add',
+      () => ({ taskId: shop.newId(), boatId, stageId, title: 'Fair the keel' }),
+      ['crew', 'foreman'],
+    ],
     ['entry.write', () => writing(), ['crew', 'foreman']],
     ['entry.addTo', () => ({ entryId, additionId: shop.newId(), text: 'and a knee' }), ['crew', 'foreman']],
     ['entry.amend', () => ({ entryId, set: { text: 'two ribs' } }), ['foreman']],
@@ -54,11 +68,15 @@ describe('law 10: authority is judged at receipt', () => {
     ['entry.restore', () => ({ entryId, why: 'not twice' }), ['foreman']],
   ];
   const cases = kinds.flatMap(([kind, data, entitled]) =>
-    (['crew', 'foreman', 'office', 'owner'] as const).map((role) => [role, kind, entitled.includes(role), data] as const),
+    (['crew', 'foreman', 'office', 'owner'] as const).map(
+      (role) => [role, kind, entitled.includes(role), data] as const,
+    ),
   );
 
   it.each(cases)('%s, %s of what is another’s: %s', async (role, kind, isEntitled, data) => {
-    const outcome = await shop.phone(shop.person('Somebody', role)).says(kind, data() as Record<string, unknown>);
+    const outcome = await shop
+      .phone(shop.person('Somebody', role))
+      .says(kind, data() as Record<string, unknown>);
     expect(outcome.reason ?? outcome.outcome).toBe(isEntitled ? 'kept' : 'not-entitled');
   });
 
@@ -112,8 +130,17 @@ describe('what is set aside is admitted or dismissed by the foreman', () => {
     shop.clock.advance(3_600_000);
     expect(await admits(op.id)).toMatchObject({ outcome: 'kept' });
     const at = new Date(shop.clock.now()).toISOString();
-    expect(shop.row('entry', entryId)).toMatchObject({ text: 'three ribs', heads: { text: [op.id] }, stamps: { [op.id]: op.at } });
-    expect(aside(op.id)).toMatchObject({ state: 'admitted', by: desk.personIds[0], at, why: 'she asked me first' });
+    expect(shop.row('entry', entryId)).toMatchObject({
+      text: 'three ribs',
+      heads: { text: [op.id] },
+      stamps: { [op.id]: op.at },
+    });
+    expect(aside(op.id)).toMatchObject({
+      state: 'admitted',
+      by: desk.personIds[0],
+      at,
+      why: 'she asked me first',
+    });
   });
 
   it('so that what was said since stands over it, as a loose end where it did not know', async () => {
@@ -121,7 +148,10 @@ describe('what is set aside is admitted or dismissed by the foreman', () => {
     await rosas.says('entry.amend', { entryId, set: { text: 'two ribs' } });
     await admits(op.id);
     expect(shop.row('entry', entryId).text).toBe('two ribs');
-    expect(shop.looseEnd(entryId, 'text')!.values.map(({ value }) => value)).toEqual(['two ribs', 'three ribs']);
+    expect(shop.looseEnd(entryId, 'text')!.values.map(({ value }) => value)).toEqual([
+      'two ribs',
+      'three ribs',
+    ]);
   });
 
   it('its sender still gets the first answer', async () => {
@@ -137,13 +167,16 @@ describe('what is set aside is admitted or dismissed by the foreman', () => {
     expect(shop.row('entry', entryId).text).toBe('ribs');
   });
 
-  it.each(['admit first', 'dismiss first'])('an admission holds whatever dismissal there is: %s', async (order) => {
-    const op = await idaRewords();
-    const inTurn = order === 'admit first' ? [admits, dismisses] : [dismisses, admits];
-    for (const decides of inTurn) await decides(op.id);
-    expect(aside(op.id)).toMatchObject({ state: 'admitted', why: 'she asked me first' });
-    expect(shop.row('entry', entryId).text).toBe('three ribs');
-  });
+  it.each(['admit first', 'dismiss first'])(
+    'an admission holds whatever dismissal there is: %s',
+    async (order) => {
+      const op = await idaRewords();
+      const inTurn = order === 'admit first' ? [admits, dismisses] : [dismisses, admits];
+      for (const decides of inTurn) await decides(op.id);
+      expect(aside(op.id)).toMatchObject({ state: 'admitted', why: 'she asked me first' });
+      expect(shop.row('entry', entryId).text).toBe('three ribs');
+    },
+  );
 
   it('two foremen who both admit it admit it once', async () => {
     const op = await idaRewords();
@@ -158,7 +191,10 @@ describe('what is set aside is admitted or dismissed by the foreman', () => {
     const both = shop.phone(desk.personIds[0]!, idas.personIds[0]!);
     const op = both.does('entry.amend', { entryId, set: { text: 'three ribs' } }, { as: idas.personIds[0]! });
     const admit = both.does('setAside.admit', { setAsideId: op.id });
-    expect(await both.sendsOnly([admit, op])).toMatchObject([{ outcome: 'kept' }, { reason: 'not-entitled' }]);
+    expect(await both.sendsOnly([admit, op])).toMatchObject([
+      { outcome: 'kept' },
+      { reason: 'not-entitled' },
+    ]);
     expect(aside(op.id).state).toBe('admitted');
     expect(shop.row('entry', entryId).text).toBe('three ribs');
   });
@@ -176,8 +212,12 @@ describe('what is set aside is admitted or dismissed by the foreman', () => {
   it.each<Role>(['crew', 'office', 'owner'])('nobody else decides: %s', async (role) => {
     const op = await idaRewords();
     const phone = shop.phone(shop.person('Somebody', role));
-    expect(await phone.says('setAside.admit', { setAsideId: op.id })).toMatchObject({ reason: 'not-entitled' });
-    expect(await phone.says('setAside.dismiss', { setAsideId: op.id })).toMatchObject({ reason: 'not-entitled' });
+    expect(await phone.says('setAside.admit', { setAsideId: op.id })).toMatchObject({
+      reason: 'not-entitled',
+    });
+    expect(await phone.says('setAside.dismiss', { setAsideId: op.id })).toMatchObject({
+      reason: 'not-entitled',
+    });
     expect(aside(op.id).state).toBe('waiting');
   });
 
@@ -192,7 +232,7 @@ describe('what is set aside is admitted or dismissed by the foreman', () => {
       expect.arrayContaining(['id-reused', 'no-such-row', 'not-understood', 'malformed']),
     );
     for (const { id } of [reused, missing, unknown, malformed]) {
-      expect(await admits(id)).toMatchObject({ reason: 'not-entitled' });
+      expect(await admits(id)).toMatchObject({ outcome: 'set-aside', reason: 'no-such-row' });
       expect(aside(id).state).toBe('waiting');
       expect(await dismisses(id)).toMatchObject({ outcome: 'kept' });
       expect(aside(id).state).toBe('dismissed');
@@ -238,7 +278,9 @@ describe('a revoked device', () => {
 describe('what the server failed at', () => {
   it('is set aside as its fault and judged again by a server that does not', async () => {
     const op = rosas.does('entry.amend', { entryId, set: { text: 'two ribs' } });
-    expect(await rosas.sendsOnly([op], new Set([0]))).toMatchObject([{ outcome: 'set-aside', reason: 'server-fault' }]);
+    expect(await rosas.sendsOnly([op], new Set([0]))).toMatchObject([
+      { outcome: 'set-aside', reason: 'server-fault' },
+    ]);
     expect(shop.row('entry', entryId).text).toBe('ribs');
     await judgeSetAside(shop.store, shop.id, [aside(op.id)]);
     expect(aside(op.id).state).toBe('since-kept');
@@ -270,7 +312,10 @@ describe('a row that is not there', () => {
     expect(await rosas.sends()).toMatchObject([{ outcome: 'set-aside', reason: 'no-such-row' }]);
     await desk.says('boat.add', { boatId: laterId, name: 'Kittiwake' });
     expect(missing(op.id).state).toBe('since-kept');
-    expect(shop.row('entry', op.data.entryId as string)).toMatchObject({ boatId: laterId, stamps: { [op.id]: op.at } });
+    expect(shop.row('entry', op.data.entryId as string)).toMatchObject({
+      boatId: laterId,
+      stamps: { [op.id]: op.at },
+    });
     expect(await rosas.sendsOnly([op])).toMatchObject([{ outcome: 'set-aside', reason: 'no-such-row' }]);
   });
 
@@ -288,7 +333,13 @@ describe('a row that is not there', () => {
     await rosas.sends();
     await desk.says('boat.add', { boatId: laterId, name: 'Kittiwake' });
     expect(missing(op.id)).toMatchObject({ state: 'waiting', reason: 'no-such-row' });
-    await desk.says('stage.add', { stageId: laterStageId, boatId: laterId, name: 'Strip', order: 1, after: [] });
+    await desk.says('stage.add', {
+      stageId: laterStageId,
+      boatId: laterId,
+      name: 'Strip',
+      order: 1,
+      after: [],
+    });
     expect(missing(op.id).state).toBe('since-kept');
   });
 
@@ -319,14 +370,23 @@ describe('a row that is not there', () => {
 
   it('an op whose row comes with what waited from an earlier batch is not set aside', async () => {
     const [laterId, laterStageId] = [shop.newId(), shop.newId()];
-    await desk.says('stage.add', { stageId: laterStageId, boatId: laterId, name: 'Strip', order: 1, after: [] });
+    await desk.says('stage.add', {
+      stageId: laterStageId,
+      boatId: laterId,
+      name: 'Strip',
+      order: 1,
+      after: [],
+    });
     desk.does('entry.write', writing({ boatId: laterId, stageId: laterStageId }));
     desk.does('boat.add', { boatId: laterId, name: 'Kittiwake' });
     expect(await desk.sends()).toMatchObject([{ outcome: 'kept' }, { outcome: 'kept' }]);
   });
 
   it('who may not make it is told so when the row is there', async () => {
-    const [op, later] = [idas.does('boat.amend', { boatId: shop.newId(), set: { name: 'Tern' } }), shop.newId()];
+    const [op, later] = [
+      idas.does('boat.amend', { boatId: shop.newId(), set: { name: 'Tern' } }),
+      shop.newId(),
+    ];
     await idas.sendsOnly([{ ...op, data: { ...op.data, boatId: later } }]);
     await desk.says('boat.add', { boatId: later, name: 'Kittiwake' });
     expect(missing(op.id)).toMatchObject({ state: 'waiting', reason: 'not-entitled' });
@@ -336,7 +396,9 @@ describe('a row that is not there', () => {
 
   it('an owner is told at once, since they may change no row of these', async () => {
     const owners = shop.phone(shop.person('Nell', 'owner'));
-    expect(await owners.says('entry.write', writing({ boatId: shop.newId() }))).toMatchObject({ reason: 'not-entitled' });
+    expect(await owners.says('entry.write', writing({ boatId: shop.newId() }))).toMatchObject({
+      reason: 'not-entitled',
+    });
   });
 
   it('what was admitted before its row came counts when it comes', async () => {
@@ -357,8 +419,18 @@ describe('a row that is not there', () => {
     desk.hears();
     await admits(op.id);
     expect(shop.has('entry', op.data.entryId as string)).toBe(false);
-    shop.store.put('person', stranger, { id: stranger, name: 'Per', roles: ['crew'], leftAt: null, boatIds: [] });
-    await judgeSetAside(shop.store, shop.id, await shop.store.readAwaiting([{ entity: 'person', id: stranger }]));
+    shop.store.put('person', stranger, {
+      id: stranger,
+      name: 'Per',
+      roles: ['crew'],
+      leftAt: null,
+      boatIds: [],
+    });
+    await judgeSetAside(
+      shop.store,
+      shop.id,
+      await shop.store.readAwaiting([{ entity: 'person', id: stranger }]),
+    );
     expect(shop.row('entry', op.data.entryId as string).authorId).toBe(stranger);
   });
 });

@@ -16,7 +16,15 @@ beforeEach(async () => {
   const [rosa, ida] = [shop.person('Rosa', 'foreman'), shop.person('Ida', 'foreman')];
   [rosas, idas] = [shop.phone(rosa), shop.phone(ida)];
   entryId = shop.newId();
-  await rosas.says('entry.write', { entryId, boatId, stageId, workDate: TODAY, text: 'ribs', spoken: true, hours: [] });
+  await rosas.says('entry.write', {
+    entryId,
+    boatId,
+    stageId,
+    workDate: TODAY,
+    text: 'ribs',
+    spoken: true,
+    hours: [],
+  });
   idas.hears();
 });
 

@@ -17,7 +17,15 @@ beforeEach(async () => {
   const rosa = shop.person('Rosa', 'crew');
   [rosas, tablet] = [shop.phone(rosa), shop.phone(rosa)];
   entryId = shop.newId();
-  await rosas.says('entry.write', { entryId, boatId, stageId, workDate: TODAY, text: 'ribs', spoken: true, hours: [] });
+  await rosas.says('entry.write', {
+    entryId,
+    boatId,
+    stageId,
+    workDate: TODAY,
+    text: 'ribs',
+    spoken: true,
+    hours: [],
+  });
   for (const phone of [tablet, desk]) phone.hears();
 });
 
@@ -76,7 +84,11 @@ describe('law 5: what a change replaces', () => {
 
   it('several unsent ops of one device never conflict', async () => {
     for (const text of ['two', 'three', 'four']) amends(rosas, { text });
-    expect(await rosas.sends()).toMatchObject([{ outcome: 'kept' }, { outcome: 'kept' }, { outcome: 'kept' }]);
+    expect(await rosas.sends()).toMatchObject([
+      { outcome: 'kept' },
+      { outcome: 'kept' },
+      { outcome: 'kept' },
+    ]);
     expect(entry().text).toBe('four');
     expect(shop.looseEnds()).toEqual([]);
   });
@@ -87,7 +99,10 @@ describe('law 5: what a change replaces', () => {
     tablet.hears();
     const refused = { ...amends(tablet, { text: 'three ribs' }), v: 9 };
     const next = amends(tablet, { text: 'four ribs' });
-    expect(await tablet.sendsOnly([refused, next])).toMatchObject([{ reason: 'not-understood' }, { outcome: 'kept' }]);
+    expect(await tablet.sendsOnly([refused, next])).toMatchObject([
+      { reason: 'not-understood' },
+      { outcome: 'kept' },
+    ]);
     expect(entry()).toMatchObject({ text: 'four ribs', heads: { text: [next.id] } });
     expect(shop.looseEnds()).toEqual([]);
   });
@@ -143,7 +158,13 @@ describe('law 5: what a change replaces', () => {
   it('boat and stage are one field', async () => {
     const [otherBoatId, otherStageId] = [shop.newId(), shop.newId()];
     desk.does('boat.add', { boatId: otherBoatId, name: 'Kittiwake' });
-    desk.does('stage.add', { stageId: otherStageId, boatId: otherBoatId, name: 'Strip', order: 1, after: [] });
+    desk.does('stage.add', {
+      stageId: otherStageId,
+      boatId: otherBoatId,
+      name: 'Strip',
+      order: 1,
+      after: [],
+    });
     await desk.sends();
     rosas.hears();
     const moved = amends(rosas, { boatId: otherBoatId, stageId: otherStageId });
@@ -151,7 +172,11 @@ describe('law 5: what a change replaces', () => {
     await rosas.sends();
     await tablet.sends();
     expect([moved, staged].map(({ over }) => Object.keys(over))).toEqual([['stageId'], ['stageId']]);
-    expect(entry()).toMatchObject({ boatId, stageId: laterStageId, heads: { stageId: [staged.id, moved.id] } });
+    expect(entry()).toMatchObject({
+      boatId,
+      stageId: laterStageId,
+      heads: { stageId: [staged.id, moved.id] },
+    });
     expect(shop.looseEnd(entryId, 'stageId')!.values.map(({ value }) => value)).toEqual([
       { boatId, stageId: laterStageId },
       { boatId: otherBoatId, stageId: otherStageId },
@@ -183,7 +208,9 @@ describe('law 6: no sentence stands that no person wrote', () => {
       phone.does('entry.addTo', { entryId, additionId: shop.newId(), text: `by ${phone.deviceId}` });
     }
     for (const phone of [desk, tablet, rosas]) await phone.sends();
-    expect(entry().additions.map(({ text }) => text)).toEqual([rosas, tablet, desk].map(({ deviceId }) => `by ${deviceId}`));
+    expect(entry().additions.map(({ text }) => text)).toEqual(
+      [rosas, tablet, desk].map(({ deviceId }) => `by ${deviceId}`),
+    );
     expect(shop.looseEnds()).toEqual([]);
   });
 });
@@ -195,14 +222,20 @@ describe('law 12: a loose end is derived', () => {
     await rosas.sends();
     await tablet.sends();
     expect(shop.looseEnds().map(({ id }) => id)).toEqual([looseEndId(shop, 'entry', entryId, 'text')]);
-    expect(looseEndId(shop, 'entry', entryId, 'text')).not.toBe(looseEndId(shop, 'entry', entryId, 'workDate'));
+    expect(looseEndId(shop, 'entry', entryId, 'text')).not.toBe(
+      looseEndId(shop, 'entry', entryId, 'workDate'),
+    );
   });
 
   it('its answer is judged on the rows as they stand after the whole batch', async () => {
     amends(tablet, { text: 'three ribs' });
     await tablet.sends();
     amends(rosas, { text: 'two ribs' });
-    amends(rosas, { text: 'two and three ribs' }, { text: [entry().madeBy, entry().heads.text![0]!, rosas.held[0]!.id] });
+    amends(
+      rosas,
+      { text: 'two and three ribs' },
+      { text: [entry().madeBy, entry().heads.text![0]!, rosas.held[0]!.id] },
+    );
     expect(await rosas.sends()).toMatchObject([{ outcome: 'kept' }, { outcome: 'kept' }]);
     expect(shop.looseEnds()).toEqual([]);
   });

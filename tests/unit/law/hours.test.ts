@@ -23,12 +23,22 @@ beforeEach(async () => {
     { personId: rosa, minutes: 240 },
     { personId: ida, minutes: 120, kind: 'agreed' },
   ];
-  await rosas.says('entry.write', { entryId, boatId, stageId, workDate: TODAY, text: 'ribs', spoken: true, hours });
+  await rosas.says('entry.write', {
+    entryId,
+    boatId,
+    stageId,
+    workDate: TODAY,
+    text: 'ribs',
+    spoken: true,
+    hours,
+  });
   for (const phone of [desk, idas, office]) phone.hears();
 });
 
-const hoursOf = (personId: string) => shop.row('entry', entryId).hours.find((figure) => figure.personId === personId);
-const setsHours = (phone: Phone, ...hours: object[]) => phone.says('entry.amend', { entryId, set: { hours } });
+const hoursOf = (personId: string) =>
+  shop.row('entry', entryId).hours.find((figure) => figure.personId === personId);
+const setsHours = (phone: Phone, ...hours: object[]) =>
+  phone.says('entry.amend', { entryId, set: { hours } });
 
 describe('hours are one field a person', () => {
   it('as written, a kind by crew is proposed and none is none', () => {
@@ -41,10 +51,17 @@ describe('hours are one field a person', () => {
     const hours = [{ personId: rosa, minutes: 60, kind: 'teaching' }];
     const other = { entryId: otherId, boatId, workDate: TODAY, text: 'showed', spoken: false, hours };
     await desk.says('entry.write', other);
-    expect(shop.row('entry', otherId).hours).toEqual([{ personId: rosa, minutes: 60, kind: 'teaching', proposed: false }]);
+    expect(shop.row('entry', otherId).hours).toEqual([
+      { personId: rosa, minutes: 60, kind: 'teaching', proposed: false },
+    ]);
     rosas.hears();
-    await rosas.says('entry.amend', { entryId: otherId, set: { hours: [{ personId: rosa, minutes: 90, kind: 'teaching' }] } });
-    expect(shop.row('entry', otherId).hours).toEqual([{ personId: rosa, minutes: 90, kind: 'teaching', proposed: false }]);
+    await rosas.says('entry.amend', {
+      entryId: otherId,
+      set: { hours: [{ personId: rosa, minutes: 90, kind: 'teaching' }] },
+    });
+    expect(shop.row('entry', otherId).hours).toEqual([
+      { personId: rosa, minutes: 90, kind: 'teaching', proposed: false },
+    ]);
   });
 
   it('changing one person’s leaves the other’s, and no two people conflict', async () => {
@@ -145,19 +162,28 @@ describe('who may say what of hours', () => {
     expect(await setsHours(idas, { personId: rosa, minutes: 60 })).toMatchObject({ reason: 'not-entitled' });
     const both = { text: 'ribs, mostly mine', hours: [{ personId: ida, minutes: 60 }] };
     expect(await idas.says('entry.amend', { entryId, set: both })).toMatchObject({ reason: 'not-entitled' });
-    expect(shop.row('entry', entryId)).toMatchObject({ text: 'ribs', hours: [{ minutes: 240 }, { minutes: 60 }] });
+    expect(shop.row('entry', entryId)).toMatchObject({
+      text: 'ribs',
+      hours: [{ minutes: 240 }, { minutes: 60 }],
+    });
   });
 
   it('who is not named changes none', async () => {
     const per = shop.person('Per', 'crew');
-    expect(await setsHours(shop.phone(per), { personId: per, minutes: 60 })).toMatchObject({ reason: 'not-entitled' });
+    expect(await setsHours(shop.phone(per), { personId: per, minutes: 60 })).toMatchObject({
+      reason: 'not-entitled',
+    });
   });
 
   it('office changes any hours and no words', async () => {
     expect(await setsHours(office, { personId: rosa, minutes: 200 })).toMatchObject({ outcome: 'kept' });
-    expect(await office.says('entry.amend', { entryId, set: { text: 'Ribs.' } })).toMatchObject({ reason: 'not-entitled' });
+    expect(await office.says('entry.amend', { entryId, set: { text: 'Ribs.' } })).toMatchObject({
+      reason: 'not-entitled',
+    });
     const both = { workDate: TODAY, hours: [{ personId: rosa, minutes: 100 }] };
-    expect(await office.says('entry.amend', { entryId, set: both })).toMatchObject({ reason: 'not-entitled' });
+    expect(await office.says('entry.amend', { entryId, set: both })).toMatchObject({
+      reason: 'not-entitled',
+    });
     expect(hoursOf(rosa)!.minutes).toBe(200);
   });
 });

@@ -132,14 +132,23 @@ describe('law 7: a mark is a statement by a person', () => {
     marks(rosas);
     rosas.does('task.stop', { taskId, startIds: [startId], why: 'no clamps' });
     await rosas.sends();
-    expect(task()).toMatchObject({ done: true, starts: [{ id: startId, takenBack: {} }], marks: [{ takenBack: null }] });
+    expect(task()).toMatchObject({
+      done: true,
+      starts: [{ id: startId, takenBack: {} }],
+      marks: [{ takenBack: null }],
+    });
   });
 
   it('a stage is done and undone by the foreman alone', async () => {
     const markId = shop.newId();
-    expect(await rosas.says('stage.mark', { stageId, markId, workDate: TODAY })).toMatchObject({ reason: 'not-entitled' });
+    expect(await rosas.says('stage.mark', { stageId, markId, workDate: TODAY })).toMatchObject({
+      reason: 'not-entitled',
+    });
     await desk.says('stage.mark', { stageId, markId, workDate: TODAY });
-    expect(shop.row('stage', stageId)).toMatchObject({ done: true, marks: [{ id: markId, workDate: TODAY }] });
+    expect(shop.row('stage', stageId)).toMatchObject({
+      done: true,
+      marks: [{ id: markId, workDate: TODAY }],
+    });
     await desk.says('stage.unmark', { stageId, markIds: [markId] });
     expect(shop.row('stage', stageId).done).toBe(false);
   });
@@ -151,7 +160,9 @@ describe('law 7: a mark is a statement by a person', () => {
     idas.hears();
     await idas.says('entry.addTo', { entryId, additionId, text: 'and a knee' });
     rosas.hears();
-    expect(await rosas.says('entry.takeBack', { entryId, additionIds: [additionId] })).toMatchObject({ reason: 'not-entitled' });
+    expect(await rosas.says('entry.takeBack', { entryId, additionIds: [additionId] })).toMatchObject({
+      reason: 'not-entitled',
+    });
     await idas.says('entry.takeBack', { entryId, additionIds: [additionId] });
     const { additions } = shop.row('entry', entryId);
     expect(additions).toMatchObject([{ text: 'and a knee', takenBack: { by: idas.personIds[0] } }]);

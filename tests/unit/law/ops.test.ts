@@ -9,7 +9,15 @@ async function shopWithEntry() {
   const rosa = shop.person('Rosa', 'crew');
   const phone = shop.phone(rosa);
   const entryId = shop.newId();
-  const entry = { entryId, boatId, stageId, workDate: TODAY, text: 'Steamed two ribs', spoken: true, hours: [] };
+  const entry = {
+    entryId,
+    boatId,
+    stageId,
+    workDate: TODAY,
+    text: 'Steamed two ribs',
+    spoken: true,
+    hours: [],
+  };
   return { shop, boatId, stageId, desk, foreman, rosa, phone, entryId, entry };
 }
 
@@ -107,7 +115,9 @@ describe('law 3: the server keeps every op as it came, and a repeat gets its fir
     desk.hears();
     const amend = phone.does('entry.amend', { entryId, set: { text: 'three ribs' } });
     expect(await phone.sends()).toMatchObject([{ outcome: 'kept' }]);
-    expect(await desk.says('entry.amend', { entryId, set: { text: 'four ribs' } })).toMatchObject({ outcome: 'loose-end' });
+    expect(await desk.says('entry.amend', { entryId, set: { text: 'four ribs' } })).toMatchObject({
+      outcome: 'loose-end',
+    });
     expect(await phone.sendsOnly([amend])).toMatchObject([{ outcome: 'kept' }]);
     expect(shop.looseEnds()).toHaveLength(1);
   });
@@ -150,7 +160,9 @@ describe('law 4: receipt facts are fixed once', () => {
     shop.clock.advance(86_400_000);
     phone.does('entry.write', about(ids[2], TODAY));
     await phone.sends();
-    const flags = ids.map((id) => shop.row('entry', id)).map(({ writtenLater, heardLater }) => [writtenLater, heardLater]);
+    const flags = ids
+      .map((id) => shop.row('entry', id))
+      .map(({ writtenLater, heardLater }) => [writtenLater, heardLater]);
     expect(flags).toEqual([
       [false, true],
       [true, true],

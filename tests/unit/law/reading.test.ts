@@ -9,7 +9,15 @@ async function shopWithPhone() {
   const { boatId, stageId } = await shop.withBoat();
   const phone = shop.phone(shop.person('Rosa', 'crew'));
   const write = (changes: object = {}) => {
-    const data = { entryId: shop.newId(), boatId, stageId, workDate: TODAY, text: 'Ribs', spoken: false, hours: [] };
+    const data = {
+      entryId: shop.newId(),
+      boatId,
+      stageId,
+      workDate: TODAY,
+      text: 'Ribs',
+      spoken: false,
+      hours: [],
+    };
     return phone.does('entry.write', { ...data, ...changes });
   };
   return { shop, boatId, stageId, phone, write };
@@ -21,8 +29,14 @@ describe('what cannot be read as an op is malformed, and what stands beside it g
     ['a text with U+0000', (op) => ({ ...op, data: { ...(op.data as object), text: 'a\u0000b' } })],
     ['a lone surrogate', (op) => ({ ...op, data: { ...(op.data as object), text: 'a\ud800b' } })],
     ['a lone surrogate in a name', (op) => ({ ...op, data: { ...(op.data as object), '\udc00': 1 } })],
-    ['a text of 20,001 units', (op) => ({ ...op, data: { ...(op.data as object), text: 'a'.repeat(20_001) } })],
-    ['a text of 10,001 smiles', (op) => ({ ...op, data: { ...(op.data as object), text: '😀'.repeat(10_001) } })],
+    [
+      'a text of 20,001 units',
+      (op) => ({ ...op, data: { ...(op.data as object), text: 'a'.repeat(20_001) } }),
+    ],
+    [
+      'a text of 10,001 smiles',
+      (op) => ({ ...op, data: { ...(op.data as object), text: '😀'.repeat(10_001) } }),
+    ],
     ['the stamp of another device', (op) => ({ ...op, at: formatStamp({ ms: 5, counter: 0 }, others) })],
     ['a UUIDv4 id', (op) => ({ ...op, id: '919108f7-52d1-4320-9bac-f847db4148a8' })],
     ['an id in capitals', (op) => ({ ...op, id: (op.id as string).toUpperCase().replace('7000', '700A') })],
@@ -33,8 +47,14 @@ describe('what cannot be read as an op is malformed, and what stands beside it g
     ['an over that is a list', (op) => ({ ...op, over: [] })],
     ['a version 0', (op) => ({ ...op, v: 0 })],
     ['a day that is none', (op) => ({ ...op, data: { ...(op.data as object), workDate: '2026-02-30' } })],
-    ['a row id in version 4', (op) => ({ ...op, data: { ...(op.data as object), entryId: '919108f7-52d1-4320-9bac-f847db4148a8' } })],
-    ['hours beyond a day', (op) => ({ ...op, data: { ...(op.data as object), hours: [{ personId: others, minutes: 1441 }] } })],
+    [
+      'a row id in version 4',
+      (op) => ({ ...op, data: { ...(op.data as object), entryId: '919108f7-52d1-4320-9bac-f847db4148a8' } }),
+    ],
+    [
+      'hours beyond a day',
+      (op) => ({ ...op, data: { ...(op.data as object), hours: [{ personId: others, minutes: 1441 }] } }),
+    ],
     ['nothing', () => null],
     ['a number', () => 7],
     ['a list', () => []],
@@ -100,7 +120,11 @@ describe('what is not known here is not understood', () => {
     write({ place: { side: 'port', depthMm: 4 } });
     write({ hours: [{ personId: phone.personIds[0], minutes: 60, rate: 4 }] });
     const outcomes = await phone.sends();
-    expect(outcomes.map(({ reason }) => reason)).toEqual(['not-understood', 'not-understood', 'not-understood']);
+    expect(outcomes.map(({ reason }) => reason)).toEqual([
+      'not-understood',
+      'not-understood',
+      'not-understood',
+    ]);
   });
 
   it('an op without a version is of version 1', async () => {
@@ -116,8 +140,12 @@ describe('an id that is taken is not taken twice', () => {
     const op = write();
     await phone.sends();
     const other = { ...write(), id: op.id };
-    expect(await phone.sendsOnly([other])).toMatchObject([{ id: op.id, outcome: 'set-aside', reason: 'id-reused' }]);
-    expect(shop.all('setAside')).toMatchObject([{ id: idFromSha256(sha256Hex(canonicalJson(other))), opId: null, op: other }]);
+    expect(await phone.sendsOnly([other])).toMatchObject([
+      { id: op.id, outcome: 'set-aside', reason: 'id-reused' },
+    ]);
+    expect(shop.all('setAside')).toMatchObject([
+      { id: idFromSha256(sha256Hex(canonicalJson(other))), opId: null, op: other },
+    ]);
     expect(shop.all('entry')).toHaveLength(1);
     expect(await phone.sendsOnly([other, op])).toMatchObject([{ reason: 'id-reused' }, { outcome: 'kept' }]);
   });
@@ -135,7 +163,10 @@ describe('an id that is taken is not taken twice', () => {
     const entryId = shop.newId();
     write({ entryId, text: 'first' });
     write({ entryId, text: 'second' });
-    expect(await phone.sends()).toMatchObject([{ outcome: 'kept' }, { outcome: 'set-aside', reason: 'id-reused' }]);
+    expect(await phone.sends()).toMatchObject([
+      { outcome: 'kept' },
+      { outcome: 'set-aside', reason: 'id-reused' },
+    ]);
     expect(shop.row('entry', entryId).text).toBe('first');
   });
 
@@ -147,7 +178,11 @@ describe('an id that is taken is not taken twice', () => {
     phone.does('task.mark', { taskId, markId, workDate: '2026-05-30' });
     phone.does('task.start', { taskId, startId: markId });
     const outcomes = await phone.sends();
-    expect(outcomes.map(({ outcome, reason }) => reason ?? outcome)).toEqual(['kept', 'id-reused', 'id-reused']);
+    expect(outcomes.map(({ outcome, reason }) => reason ?? outcome)).toEqual([
+      'kept',
+      'id-reused',
+      'id-reused',
+    ]);
     expect(shop.row('task', taskId).marks).toMatchObject([{ id: markId, workDate: TODAY }]);
   });
 

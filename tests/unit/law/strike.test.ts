@@ -15,7 +15,15 @@ beforeEach(async () => {
   const rosa = shop.person('Rosa', 'crew');
   [rosas, tablet] = [shop.phone(rosa), shop.phone(rosa)];
   entryId = shop.newId();
-  await rosas.says('entry.write', { entryId, boatId, stageId, workDate: TODAY, text: 'ribs', spoken: true, hours: [] });
+  await rosas.says('entry.write', {
+    entryId,
+    boatId,
+    stageId,
+    workDate: TODAY,
+    text: 'ribs',
+    spoken: true,
+    hours: [],
+  });
   for (const phone of [tablet, desk]) phone.hears();
 });
 
@@ -30,7 +38,11 @@ describe('law 8: nothing is deleted, it is struck', () => {
     const op = strikes(rosas);
     await rosas.sends();
     const at = new Date(shop.clock.now()).toISOString();
-    expect(entry()).toMatchObject({ text: 'ribs', struck: { by: op.personId, at, why: 'wrong boat' }, heads: { struck: [op.id] } });
+    expect(entry()).toMatchObject({
+      text: 'ribs',
+      struck: { by: op.personId, at, why: 'wrong boat' },
+      heads: { struck: [op.id] },
+    });
   });
 
   it('and can be restored, with a reason', async () => {
@@ -106,13 +118,16 @@ describe('struck and changed', () => {
     expect(shop.looseEnds()).toEqual([]);
   });
 
-  it.each(['strike', 'change'] as const)('is one where it did not, whichever came first: the %s', async (first) => {
-    strikes(tablet);
-    changes(rosas, 'two ribs');
-    for (const phone of first === 'strike' ? [tablet, rosas] : [rosas, tablet]) await phone.sends();
-    expect(entry()).toMatchObject({ text: 'two ribs', struck: {} });
-    expect(unseen()).toEqual([{ field: 'text', value: 'two ribs' }]);
-  });
+  it.each(['strike', 'change'] as const)(
+    'is one where it did not, whichever came first: the %s',
+    async (first) => {
+      strikes(tablet);
+      changes(rosas, 'two ribs');
+      for (const phone of first === 'strike' ? [tablet, rosas] : [rosas, tablet]) await phone.sends();
+      expect(entry()).toMatchObject({ text: 'two ribs', struck: {} });
+      expect(unseen()).toEqual([{ field: 'text', value: 'two ribs' }]);
+    },
+  );
 
   it('is one where something was added meanwhile', async () => {
     strikes(tablet);
@@ -142,7 +157,9 @@ describe('struck and changed', () => {
     await desk.sends();
     await rosas.sends();
     expect(shop.row('task', taskId)).toMatchObject({ done: true, struck: {} });
-    expect(shop.looseEnd(taskId, 'struck-and-changed')!.values.map(({ value }) => value)).toEqual([{ added: markId }]);
+    expect(shop.looseEnd(taskId, 'struck-and-changed')!.values.map(({ value }) => value)).toEqual([
+      { added: markId },
+    ]);
   });
 
   it('is closed by restoring', async () => {
