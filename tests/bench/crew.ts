@@ -6,7 +6,7 @@ import { feedSeq } from '#server/sync/feed.ts';
 import { layDown, senderFor, type Sender, type Yard } from '#tests/worlds/sender.ts';
 import type { TestServer } from '#tests/worlds/server.ts';
 import { makePerson, makeShop, type TestShop } from '#tests/worlds/shop.ts';
-import { post, syncBody } from './wire.ts';
+import { post, syncBody, type Came } from './wire.ts';
 
 export const DEVICES = 10;
 
@@ -46,7 +46,7 @@ export function bodyOf({ server }: Crew, hand: Sender, request: Partial<SyncRequ
   return syncBody({ deviceId: hand.deviceId, cursor: null, ops: [], held, appVersion: '0.1.0', ...request });
 }
 
-export function postSync({ server }: Crew, hand: Sender, body: Buffer): Promise<Buffer> {
+export function postSync({ server }: Crew, hand: Sender, body: Buffer): Promise<Came> {
   return post(`${server.url}/api/sync`, hand.session.accessToken, body);
 }
 

@@ -1,8 +1,48 @@
-import { benchMerge } from './merge-bench.ts';
+import os from 'node:os';
+import pg from 'pg';
+import { CLUSTER_URL } from '#tests/worlds/postgres.ts';
+import { DEVICES } from './crew.ts';
+import { benchAmend, type AmendFinding } from './amend-bench.ts';
+import type { Finding } from './measuring.ts';
+import { benchMerge, type MergeFindings } from './merge-bench.ts';
 import { findingsTable, table } from './print.ts';
+import { benchPull } from './pull-bench.ts';
 import { hangUp } from './wire.ts';
 
-const { findings, spending } = await benchMerge();
-console.log(findingsTable(findings));
-console.log(table([["part", "ms"], ...[...spending].map(([part, ms]) => [part, ms.toFixed(2)])]));
+// Each figure is a ratio of two ways of doing the same work, measured in turns in this one run: only that can be
+// compared between machines. `npm run bench -- merge` runs the benches that are named alone.
+const wanted = process.argv.slice(3);
+const isWanted = (name: string) => wanted.length === 0 || wanted.includes(name);
+
+console.log(`${await settings()}; ${os.cpus().length} cores, Node ${process.version}; server, bench and PostgreSQL on one machine`);
+const findings: Finding[] = [];
+const merge = isWanted('merge') ? await benchMerge() : null;
+findings.push(...(merge?.findings ?? []));
+if (isWanted('pull')) findings.push(await benchPull());
+const amend = isWanted('amend') ? await benchAmend() : null;
 hangUp();
+
+if (findings.length > 0) console.log(`\n${findingsTable(findings)}`);
+if (amend) console.log(`\n${amendLine(amend)}`);
+if (merge) console.log(`\n${spendingTable(merge)}`);
+
+/** What decides whether a commit is durable, the same for both sides and as the product's own cluster has it. */
+async function settings(): Promise<string> {
+  const client = new pg.Client({ connectionString: process.env[CLUSTER_URL] });
+  await client.connect();
+  const names = ['fsync', 'synchronous_commit', 'full_page_writes', 'wal_sync_method'];
+  const shown: string[] = [];
+  for (const name of names) shown.push(`${name} ${(await client.query(`SHOW ${name}`)).rows[0][name]}`);
+  await client.end();
+  return `PostgreSQL: ${shown.join(', ')}`;
+}
+
+function amendLine({ kept, live, of, ms }: AmendFinding): string {
+  return `${DEVICES} devices amend the same ${of / DEVICES} entries in different fields at once: ${kept} of ${of} kept, ${live} of ${of} live, ${ms.toFixed(0)} ms`;
+}
+
+function spendingTable({ spending }: MergeFindings): string {
+  const total = [...spending.values()].reduce((sum, ms) => sum + ms, 0);
+  const lines = [...spending].map(([part, ms]) => [part, ms.toFixed(2), `${Math.round((100 * ms) / total)} %`]);
+  return table([['one device of the first bench: where the time goes', 'ms', ''], ...lines, ['all', total.toFixed(2), '']]);
+}

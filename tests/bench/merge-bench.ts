@@ -5,7 +5,7 @@ import { DEVICES, bodyOf, entryOps, latestCursor, makeCrew, postSync, type Crew 
 import { median, timed, type Finding } from './measuring.ts';
 import { SqlTrace } from './sql-trace.ts';
 import { spendingOf, sumSpending, type Spending } from './sync-spending.ts';
-import { answerIn } from './wire.ts';
+import { answerIn, type Came } from './wire.ts';
 
 const OPS_A_DEVICE = 400;
 const WARM_UPS = 2;
@@ -29,7 +29,7 @@ interface Batch {
   opIds: string[];
   entryIds: string[];
   /** gets the request ready, then sends it */
-  ready: () => Promise<() => Promise<Buffer>>;
+  ready: () => Promise<() => Promise<Came>>;
 }
 
 export interface MergeFindings {
@@ -111,7 +111,7 @@ async function oneByOne(batches: Batch[], trace: SqlTrace): Promise<Posted> {
 
 async function allAtOnce(batches: Batch[]): Promise<Posted> {
   const sends = await Promise.all(batches.map(({ ready }) => ready()));
-  let answers: Buffer[] = [];
+  let answers: Came[] = [];
   const oursMs = await timed(async () => (answers = await Promise.all(sends.map((send) => send()))));
   answers.forEach(assertKept);
   return { oursMs, spending: new Map() };
@@ -125,7 +125,7 @@ async function keepAllAtOnce(bare: BareInsert, kept: KeptBatch[]): Promise<void>
   await Promise.all(kept.map((batch) => bare.keep(batch)));
 }
 
-function assertKept(bytes: Buffer): void {
-  const kept = answerIn(bytes).outcomes.filter(({ outcome }) => outcome === 'kept');
+function assertKept(came: Came): void {
+  const kept = answerIn(came).outcomes.filter(({ outcome }) => outcome === 'kept');
   if (kept.length !== OPS_A_DEVICE) throw new Error(`${kept.length} of ${OPS_A_DEVICE} ops were kept.`);
 }

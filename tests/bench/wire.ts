@@ -10,8 +10,14 @@ export function syncBody(request: SyncRequest): Buffer {
   return gzipSync(JSON.stringify(request));
 }
 
-/** Posts a gzipped JSON body and resolves with the answer's bytes, gzipped as they came; rejects unless it is a 200. */
-export function post(url: string, token: string, body: Buffer): Promise<Buffer> {
+/** An answer's bytes as they came; a short one comes as it is. */
+export interface Came {
+  bytes: Buffer;
+  isZipped: boolean;
+}
+
+/** Posts a gzipped JSON body; rejects unless the answer is a 200. */
+export function post(url: string, token: string, body: Buffer): Promise<Came> {
   const headers = {
     Authorization: `Bearer ${token}`,
     'Content-Type': 'application/json',
@@ -26,7 +32,7 @@ export function post(url: string, token: string, body: Buffer): Promise<Buffer> 
       response.on('error', reject);
       response.on('end', () => {
         const bytes = Buffer.concat(chunks);
-        if (response.statusCode === 200) resolve(bytes);
+        if (response.statusCode === 200) resolve({ bytes, isZipped: response.headers['content-encoding'] === 'gzip' });
         else reject(new Error(`${url} answered ${response.statusCode}: ${bytes.toString().slice(0, 300)}`));
       });
     });
@@ -35,8 +41,8 @@ export function post(url: string, token: string, body: Buffer): Promise<Buffer> 
   });
 }
 
-export function answerIn(bytes: Buffer): SyncAnswer {
-  return JSON.parse(gunzipSync(bytes).toString()) as SyncAnswer;
+export function answerIn({ bytes, isZipped }: Came): SyncAnswer {
+  return JSON.parse((isZipped ? gunzipSync(bytes) : bytes).toString()) as SyncAnswer;
 }
 
 export function hangUp(): void {
