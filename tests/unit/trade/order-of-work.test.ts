@@ -169,7 +169,20 @@ describe('from a template to a boat', () => {
     );
   });
 
-  test('the merge keeps all of it, in the order given', async () => {
+  test('an op names only what came before it', () => {
+    fc.assert(
+      fc.property(boats, ({ template, ...boat }) => {
+        const there = new Set([BOAT_ID]);
+        for (const { kind, data } of workOf(template, boat).ops) {
+          const opKind = opKinds.get(kind)!;
+          for (const { id } of opKind.names!(data)) expect(there).toContain(id);
+          there.add(opKind.rowId(data));
+        }
+      }),
+    );
+  });
+
+  test('the merge keeps all of it, in one batch', async () => {
     await fc.assert(
       fc.asyncProperty(boats, async ({ template, ...boat }) => {
         const shop = new ShopInMemory();
@@ -188,6 +201,15 @@ describe('from a template to a boat', () => {
       { numRuns: 15 },
     );
   });
+});
+
+test('what comes after a stage that is left out comes after what that one came after', () => {
+  const [first, second] = templates.get('annual_refit')!.stages;
+  const leftOut = { ...second!, id: 'left_out', after: [first!.id], choice: 'bleach' as const };
+  const last = { ...second!, id: 'last', after: ['left_out'] };
+  const template = { ...templates.get('annual_refit')!, stages: [first!, leftOut, last] };
+  const { stages } = workOf(template, {});
+  expect(stages.map(({ after }) => after)).toEqual([[], [stages[0]!.stageId]]);
 });
 
 describe('a varnished boat', () => {
@@ -239,6 +261,13 @@ describe('a varnished boat', () => {
 
 describe('a lapstrake boat', () => {
   const template = templates.get('painted_lapstrake')!;
+
+  test('keeps a place of many words out of the title', () => {
+    const dent = { words: 'x'.repeat(500), side: 'port' as const };
+    const { tasks } = workOf(template, { counts: { places: { raise_dents_wet_cloth_cloth: [dent] } } });
+    const task = tasks.find(({ templateId }) => templateId?.endsWith('/raise_dents_wet_cloth_cloth'));
+    expect([task?.title, task?.place]).toEqual(['Raise dents, port: wet cloth, or cloth and heat', dent]);
+  });
 
   test('asks for ribs, planks and length, and whether she is turned', () => {
     const { choices, counts, places } = questionsOf(template);
