@@ -1,15 +1,9 @@
-import type { Held } from '#shared/identity/device.ts';
 import { addDays, type Day } from '#shared/sync/day.ts';
 import { DEMO_BOATS, type BoatKey, type DemoStage, type DemoTask } from './demo-boats.ts';
 import { DemoDays } from './demo-days.ts';
-import {
-  DEMO_CHANGES,
-  DEMO_ENTRIES,
-  FIRST_LOGGED,
-  type DemoChange,
-  type DemoEntry,
-  type Figure,
-} from './demo-entries.ts';
+import { DEMO_CHANGES, DEMO_ENTRIES, FIRST_LOGGED, type DemoChange } from './demo-entries.ts';
+import type { DemoEntry, Figure } from './demo-entry.ts';
+import { deviceLines, type DemoDeviceLine } from './demo-heard.ts';
 import { DEMO_DEVICES, DEMO_PEOPLE, type DeviceKey, type PersonKey } from './demo-people.ts';
 import { DemoIds, DemoScript, type DemoBatch } from './demo-script.ts';
 
@@ -21,15 +15,6 @@ const FIRST_DAY = -21;
 const KINDS_SET_AFTER_DAYS = 2;
 const NEWEST_DAY_WITH_KINDS = -4;
 const HOBS_NEW_PHONE_DAY = -8;
-
-export interface DemoDeviceLine {
-  id: string;
-  label: string;
-  replaces: string | null;
-  personIds: string[];
-  lastHeardMs: number;
-  held: Held;
-}
 
 /** A shop's four weeks as ops in the order in which the server hears them, and what stands beside the record. */
 export interface DemoRecord<Key extends string = PersonKey> {
@@ -78,7 +63,16 @@ class Telling {
       .sort((a, b) => a.atMs - b.atMs);
     for (const event of happened) event.happen();
     const batches = this.script.heard();
-    return { people: this.people, devices: this.deviceLines(batches), owners: this.owners(), batches };
+    const { days, latestMs, startMs } = this;
+    const devices = deviceLines({
+      days,
+      latestMs,
+      startMs,
+      batches,
+      deviceIds: this.devices,
+      personIds: this.people,
+    });
+    return { people: this.people, devices, owners: this.owners(), batches };
   }
 
   private idsFor<Key extends string>(keys: Key[]): Map<Key, string> {
@@ -288,34 +282,5 @@ class Telling {
   private owners(): DemoRecord['owners'] {
     const boats = Object.entries(DEMO_BOATS) as [BoatKey, (typeof DEMO_BOATS)[BoatKey]][];
     return boats.map(([key, { owner }]) => ({ boatId: this.id(key), personId: this.person(owner) }));
-  }
-
-  private deviceLines(batches: DemoBatch[]): DemoDeviceLine[] {
-    return (Object.keys(DEMO_DEVICES) as DeviceKey[]).map((key) => {
-      const { label, people, replaces } = DEMO_DEVICES[key];
-      const id = this.devices.get(key)!;
-      const lastMs = Math.max(
-        this.startMs,
-        ...batches.filter((batch) => batch.deviceId === id).map((batch) => batch.receivedMs),
-      );
-      return {
-        id,
-        label,
-        replaces: replaces ? this.devices.get(replaces)! : null,
-        personIds: people.map((person) => this.person(person)),
-        ...this.lastHeard(key, lastMs),
-      };
-    });
-  }
-
-  /** What a device held when it was last heard; two of Hob's phones were cut off in the middle of sending. */
-  private lastHeard(key: DeviceKey, lastMs: number): Pick<DemoDeviceLine, 'lastHeardMs' | 'held'> {
-    const cutOff = (day: number, time: string, ops: number, oldestDay: number, oldestTime: string) => ({
-      lastHeardMs: this.at(day, time) < this.latestMs ? this.at(day, time) : lastMs,
-      held: { ops, photos: 0, oldest: new Date(this.at(oldestDay, oldestTime)).toISOString() },
-    });
-    if (key === 'hobOldPhone') return cutOff(-9, '07:50', 2, -9, '07:41');
-    if (key === 'hobPhone') return cutOff(0, '07:35', 4, -1, '13:20');
-    return { lastHeardMs: lastMs, held: { ops: 0, photos: 0, oldest: null } };
   }
 }

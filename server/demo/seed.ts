@@ -21,6 +21,7 @@ import {
   type DemoPerson,
   type ShopWords,
 } from './demo-people.ts';
+import type { DemoDeviceLine } from './demo-heard.ts';
 import { makeDemoRecord, type DemoRecord } from './demo-record.ts';
 import type { DemoBatch } from './demo-script.ts';
 import { makeSecondRecord } from './second-record.ts';

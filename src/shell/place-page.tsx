@@ -1,5 +1,6 @@
 import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
+import { Empty, Loading } from '#src/components/empty.tsx';
 import { Page } from '#src/components/page.tsx';
 import { TopBar } from '#src/components/top-bar.tsx';
 import { useMe, useRead, useSyncState } from '#src/replica/hooks.tsx';
@@ -10,15 +11,19 @@ import { RecordBar } from '#src/shell/record-bar.tsx';
 import { Warnings } from '#src/shell/warnings.tsx';
 
 interface PlacePageProps {
+  /** For the window's title. */
+  title: string;
   width?: 'wide' | 'line';
   children: ReactNode;
 }
 
 /** A place's whole screen: the places and the state of the record above it. On a desk both share one bar. */
-export function PlacePage({ width = 'line', children }: PlacePageProps) {
+export function PlacePage({ title, width = 'line', children }: PlacePageProps) {
   const me = useMe();
+  const isHeard = useRead(['heard'], (view) => view.all('shop').length > 0);
   const bars = (
     <>
+      <title>{`${title} · Ribband`}</title>
       <TopBar places={placesFor(me?.roles ?? [])} right={<WhoAndRecord name={me?.name ?? ''} />} />
       <RecordUnlessQuiet />
     </>
@@ -26,8 +31,19 @@ export function PlacePage({ width = 'line', children }: PlacePageProps) {
   return (
     <Page width={width} bars={bars}>
       <Warnings />
-      {children}
+      {isHeard ? children : <NotHeard />}
     </Page>
+  );
+}
+
+/** Before this device has heard the record for the first time. */
+function NotHeard() {
+  const { phase } = useSyncState();
+  if (phase !== 'offline' && phase !== 'failed') return <Loading words="Getting the record …" />;
+  return (
+    <Empty>
+      This device has not heard the record yet, and there is no signal here. It comes by itself when there is.
+    </Empty>
   );
 }
 

@@ -10,4 +10,10 @@ export const HOURS_KIND_WORDS: Record<HoursKind, string> = {
   yard: 'yard work',
 };
 
+/** The same where there is little room. */
+export const HOURS_KIND_SHORT_WORDS: Record<HoursKind, string> = {
+  ...HOURS_KIND_WORDS,
+  'own-fault': 'own fault',
+};
+
 export const HOURS_KINDS = Object.keys(HOURS_KIND_WORDS) as HoursKind[];

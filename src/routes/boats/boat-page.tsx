@@ -22,13 +22,13 @@ export default function BoatPage() {
   const boat = useRead(['boat', id], (view) => readBoat(view, id));
   if (!boat) {
     return (
-      <PlacePage>
+      <PlacePage title="No such boat">
         <Empty action={<KeyLink to="/boats">All boats</KeyLink>}>This boat is not known here.</Empty>
       </PlacePage>
     );
   }
   return (
-    <PlacePage>
+    <PlacePage title={boat.row.name}>
       <Head boat={boat} />
       <Particulars boat={boat} />
       <Owners boat={boat} />

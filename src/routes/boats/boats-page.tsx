@@ -18,7 +18,7 @@ export default function BoatsPage() {
   const navigate = useNavigate();
   const [isAdding, setAdding] = useState(false);
   return (
-    <PlacePage>
+    <PlacePage title="Boats">
       <Section
         title="Boats"
         level={1}

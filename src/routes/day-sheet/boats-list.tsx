@@ -3,7 +3,7 @@ import { BungMark } from '#src/components/bung-mark.tsx';
 import { Empty } from '#src/components/empty.tsx';
 import { Hours } from '#src/components/hours.tsx';
 import { Icon } from '#src/components/icons.tsx';
-import { HOURS_KIND_WORDS } from '#src/words/hours-words.ts';
+import { HOURS_KIND_SHORT_WORDS } from '#src/words/hours-words.ts';
 import { BATTEN_LOOK } from './batten-look.ts';
 import type { BoatOnSheet, BriefEntry, StageOnSheet } from './read-boats.ts';
 
@@ -12,7 +12,7 @@ export function BoatsList({ boats }: { boats: BoatOnSheet[] }) {
   if (boats.length === 0) return <Empty>Nothing about any boat yet.</Empty>;
   return (
     <section aria-label="By boat">
-      <ul className="grid gap-seam bg-line py-seam">
+      <ul className="grid grid-cols-[minmax(0,1fr)] gap-seam bg-line py-seam">
         {boats.map((boat) => (
           <BoatBlock key={boat.boatId} boat={boat} />
         ))}
@@ -23,7 +23,7 @@ export function BoatsList({ boats }: { boats: BoatOnSheet[] }) {
 
 function BoatBlock({ boat }: { boat: BoatOnSheet }) {
   return (
-    <li className="grid gap-1 bg-plank px-4 py-3 lg:px-5">
+    <li className="bg-plank px-4 py-3 lg:px-5">
       <div className="flex items-baseline justify-between gap-4">
         <h2 className="text-[22px] leading-tight font-bold">
           <Link to={`/boats/${boat.boatId}`} className="text-mahogany hover:underline">
@@ -38,9 +38,11 @@ function BoatBlock({ boat }: { boat: BoatOnSheet }) {
           <Hours minutes={boat.minutes} unit="" />
         </p>
       </div>
-      {boat.stages.map((stage) => (
-        <StageBlock key={stage.stageId ?? ''} stage={stage} />
-      ))}
+      <div className={BATTEN_LOOK}>
+        {boat.stages.map((stage) => (
+          <StageBlock key={stage.stageId ?? ''} stage={stage} />
+        ))}
+      </div>
       {boat.ticks.length > 0 && (
         <p className="flex gap-2 pl-[2px]">
           <Icon name="tick" className="mt-[1px]" />
@@ -59,16 +61,17 @@ function BoatBlock({ boat }: { boat: BoatOnSheet }) {
 function StageBlock({ stage }: { stage: StageOnSheet }) {
   return (
     <div>
-      <h3 className="text-[16px] leading-snug text-slate">
+      <h3 className="relative pt-1 pl-[44px] text-[16px] leading-snug text-slate before:absolute before:top-[13px] before:left-[7px] before:h-[3px] before:w-[14px] before:bg-bilge">
         <span className="font-semibold text-bilge">{stage.name}</span> · <Hours minutes={stage.minutes} />
         {stage.kinds.map(({ kind, minutes }) => (
           <span key={kind ?? ''}>
             {' · '}
-            {kind === null ? 'kind not set' : HOURS_KIND_WORDS[kind]} <Hours minutes={minutes} unit="" />
+            {kind === null ? 'kind not set' : HOURS_KIND_SHORT_WORDS[kind]}{' '}
+            <Hours minutes={minutes} unit="" />
           </span>
         ))}
       </h3>
-      <ul className={BATTEN_LOOK}>
+      <ul>
         {stage.entries.map((entry) => (
           <BriefRow key={entry.id} entry={entry} />
         ))}
@@ -87,7 +90,7 @@ function BriefRow({ entry }: { entry: BriefEntry }) {
         to={`/entry/${entry.id}`}
         className={`min-w-0 flex-1 truncate py-[2px] hover:underline print:whitespace-normal ${entry.mark === 'struck' ? 'text-slate line-through' : ''}`}
       >
-        <People entry={entry} /> {entry.text}
+        <People entry={entry} /> <span className="text-slate">·</span> {entry.text}
       </Link>
     </li>
   );

@@ -29,8 +29,8 @@ function DaySheet({ day }: { day: Day }) {
   const isByBoat = search.get('by') === 'boat';
   useArrowKeys(day);
   return (
-    <PlacePage width="wide">
-      <div className="xl:grid xl:min-h-[calc(100dvh-64px)] xl:grid-cols-[minmax(0,1fr)_400px]">
+    <PlacePage title="Day sheet" width="wide">
+      <div className="xl:grid xl:min-h-[calc(100dvh-64px)] xl:grid-cols-[minmax(0,1fr)_372px]">
         <div className="pb-6 md:px-6">
           <SheetHead
             sheet={sheet}
@@ -46,7 +46,7 @@ function DaySheet({ day }: { day: Day }) {
             <BoatsList boats={sheet.boats} />
           </div>
         </div>
-        <div className="border-bilge pb-10 md:px-6 xl:border-l-[3px]">
+        <div className="border-bilge pb-10 md:px-6 xl:border-l-[3px] xl:px-5">
           <LooseEnds ends={ends} />
           <SetAsides lines={setAsides} />
         </div>

@@ -24,7 +24,7 @@ export function EntryRow({ entry, personName }: EntryRowProps) {
         >
           <span className="font-bold text-mahogany group-hover:underline">{entry.boatName}</span>
           <span className="text-slate"> · {entry.stageName}</span>
-          {entry.author && <span className="text-slate"> · written by {entry.author}</span>}
+          {entry.author && <span className="text-slate"> · by {entry.author}</span>}
           <span className={`block ${struck ? 'text-slate line-through' : ''}`}>{entry.text}</span>
         </Link>
         <Notes entry={entry} />
@@ -51,26 +51,29 @@ function Notes({ entry }: { entry: EntryLine }) {
         </p>
       ))}
       {entry.figure?.corrections.map((correction) => (
-        <CorrectionLine key={correction.when + correction.beforeMinutes} correction={correction} />
+        <CorrectionLine key={`${correction.when} ${correction.afterMinutes}`} correction={correction} />
       ))}
-      {entry.figure && entry.figure.others.length > 0 && <OtherFigures figure={entry.figure} />}
+      {entry.mark === 'held' && <p className="text-slate">held on this device</p>}
+      {entry.mark === 'loose' && <LooseLine figure={entry.figure} />}
     </div>
   );
 }
 
-function CorrectionLine({ correction: { beforeMinutes, who, when, why } }: { correction: Correction }) {
+function CorrectionLine({ correction }: { correction: Correction }) {
+  const { beforeMinutes, afterMinutes, who, when, why } = correction;
   return (
     <p className="text-slate">
-      was <Hours minutes={beforeMinutes} />
+      <Hours minutes={beforeMinutes} /> became <Hours minutes={afterMinutes} />
       {why && <>: {why}</>} ({who}, {when})
     </p>
   );
 }
 
-function OtherFigures({ figure }: { figure: Figure }) {
+/** What else is said, with the way to where it is settled. */
+function LooseLine({ figure }: { figure: Figure | null }) {
   return (
     <p className="font-semibold">
-      {figure.others.map((minutes) => (
+      {figure?.others.map((minutes) => (
         <span key={minutes}>
           or <Hours minutes={minutes} />
           {'? '}
@@ -91,25 +94,12 @@ interface FigureCellProps {
 }
 
 function FigureCell({ entryId, figure, personName, isStruck }: FigureCellProps) {
-  if (isStruck || figure.minutes === 0) {
-    return (
-      <p className="text-slate sm:w-[236px] sm:text-right">
-        {isStruck ? (
-          <s>
-            <Hours minutes={figure.minutes} />
-          </s>
-        ) : (
-          <Hours minutes={0} />
-        )}
-      </p>
-    );
-  }
+  const isKindless = isStruck || figure.minutes === 0;
+  const hours = <Hours minutes={figure.minutes} />;
   return (
-    <div className="flex items-center justify-between gap-3 py-1 sm:w-[236px] sm:items-start sm:py-0">
-      <p className="sm:w-[64px] sm:text-right">
-        <Hours minutes={figure.minutes} />
-      </p>
-      <KindSelect entryId={entryId} figure={figure} personName={personName} />
+    <div className="flex items-center justify-between gap-3 py-1 sm:block sm:w-[164px] sm:py-0 sm:text-right">
+      <p className={isKindless ? 'text-slate' : ''}>{isStruck ? <s>{hours}</s> : hours}</p>
+      {!isKindless && <KindSelect entryId={entryId} figure={figure} personName={personName} />}
     </div>
   );
 }

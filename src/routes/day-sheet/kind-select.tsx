@@ -1,6 +1,6 @@
 import type { HoursKind } from '#shared/entry/hours.ts';
 import { useHold, useMe } from '#src/replica/hooks.tsx';
-import { HOURS_KINDS, HOURS_KIND_WORDS } from '#src/words/hours-words.ts';
+import { HOURS_KINDS, HOURS_KIND_SHORT_WORDS } from '#src/words/hours-words.ts';
 import type { Figure } from './read-entry.ts';
 
 interface KindSelectProps {
@@ -15,9 +15,10 @@ export function KindSelect({ entryId, figure, personName }: KindSelectProps) {
   const { mutate: hold } = useHold();
   const { personId, minutes, kind, proposed } = figure;
   const isSet = kind !== null && !proposed;
-  const unsetWords = kind === null ? 'kind?' : `${HOURS_KIND_WORDS[kind]}?`;
+  const unsetWords = kind === null ? 'kind?' : `${HOURS_KIND_SHORT_WORDS[kind]}?`;
   const maySet = me?.roles.some((role) => role === 'foreman' || role === 'office') ?? false;
-  if (!maySet) return <p className="text-[16px] text-slate">{isSet ? HOURS_KIND_WORDS[kind] : unsetWords}</p>;
+  if (!maySet)
+    return <p className="text-[16px] text-slate">{isSet ? HOURS_KIND_SHORT_WORDS[kind] : unsetWords}</p>;
 
   function set(chosen: HoursKind) {
     hold({ kind: 'entry.amend', data: { entryId, set: { hours: [{ personId, minutes, kind: chosen }] } } });
@@ -27,7 +28,7 @@ export function KindSelect({ entryId, figure, personName }: KindSelectProps) {
     <select
       aria-label={`Kind of ${personName}'s hours`}
       title={isSet ? undefined : kind === null ? 'Nobody has said the kind' : 'Proposed; choose to set it'}
-      className={`h-key w-[160px] rounded-key border-2 bg-plank px-2 text-[16px] text-bilge sm:h-[44px] print:appearance-none print:border-0 ${isSet ? 'border-line' : 'border-dashed border-bilge font-semibold'}`}
+      className={`h-key w-[164px] rounded-key border-2 bg-plank pl-2 text-[16px] text-ellipsis text-bilge sm:mt-[2px] sm:h-10 print:appearance-none print:border-0 ${isSet ? 'border-line' : 'border-bilge font-semibold'}`}
       value={isSet ? kind : ''}
       onChange={(event) => set(event.target.value as HoursKind)}
     >
@@ -38,7 +39,7 @@ export function KindSelect({ entryId, figure, personName }: KindSelectProps) {
       )}
       {HOURS_KINDS.map((each) => (
         <option key={each} value={each}>
-          {HOURS_KIND_WORDS[each]}
+          {HOURS_KIND_SHORT_WORDS[each]}
         </option>
       ))}
     </select>

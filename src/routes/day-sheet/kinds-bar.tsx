@@ -1,6 +1,5 @@
 import { Key } from '#src/components/key.tsx';
 import { useHold, useMe } from '#src/replica/hooks.tsx';
-import { counted } from '#src/words/day-words.ts';
 import type { DaySheet } from './read-day-sheet.ts';
 import { readKindsToSet, type KindsOfEntry } from './read-kinds-to-set.ts';
 
@@ -20,16 +19,20 @@ export function KindsBar({ sheet }: { sheet: DaySheet }) {
   return (
     <div data-keys className="flex flex-wrap items-center gap-3 px-4 pt-4 md:px-0">
       <p className="mr-auto text-slate">
-        Kinds of hours: {counted(proposedCount, 'figure')} proposed, {unsetCount} not said.
+        Kinds of hours:{' '}
+        {[proposedCount > 0 && `${proposedCount} proposed`, unsetCount > 0 && `${unsetCount} not said`]
+          .filter(Boolean)
+          .join(', ')}
+        .
       </p>
       {proposedCount > 0 && (
         <Key disabled={isPending} onClick={() => void setAll(proposed)}>
-          {proposedCount === 1 ? 'Take the proposed one' : `Take the ${proposedCount} as proposed`}
+          Take the {proposedCount} as proposed
         </Key>
       )}
       {unsetCount > 0 && (
         <Key disabled={isPending} onClick={() => void setAll(unset('agreed'))}>
-          {unsetCount === 1 ? 'Set the other to agreed work' : `Set the other ${unsetCount} to agreed work`}
+          Set the {unsetCount} not said to agreed work
         </Key>
       )}
     </div>

@@ -3,7 +3,7 @@ import { Icon } from '#src/components/icons.tsx';
 import { KeyLink } from '#src/components/key.tsx';
 import { useMe } from '#src/replica/hooks.tsx';
 import { EntryRow } from './entry-row.tsx';
-import { BATTEN_LOOK } from './batten-look.ts';
+import { BATTEN_LOOK, RUNS_ON } from './batten-look.ts';
 import type { DaySheet, PersonOnSheet, TickLine } from './read-day-sheet.ts';
 import type { Heard } from './read-heard.ts';
 
@@ -11,7 +11,7 @@ import type { Heard } from './read-heard.ts';
 export function PeopleList({ sheet }: { sheet: DaySheet }) {
   return (
     <section aria-label="By person">
-      <ul className="grid gap-seam bg-line py-seam">
+      <ul className="grid grid-cols-[minmax(0,1fr)] gap-seam bg-line py-seam">
         {sheet.people.map((person) => (
           <PersonBlock key={person.personId} person={person} sheet={sheet} />
         ))}
@@ -22,14 +22,14 @@ export function PeopleList({ sheet }: { sheet: DaySheet }) {
 
 function PersonBlock({ person, sheet }: { person: PersonOnSheet; sheet: DaySheet }) {
   return (
-    <li className="grid grid-cols-[minmax(0,1fr)_auto] bg-plank px-4 pt-3 pb-2 lg:grid-cols-[168px_minmax(0,1fr)_64px] lg:px-5">
+    <li className="grid grid-cols-[minmax(0,1fr)_auto] bg-plank px-4 pt-3 pb-2 lg:grid-cols-[152px_minmax(0,1fr)_64px] lg:px-5">
       <div className="min-w-0 pb-1">
         <h2 className="text-[20px] leading-[1.3] font-bold break-words">{person.name}</h2>
         <HeardLine heard={person.heard} />
       </div>
       <Total person={person} />
       <div className="col-span-2 min-w-0 lg:col-span-1 lg:col-start-2 lg:row-start-1">
-        <ul className={BATTEN_LOOK}>
+        <ul className={`${BATTEN_LOOK} ${RUNS_ON}`}>
           {person.entries.map((entry) => (
             <EntryRow key={entry.id} entry={entry} personName={person.name} />
           ))}

@@ -24,6 +24,7 @@ export interface Figure {
 
 export interface Correction {
   beforeMinutes: number;
+  afterMinutes: number;
   who: string;
   when: string;
   why: string | null;
@@ -106,6 +107,7 @@ function readCorrections(view: View, entry: EntryRow, personId: string): Correct
 function correction(view: View, before: Statement, after: Statement): Correction {
   return {
     beforeMinutes: minutesOf(before),
+    afterMinutes: minutesOf(after),
     who: whoWords(view, after.personId),
     when: momentWords(stampTime(after.at), view.timeZone, view.today),
     why: after.why ?? null,

@@ -23,7 +23,7 @@ export function SheetHead({ sheet, isByBoat, endCount, setAsideCount }: SheetHea
   return (
     <div className="grid gap-3 px-4 pt-5 pb-4 md:px-0">
       <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-3">
-        <div className="flex flex-wrap items-baseline gap-x-4">
+        <div>
           <h1 className="text-[34px] leading-tight font-bold tracking-[-0.01em]">
             {longDayWords(sheet.day, today)}
           </h1>
@@ -44,6 +44,9 @@ export function SheetHead({ sheet, isByBoat, endCount, setAsideCount }: SheetHea
   );
 }
 
+// four of them stand in a row on a phone
+const DAY_KEY = '!px-2 whitespace-nowrap sm:!px-4';
+
 function DayKeys({ sheet }: { sheet: DaySheet }) {
   const [isAsking, setAsking] = useState(false);
   const [search] = useSearchParams();
@@ -51,22 +54,31 @@ function DayKeys({ sheet }: { sheet: DaySheet }) {
   const { previous, next, previousWords, nextWords } = readNeighbours(sheet.day);
   return (
     <div data-keys className="grid w-full auto-cols-fr grid-flow-col gap-3 sm:flex sm:w-auto">
-      <KeyLink to={`/day/${previous}${suffix}`}>
+      <KeyLink to={`/day/${previous}${suffix}`} className={DAY_KEY}>
         <span className="sr-only">The day before, </span>
-        {previousWords.slice(0, 3)}
+        {shortDay(previousWords)}
       </KeyLink>
-      {!sheet.isToday && <KeyLink to={`/day${suffix}`}>Today</KeyLink>}
-      <KeyLink to={`/day/${next}${suffix}`}>
+      {!sheet.isToday && (
+        <KeyLink to={`/day${suffix}`} className={DAY_KEY}>
+          Today
+        </KeyLink>
+      )}
+      <KeyLink to={`/day/${next}${suffix}`} className={DAY_KEY}>
         <span className="sr-only">The day after, </span>
-        {nextWords.slice(0, 3)}
+        {shortDay(nextWords)}
       </KeyLink>
-      <Key onClick={() => setAsking(true)}>
+      <Key className={DAY_KEY} onClick={() => setAsking(true)}>
         <span className="sm:hidden">Other</span>
         <span className="hidden sm:inline">Another day</span>
       </Key>
       {isAsking && <OtherDay sheet={sheet} onClose={() => setAsking(false)} />}
     </div>
   );
+}
+
+/** 'Mon 4' of 'Mon 4 May'. */
+function shortDay(words: string): string {
+  return words.split(' ').slice(0, 2).join(' ');
 }
 
 function OtherDay({ sheet, onClose }: { sheet: DaySheet; onClose: () => void }) {
@@ -148,7 +160,7 @@ function WaitingLink({ endCount, setAsideCount }: Pick<SheetHeadProps, 'endCount
     setAsideCount > 0 && `${setAsideCount} set aside`,
   ];
   return (
-    <a href="#loose-ends" className={`${keyLook('quiet')} xl:hidden`}>
+    <a href="#loose-ends" className={`${keyLook('quiet')} !px-0 xl:hidden`}>
       {words.filter(Boolean).join(', ')}
     </a>
   );

@@ -16,7 +16,7 @@ export default function DevicesPage() {
   const lines = useRead(['devices'], readDevices);
   const [asked, setAsked] = useState<DeviceLine | null>(null);
   return (
-    <PlacePage>
+    <PlacePage title="Devices">
       <Section title="Devices" level={1}>
         <Planks>
           {lines.map((line) => (

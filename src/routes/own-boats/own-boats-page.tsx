@@ -11,8 +11,7 @@ import { PlacePage } from '#src/shell/place-page.tsx';
 export default function OwnBoatsPage() {
   const boats = useRead(['own boats'], readOwnBoats);
   return (
-    <PlacePage>
-      <title>My boats · Ribband</title>
+    <PlacePage title="My boats">
       <h1 className="px-4 pt-6 text-[30px] leading-tight font-bold md:px-6">
         {boats.length === 1 ? 'My boat' : 'My boats'}
       </h1>

@@ -14,7 +14,7 @@ export default function PeoplePage() {
   const isOffline = useSyncState().phase === 'offline';
   const [open, setOpen] = useState<PersonRow | 'new' | null>(null);
   return (
-    <PlacePage>
+    <PlacePage title="People">
       <Section
         title="People"
         level={1}
