@@ -15,6 +15,7 @@ import { readBoat, type BoatPage as Boat } from './read-boat.ts';
 import { StageBlock } from './stage-block.tsx';
 import { StageSheet } from './stage-sheet.tsx';
 import { Struck } from './struck.tsx';
+import { WorkSheet } from './work-sheet.tsx';
 
 /** One boat: what is known of her, whose she is, her stages and their tasks. */
 export default function BoatPage() {
@@ -97,6 +98,7 @@ function Owners({ boat }: { boat: Boat }) {
 
 function Stages({ boat }: { boat: Boat }) {
   const [isAdding, setAdding] = useState(false);
+  const [isMaking, setMaking] = useState(false);
   return (
     <Section
       title="Stages and tasks"
@@ -109,7 +111,11 @@ function Stages({ boat }: { boat: Boat }) {
       }
     >
       {boat.stages.length === 0 ? (
-        <Empty>She has no stages yet. Work can be logged on her without one.</Empty>
+        <Empty
+          action={boat.mayChange && <Key onClick={() => setMaking(true)}>Make her list from a template</Key>}
+        >
+          She has no stages yet. Work can be logged on her without one.
+        </Empty>
       ) : (
         <Planks>
           {boat.stages.map((stage) => (
@@ -118,6 +124,7 @@ function Stages({ boat }: { boat: Boat }) {
         </Planks>
       )}
       {isAdding && <StageSheet boat={boat} stage={null} onClose={() => setAdding(false)} />}
+      {isMaking && <WorkSheet boat={boat.row} onClose={() => setMaking(false)} />}
     </Section>
   );
 }

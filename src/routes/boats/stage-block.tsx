@@ -1,11 +1,10 @@
 import { useState } from 'react';
 import { Hours } from '#src/components/hours.tsx';
-import { Icon } from '#src/components/icons.tsx';
 import { Key } from '#src/components/key.tsx';
-import { useHold, useRead, useReplica } from '#src/replica/hooks.tsx';
-import { standingItems } from '#shared/sync/items.ts';
+import { FinishKey } from './finish-key.tsx';
 import type { BoatPage, StageOfBoat, TaskOfBoat } from './read-boat.ts';
 import { StageSheet } from './stage-sheet.tsx';
+import { TaskLine } from './task-line.tsx';
 import { TaskSheet } from './task-sheet.tsx';
 
 interface StageBlockProps {
@@ -15,42 +14,32 @@ interface StageBlockProps {
 
 type Open = { sheet: 'stage' } | { sheet: 'task'; task: TaskOfBoat | null } | null;
 
-/** A stage with its hours, whether it is finished, and its tasks. */
+/** A stage with its hours and its tasks; what is finished stands back. */
 export function StageBlock({ boat, stage }: StageBlockProps) {
   const [open, setOpen] = useState<Open>(null);
-  const { row, minutes, finished, after, tasks, doneTasks } = stage;
+  const { row, tasks, doneTasks, finished } = stage;
   const close = () => setOpen(null);
+  const openTask = boat.mayChange ? (task: TaskOfBoat) => setOpen({ sheet: 'task', task }) : null;
+  const list = <TaskList tasks={tasks} onOpen={openTask} />;
   return (
     <li className="bg-plank px-4 py-3 md:px-6">
-      <div className="flex items-baseline justify-between gap-4">
-        <h3 className="min-w-0 text-[20px] leading-snug font-bold break-words">{row.name}</h3>
-        <p className="text-[20px] font-bold">
-          <Hours minutes={minutes} />
-        </p>
-      </div>
-      <p className="leading-snug text-slate">
-        {[finished, tasks.length > 0 && `${doneTasks} of ${tasks.length} tasks done`, after]
-          .filter(Boolean)
-          .join(' · ')}
-      </p>
-      <ul className="mt-1">
-        {tasks.map((task) => (
-          <Task
-            key={task.row.id}
-            task={task}
-            onOpen={boat.mayChange ? () => setOpen({ sheet: 'task', task }) : null}
-          />
-        ))}
-      </ul>
-      {boat.mayChange && (
+      <StageHead stage={stage} onChange={boat.mayChange ? () => setOpen({ sheet: 'stage' }) : null} />
+      {finished && tasks.length > 0 ? (
+        <details>
+          <summary className="flex min-h-key w-fit cursor-pointer items-center gap-2 text-verdigris underline underline-offset-4">
+            {doneTasks} of {tasks.length} tasks done
+          </summary>
+          {list}
+        </details>
+      ) : (
+        list
+      )}
+      {boat.mayChange && !finished && (
         <div data-keys className="flex flex-wrap gap-3 pt-2 pb-1">
-          <FinishKey stage={stage} />
           <Key icon="plus" onClick={() => setOpen({ sheet: 'task', task: null })}>
             Add a task<span className="sr-only"> to {row.name}</span>
           </Key>
-          <Key onClick={() => setOpen({ sheet: 'stage' })}>
-            Change<span className="sr-only"> {row.name}</span>
-          </Key>
+          <FinishKey stage={stage} />
         </div>
       )}
       {open?.sheet === 'stage' && <StageSheet boat={boat} stage={stage} onClose={close} />}
@@ -61,71 +50,33 @@ export function StageBlock({ boat, stage }: StageBlockProps) {
   );
 }
 
-/** Marks the stage finished, or takes up again what was marked. */
-function FinishKey({ stage: { row, finished } }: { stage: StageOfBoat }) {
-  const replica = useReplica();
-  const { mutate: hold } = useHold();
-  const today = useRead(['today'], (view) => view.today);
-  const markIds = standingItems(row.marks).map((mark) => mark.id);
-  if (finished) {
-    return (
-      <Key icon="undo" onClick={() => hold({ kind: 'stage.unmark', data: { stageId: row.id, markIds } })}>
-        Take up again<span className="sr-only"> {row.name}</span>
-      </Key>
-    );
-  }
+function StageHead({ stage, onChange }: { stage: StageOfBoat; onChange: (() => void) | null }) {
+  const { row, minutes, finished, after, tasks, doneTasks } = stage;
+  const progress = !finished && tasks.length > 0 && `${doneTasks} of ${tasks.length} tasks done`;
   return (
-    <Key
-      icon="tick"
-      onClick={() =>
-        hold({ kind: 'stage.mark', data: { stageId: row.id, markId: replica.newId(), workDate: today } })
-      }
-    >
-      Finished<span className="sr-only">: {row.name}</span>
-    </Key>
+    <div className="flex items-center gap-4">
+      <div className="min-w-0 flex-1 break-words">
+        <h3 className="text-[20px] leading-snug font-bold">{row.name}</h3>
+        <p className="leading-snug text-slate">
+          {[finished, progress, !finished && after].filter(Boolean).join(' · ')}
+        </p>
+      </div>
+      <p className="text-[20px] font-bold">{minutes > 0 && <Hours minutes={minutes} />}</p>
+      {onChange && (
+        <Key onClick={onChange}>
+          Change<span className="sr-only"> {row.name}</span>
+        </Key>
+      )}
+    </div>
   );
 }
 
-function Task({ task: { row, words, assigned }, onOpen }: { task: TaskOfBoat; onOpen: (() => void) | null }) {
-  const notes = [words, assigned].filter((note) => note !== null);
-  const body = (
-    <>
-      <span
-        aria-hidden="true"
-        className="mt-[1px] flex size-[26px] shrink-0 items-center justify-center rounded-key border-2 border-bilge"
-      >
-        {row.done && <Icon name="tick" size={18} />}
-      </span>
-      <span className="min-w-0 break-words">
-        <span className="sr-only">{row.done ? 'Done: ' : 'To do: '}</span>
-        {row.title}
-        {row.estimateMinutes ? (
-          <span className="text-slate">
-            {' · est. '}
-            <Hours minutes={row.estimateMinutes} />
-          </span>
-        ) : null}
-        {notes.length > 0 && (
-          <span className="block text-[16px] leading-snug text-slate">{notes.join(' · ')}</span>
-        )}
-      </span>
-    </>
-  );
-  const look = 'flex w-full items-start gap-3 py-2 text-left leading-snug';
+function TaskList({ tasks, onOpen }: { tasks: TaskOfBoat[]; onOpen: ((task: TaskOfBoat) => void) | null }) {
   return (
-    <li className="border-t-2 border-line first:border-t-0">
-      {onOpen ? (
-        <button
-          type="button"
-          className={`${look} min-h-key hover:underline`}
-          onClick={onOpen}
-          aria-haspopup="dialog"
-        >
-          {body}
-        </button>
-      ) : (
-        <div className={look}>{body}</div>
-      )}
-    </li>
+    <ul className="mt-1">
+      {tasks.map((task) => (
+        <TaskLine key={task.row.id} task={task} onOpen={onOpen ? () => onOpen(task) : null} />
+      ))}
+    </ul>
   );
 }

@@ -7,6 +7,7 @@ import { Sheet } from '#src/components/sheet.tsx';
 import { TextField } from '#src/components/text-field.tsx';
 import { Why } from '#src/components/why.tsx';
 import { useHold, useReplica } from '#src/replica/hooks.tsx';
+import { FinishKey } from './finish-key.tsx';
 import type { BoatPage, StageOfBoat } from './read-boat.ts';
 
 interface StageSheetProps {
@@ -95,6 +96,7 @@ export function StageSheet({ boat, stage, onClose }: StageSheetProps) {
           ))}
         </fieldset>
       )}
+      {stage?.finished && <FinishKey stage={stage} />}
       {stage && (
         <Key kind="danger" onClick={() => setStriking(true)}>
           Strike this stage
