@@ -1,6 +1,4 @@
-import { useRouteError } from 'react-router-dom';
 import { Empty } from '#src/components/empty.tsx';
-import { ErrorPage } from '#src/components/error-page.tsx';
 import { KeyLink } from '#src/components/key.tsx';
 import { Page, Section } from '#src/components/page.tsx';
 
@@ -16,10 +14,4 @@ export default function LostPage() {
       </Section>
     </Page>
   );
-}
-
-/** A screen that broke. */
-export function BrokenScreen() {
-  const error = useRouteError();
-  return <ErrorPage error={error instanceof Error ? error : new Error(String(error))} />;
 }

@@ -1,5 +1,4 @@
-import { Navigate, Outlet, ScrollRestoration, useLocation } from 'react-router-dom';
-import { useEffect, useRef } from 'react';
+import { Navigate, Outlet } from 'react-router-dom';
 import { useMe } from '#src/replica/hooks.tsx';
 import { homeFor } from '#src/shell/places.ts';
 
@@ -15,27 +14,4 @@ export function SignedIn() {
 export function Home() {
   const me = useMe();
   return <Navigate to={me ? homeFor(me.roles) : '/sign-in'} replace />;
-}
-
-/** Around every screen: after a move the page's heading has the focus, and a screen gone back to stands where it stood. */
-export function Moves() {
-  const { pathname } = useLocation();
-  const isFirst = useRef(true);
-  useEffect(() => {
-    if (!isFirst.current && document.activeElement === document.body) focusHeading();
-    isFirst.current = false;
-  }, [pathname]);
-  return (
-    <>
-      <Outlet />
-      <ScrollRestoration />
-    </>
-  );
-}
-
-function focusHeading() {
-  const heading = document.querySelector('h1');
-  if (!heading) return;
-  heading.tabIndex = -1;
-  heading.focus({ preventScroll: true });
 }

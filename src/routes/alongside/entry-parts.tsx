@@ -6,20 +6,24 @@ import { capital } from '#src/words/who.ts';
 
 interface HoursByPersonProps {
   hours: HoursLine[];
-  /** Whose entry it is: alone in the hours, they are not named again. */
-  author?: string;
+  /** Whose entry it is: their figure stands first, under the name before it. */
+  author: string;
 }
 
-/** 'you 2 1/2 h, Orrin 4 h · extra work (proposed)'. */
+/** '2 1/2 h, Orrin 4 h · extra work (proposed)', the first of them the author's own. */
 export function HoursByPerson({ hours, author }: HoursByPersonProps) {
+  const ordered = [
+    ...hours.filter(({ who }) => who === author),
+    ...hours.filter(({ who }) => who !== author),
+  ];
   const kinds = [...new Set(hours.map(kindWords))];
   const isOneKind = kinds.length === 1;
   return (
     <>
-      {hours.map((line, index) => (
+      {ordered.map((line, index) => (
         <Fragment key={line.personId}>
           {index > 0 && ', '}
-          {(hours.length > 1 || line.who !== author) && `${line.who} `}
+          {line.who !== author && `${line.who} `}
           <Hours minutes={line.minutes} />
           {!isOneKind && kindWords(line) && ` ${kindWords(line)}`}
         </Fragment>
