@@ -33,7 +33,7 @@ function givenHours(hours: HoursGiven, facts: Facts): Hours[] {
 
 function writtenEntry(op: Op<EntryWrite>, facts: Facts): EntryRow {
   const { entryId, hours, stageId, ...fields } = op.data;
-  const written = {
+  return madeRow(entryId, op, facts, {
     ...fields,
     stageId: stageId ?? null,
     hours: givenHours(hours, facts),
@@ -43,9 +43,9 @@ function writtenEntry(op: Op<EntryWrite>, facts: Facts): EntryRow {
     writtenOn: facts.orderedOn,
     receivedAt: facts.receivedAt,
     receivedOn: facts.receivedOn,
+    writtenLater: facts.orderedOn > fields.workDate,
     heardLater: facts.receivedOn !== null && facts.receivedOn > facts.orderedOn,
-  };
-  return withLateness(madeRow(entryId, op, facts, { ...written, writtenLater: false }));
+  });
 }
 
 function withLateness(row: EntryRow): EntryRow {

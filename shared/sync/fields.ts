@@ -107,7 +107,13 @@ function stateField(row: Row, field: string, value: unknown, op: Op<unknown>, fa
     ...(said.saw ? { saw: said.saw } : {}),
     ...(settles ? { settles: true as const } : {}),
   };
-  row.statements = [...row.statements, ...(isFirst ? before : []), statement].sort(byLatest).reverse();
+  for (const one of isFirst ? [...before, statement] : [statement]) row.statements = withStatement(row.statements, one);
+}
+
+// kept oldest first: nearly always what is new comes last
+function withStatement(statements: Statement[], statement: Statement): Statement[] {
+  const place = statements.findLastIndex((earlier) => byLatest(earlier, statement) > 0) + 1;
+  return statements.toSpliced(place, 0, statement);
 }
 
 /** The row once `op` has said `values` about its fields; unchanged where it already did. */

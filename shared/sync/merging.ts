@@ -1,10 +1,10 @@
 import { reconsidered, setAsideRow } from '../set-aside/aside-row.ts';
 import { isAdmissible, isAdmitted, type SetAsideRow } from '../set-aside/set-aside.ts';
-import { differingStatements, saidFields } from './fields.ts';
+import { differingStatements } from './fields.ts';
 import { judge, reduceOp, understand, type Judgement, type Understood } from './judge.ts';
 import { readOp, type Reason } from './op.ts';
 import type { Received } from './receive.ts';
-import { refKey, type Ref, type Row } from './row.ts';
+import { refKey, type Ref, type Row, type Statement } from './row.ts';
 import type { Stamp } from './stamp.ts';
 import type { LoggedOp, RecordStore } from './store.ts';
 import { Workspace } from './workspace.ts';
@@ -138,9 +138,8 @@ export class Merging {
   private fixOutcome({ understood, logged }: Received): void {
     if (logged.outcome === 'set-aside' || !understood) return;
     const row = this.space.look(understood.changes) as Row;
-    const isLoose = saidFields(row).some((field) =>
-      differingStatements(row, field).some((statement) => statement.opId === logged.key),
-    );
+    const isItsOwn = (statement: Statement) => statement.opId === logged.key;
+    const isLoose = row.statements.filter(isItsOwn).some(({ field }) => differingStatements(row, field).some(isItsOwn));
     logged.outcome = isLoose ? 'loose-end' : 'kept';
   }
 }

@@ -1,5 +1,5 @@
 import { canonicalJson, isSameJson } from './canonical.ts';
-import { dayAt } from './day.ts';
+import { dayAt, type Day } from './day.ts';
 import { sha256Hex } from './ids.ts';
 import { understand, type Understood } from './judge.ts';
 import { readOp, type Op, type ReadOp, type Reason } from './op.ts';
@@ -21,11 +21,13 @@ export class Reception {
   private readonly known = new Map<string, Received>();
   private readonly store: RecordStore;
   private readonly from: BatchFrom;
+  private readonly receipt: { receivedAt: string; receivedOn: Day };
   lastOrderedAt: Stamp | null;
 
   constructor(store: RecordStore, from: BatchFrom) {
     this.store = store;
     this.from = from;
+    this.receipt = { receivedAt: new Date(from.nowMs).toISOString(), receivedOn: dayAt(from.nowMs, from.shop.timeZone) };
     this.lastOrderedAt = from.device.lastOrderedAt;
   }
 
@@ -80,12 +82,7 @@ export class Reception {
     const { device, nowMs, shop } = this.from;
     const orderedAt = orderAt(at, device.id, at && this.lastOrderedAt, nowMs);
     if (at) this.lastOrderedAt = orderedAt;
-    return {
-      orderedAt,
-      orderedOn: dayAt(stampMs(orderedAt), shop.timeZone),
-      receivedAt: new Date(nowMs).toISOString(),
-      receivedOn: dayAt(nowMs, shop.timeZone),
-    };
+    return { orderedAt, orderedOn: dayAt(stampMs(orderedAt), shop.timeZone), ...this.receipt };
   }
 
   // a revoked device's op waits for the foreman whatever it says, lest a newer server takes in what an older did not know
