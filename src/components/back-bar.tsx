@@ -10,12 +10,16 @@ interface BackBarProps {
   backWord: string;
   subTitle?: ReactNode;
   right?: ReactNode;
+  /** On the ground of the NameBar, for a page that belongs to what is named there. */
+  isCoaming?: boolean;
 }
 
 /** The bar of a page that was opened from another: the way back, and the page's heading. */
-export function BackBar({ title, to, backWord, subTitle, right }: BackBarProps) {
+export function BackBar({ title, to, backWord, subTitle, right, isCoaming = false }: BackBarProps) {
   return (
-    <div className="focus-deep flex min-h-[64px] items-center gap-1 bg-deep pt-[env(safe-area-inset-top)] pr-4 text-on-deep print:bg-transparent print:text-black">
+    <div
+      className={`focus-deep flex min-h-[64px] items-center gap-1 pt-[env(safe-area-inset-top)] pr-4 print:bg-transparent print:text-black ${isCoaming ? 'bg-coaming text-on-coaming' : 'bg-deep text-on-deep'}`}
+    >
       <Link
         data-bar
         to={to}

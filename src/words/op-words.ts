@@ -100,7 +100,7 @@ function rowTitle(view: View, data: Data): string {
 function hoursWords(view: View, hours: unknown): string {
   if (!Array.isArray(hours)) return '';
   return (hours as { personId: string; minutes: number }[])
-    .map(({ personId, minutes }) => `${whoWords(view, personId)} ${hoursText(minutes)} h`)
+    .map(({ personId, minutes }) => `${whoWords(view, personId)} ${hoursText(minutes)}\u00a0h`)
     .join(', ');
 }
 

@@ -3,6 +3,7 @@ import { BUNG_WORDS } from '#src/components/bung-mark.tsx';
 import { Plank } from '#src/components/plank.tsx';
 import { EndQuestion, HoursByPerson } from '#src/routes/alongside/entry-parts.tsx';
 import type { EntryLine } from '#src/routes/alongside/read-entry-line.ts';
+import { deviceWord } from '#src/shell/device-words.ts';
 import { capital } from '#src/words/who.ts';
 
 /** An entry on the ribband line; a tap anywhere on it opens its page. */
@@ -33,7 +34,7 @@ export function EntryPlank({ entry }: { entry: EntryLine }) {
         <EndQuestion key={end.id} end={end} />
       ))}
       {entry.struck && <p className="text-slate">{entry.struck}</p>}
-      {entry.isHeld && <p className="text-slate">Held on this device</p>}
+      {entry.isHeld && <p className="text-slate">Held on this {deviceWord()}</p>}
     </Plank>
   );
 }

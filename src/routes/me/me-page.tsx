@@ -7,6 +7,7 @@ import { readMe, storageWords } from '#src/routes/me/read-me.ts';
 import { SignOut } from '#src/routes/me/sign-out.tsx';
 import { deviceWord } from '#src/shell/device-words.ts';
 import { homeFor, placesFor } from '#src/shell/places.ts';
+import { RecordBar } from '#src/shell/record-bar.tsx';
 import { Warnings } from '#src/shell/warnings.tsx';
 
 /** One's own page: who one is, the other places, the colours, this device, the way out. */
@@ -20,6 +21,7 @@ export default function MePage() {
         <>
           <title>You · Ribband</title>
           <BackBar title={me.name} subTitle={me.roles} to={homeFor(me.roleList)} backWord="Back" />
+          <RecordBar />
         </>
       }
     >
@@ -31,7 +33,6 @@ export default function MePage() {
               {label}
             </KeyLink>
           ))}
-          <KeyLink to="/held">Held on this {device}</KeyLink>
         </nav>
       </Section>
       <Section title="How it looks">

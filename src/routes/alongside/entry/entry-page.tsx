@@ -26,6 +26,7 @@ export default function EntryPageScreen() {
         <>
           <title>Entry · Ribband</title>
           <BackBar
+            isCoaming
             title={page ? page.day : 'Entry'}
             subTitle={page?.where}
             to="/alongside"

@@ -3,6 +3,7 @@ import { BackBar } from '#src/components/back-bar.tsx';
 import { Key } from '#src/components/key.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { KeyRack, Page } from '#src/components/page.tsx';
+import { QuarterHours } from '#src/components/quarter-hours.tsx';
 import { TextBox } from '#src/components/text-box.tsx';
 import { Undo } from '#src/components/undo.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
@@ -10,7 +11,7 @@ import { BoatSheet } from '#src/routes/alongside/boat-sheet.tsx';
 import { AlongFields } from '#src/routes/alongside/log/along-fields.tsx';
 import { draftProblems, isWorthKeeping, tooLongWords } from '#src/routes/alongside/log/entry-draft.ts';
 import type { Logged } from '#src/routes/alongside/log/logged-undo.tsx';
-import { OwnHours } from '#src/routes/alongside/log/own-hours.tsx';
+import { KindField } from '#src/routes/alongside/log/kind-field.tsx';
 import { readLog } from '#src/routes/alongside/log/read-log.ts';
 import { TickFields } from '#src/routes/alongside/log/tick-fields.tsx';
 import { useEntryForm } from '#src/routes/alongside/log/use-entry-form.ts';
@@ -41,6 +42,7 @@ export function EntryForm({ where, onMove, onLogged }: EntryFormProps) {
         <>
           <title>Log it · Ribband</title>
           <BackBar
+            isCoaming
             title={shown.boatName}
             subTitle={shown.stageName}
             to="/alongside"
@@ -86,7 +88,11 @@ export function EntryForm({ where, onMove, onLogged }: EntryFormProps) {
           onChange={(text) => change({ text })}
           problem={problems.text}
         />
-        <OwnHours draft={draft} change={change} />
+        <QuarterHours
+          label="Your hours"
+          minutes={draft.minutes}
+          onChange={(minutes) => change({ minutes })}
+        />
         <DayChoice
           label="Which day was it?"
           today={shown.today}
@@ -96,6 +102,7 @@ export function EntryForm({ where, onMove, onLogged }: EntryFormProps) {
           words={(day) => dayWords(day, shown.today)}
         />
         <AlongFields draft={draft} change={change} people={shown.people} problem={problems.along} />
+        <KindField draft={draft} change={change} />
         <TickFields draft={draft} change={change} shown={shown} newId={form.newId} />
         {isWorthKeeping(draft) && (
           <Key kind="quiet" onClick={form.empty}>

@@ -40,7 +40,7 @@ function Tasks({ where }: { where: Where }) {
       bars={
         <>
           <title>Tick off · Ribband</title>
-          <BackBar title="Tick off" subTitle={place} to="/alongside" backWord="Back to Alongside" />
+          <BackBar isCoaming title="Tick off" subTitle={place} to="/alongside" backWord="Back to Alongside" />
           <RecordBar />
         </>
       }
