@@ -19,7 +19,7 @@ export function FinishKey({ stage: { row, finished } }: { stage: StageOfBoat }) 
   const data = () => ({ stageId: row.id, markId: replica.newId(), workDate: today });
   return (
     <Key icon="tick" onClick={() => hold({ kind: 'stage.mark', data: data() })}>
-      Stage finished<span className="sr-only">: {row.name}</span>
+      Stage finished<span className="sr-only"> {row.name}</span>
     </Key>
   );
 }

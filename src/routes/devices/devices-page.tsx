@@ -34,10 +34,10 @@ function Device({ line, onRevoke }: { line: DeviceLine; onRevoke: () => void }) 
   return (
     <li className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2 bg-plank px-4 py-3 md:px-6">
       <div className="min-w-[14em] flex-1 leading-snug break-words">
-        <h3 className="text-[20px] font-bold">
+        <h2 className="text-[20px] font-bold">
           {line.label}
           {line.isThis && <span className="font-normal text-slate"> (this one)</span>}
-        </h3>
+        </h2>
         <p>
           {line.people || 'nobody'} · {line.heard}
         </p>

@@ -51,10 +51,10 @@ function PersonList({ lines, isOffline, onOpen }: PersonListProps) {
       {lines.map(({ row, words, left, isMe }) => (
         <li key={row.id} className="flex items-center justify-between gap-4 bg-plank px-4 py-3 md:px-6">
           <div className="min-w-0 break-words">
-            <h3 className="text-[20px] leading-snug font-bold">
+            <h2 className="text-[20px] leading-snug font-bold">
               {row.name}
               {isMe && <span className="font-normal text-slate"> (you)</span>}
-            </h3>
+            </h2>
             <p className="leading-snug">
               {words}
               {left && ` · ${left}`}
