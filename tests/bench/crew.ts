@@ -32,12 +32,15 @@ export async function makeCrew(server: TestServer, roles: Role[]): Promise<Crew>
   return { server, shop, foreman, yard, hands };
 }
 
-/** Ops that each write an entry with two people's hours. */
-export function entryOps(hand: Sender, { yard, shop }: Crew, count: number) {
+/** An entry with two people's hours, but for its id. */
+export function entryData(hand: Sender, { yard, shop }: Crew) {
   const { boatId, stageId } = yard;
   const hours = [hand.personId, shop.people.foreman.id].map((personId) => ({ personId, minutes: 150, kind: 'agreed' }));
-  const write = { boatId, stageId, workDate: '2026-06-01', text: WORDS, spoken: false, hours };
-  return Array.from({ length: count }, () => hand.op('entry.write', { entryId: v7(), ...write }));
+  return { boatId, stageId, workDate: '2026-06-01', text: WORDS, spoken: false, hours };
+}
+
+export function entryOps(hand: Sender, crew: Crew, count: number) {
+  return Array.from({ length: count }, () => hand.op('entry.write', { entryId: v7(), ...entryData(hand, crew) }));
 }
 
 /** The body of a sync as a phone sends it, with what it holds, made just now. */

@@ -3,6 +3,7 @@ import pg from 'pg';
 import { CLUSTER_URL } from '#tests/worlds/postgres.ts';
 import { DEVICES } from './crew.ts';
 import { benchAmend, type AmendFinding } from './amend-bench.ts';
+import { benchHold } from './hold-bench.ts';
 import type { Finding } from './measuring.ts';
 import { benchMerge, type MergeFindings } from './merge-bench.ts';
 import { findingsTable, table } from './print.ts';
@@ -19,6 +20,7 @@ const findings: Finding[] = [];
 const merge = isWanted('merge') ? await benchMerge() : null;
 findings.push(...(merge?.findings ?? []));
 if (isWanted('pull')) findings.push(await benchPull());
+if (isWanted('hold')) findings.push(await benchHold());
 const amend = isWanted('amend') ? await benchAmend() : null;
 hangUp();
 
