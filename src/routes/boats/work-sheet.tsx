@@ -26,13 +26,16 @@ export function WorkSheet({ boat, onClose }: { boat: BoatRow; onClose: () => voi
       onClose={() => (isPending ? undefined : onClose())}
       title={`${boat.name}: list of work`}
       foot={
-        <Key
-          kind="main"
-          disabled={isPending || !template || !plan}
-          onClick={() => template && plan && make(template, plan, onClose)}
-        >
-          {isBegun ? `${isPending ? '' : 'Go on: '}${kept} of ${of} kept` : 'Make the list'}
-        </Key>
+        <>
+          {template && plan && <Outlook template={template} plan={plan} />}
+          <Key
+            kind="main"
+            disabled={isPending || !template || !plan}
+            onClick={() => template && plan && make(template, plan, onClose)}
+          >
+            {isBegun ? `${isPending ? '' : 'Go on: '}${kept} of ${of} kept` : 'Make the list'}
+          </Key>
+        </>
       }
     >
       {loadError && (
@@ -56,19 +59,17 @@ export function WorkSheet({ boat, onClose }: { boat: BoatRow; onClose: () => voi
           hasLength={Boolean(boat.lengthMm)}
         />
       )}
-      {template && plan && <Outlook template={template} plan={plan} />}
+      {template && <p className="text-slate">{template.note}</p>}
     </Sheet>
   );
 }
 
+/** What the list comes to, in sight until it is made. */
 function Outlook({ template, plan }: { template: Template; plan: WorkPlan }) {
   const { stages, tasks, minutes } = readOutlook(template, plan);
   return (
-    <div>
-      <p className="font-semibold">
-        {counted(stages, 'stage')}, {counted(tasks, 'task')}, <Hours minutes={minutes} /> estimated
-      </p>
-      <p className="text-slate">{template.note}</p>
-    </div>
+    <p className="font-semibold">
+      {counted(stages, 'stage')}, {counted(tasks, 'task')}, <Hours minutes={minutes} /> estimated
+    </p>
   );
 }
