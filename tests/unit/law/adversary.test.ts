@@ -38,6 +38,14 @@ describe('over', () => {
     expect(entry()).toMatchObject({ text: 'two ribs', heads: { text: [op.id] } });
   });
 
+  it('that names its own op does not give way to a rival', async () => {
+    const first = changes('two ribs');
+    const rival = changes('three ribs', { ...first.over });
+    first.over.text = [...first.over.text!, first.id];
+    await sent([first, rival]);
+    expect(entry().heads.text).toEqual([rival.id, first.id]);
+  });
+
   it('that goes in a circle leaves the latest standing, whichever comes first', async () => {
     const [first, second] = [changes('two ribs'), changes('three ribs')];
     first.over.text!.push(second.id);

@@ -209,6 +209,26 @@ describe('what is set aside is admitted or dismissed by the foreman', () => {
     expect(shop.row('entry', entryId).text).toBe('three ribs');
   });
 
+  it('and though what it admits must wait for its own row first', async () => {
+    const laterId = shop.newId();
+    const op = idas.does('boat.amend', { boatId: laterId, set: { lengthMm: 7_900 } });
+    desk.does('setAside.admit', { setAsideId: op.id });
+    await desk.sends();
+    expect(await idas.sends()).toMatchObject([{ reason: 'no-such-row' }]);
+    await desk.says('boat.add', { boatId: laterId, name: 'Kittiwake' });
+    expect(aside(op.id)).toMatchObject({ state: 'admitted', reason: 'not-entitled' });
+    expect(shop.row('boat', laterId).lengthMm).toBe(7_900);
+  });
+
+  it('an admission cannot be admitted past what may be admitted', async () => {
+    const op = rosas.does('entry.write', writing({ entryId }));
+    await rosas.sends();
+    const admit = idas.does('setAside.admit', { setAsideId: op.id });
+    await idas.sends();
+    await admits(admit.id);
+    expect(aside(op.id)).toMatchObject({ reason: 'id-reused', state: 'waiting', decisions: [] });
+  });
+
   it.each<Role>(['crew', 'office', 'owner'])('nobody else decides: %s', async (role) => {
     const op = await idaRewords();
     const phone = shop.phone(shop.person('Somebody', role));
