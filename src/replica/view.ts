@@ -150,11 +150,15 @@ class KnownView implements View {
   private lay(changed: Map<string, { ref: Ref; row: Row }>): void {
     const mine = this.groups.get('person')?.get(this.me.personId) as RowOf['person'] | undefined;
     const viewer: Viewer = { personId: this.me.personId, roles: this.me.roles, boatIds: new Set(mine?.boatIds) };
+    const laid = new Map<string, Map<string, object>>();
     for (const { ref, row } of changed.values()) {
       const visible = seen(ref.entity, row, viewer);
       if (!visible) continue;
-      this.groups.set(ref.entity, new Map(this.groups.get(ref.entity)).set(ref.id, visible));
+      // copied once, not once a held op: a group may hold thousands
+      const group = laid.get(ref.entity) ?? new Map(this.groups.get(ref.entity));
+      laid.set(ref.entity, group.set(ref.id, visible));
     }
+    for (const [entity, group] of laid) this.groups.set(entity, group);
   }
 
   private looseEnds(): LooseEnd[] {
