@@ -18,7 +18,7 @@ interface BackBarProps {
 export function BackBar({ title, to, backWord, subTitle, right, isCoaming = false }: BackBarProps) {
   return (
     <div
-      className={`focus-deep flex min-h-[64px] items-center gap-1 pt-[env(safe-area-inset-top)] pr-4 print:bg-transparent print:text-black ${isCoaming ? 'bg-coaming text-on-coaming' : 'bg-deep text-on-deep'}`}
+      className={`focus-deep flex min-h-[64px] items-center gap-1 pt-[env(safe-area-inset-top)] pr-4 md:pr-[var(--bar-inset,24px)] md:pl-[calc(var(--bar-inset,60px)-60px)] print:bg-transparent print:text-black ${isCoaming ? 'bg-coaming text-on-coaming' : 'bg-deep text-on-deep'}`}
     >
       <Link
         data-bar

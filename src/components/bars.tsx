@@ -16,7 +16,7 @@ interface NameBarProps {
 /** The boat's name bar, a varnished coaming; its title is the page's heading. */
 export function NameBar({ title, subTitle, right, onPress, pressWords }: NameBarProps) {
   return (
-    <div className="focus-deep flex min-h-[76px] items-center gap-3 bg-coaming px-4 pt-[calc(8px+env(safe-area-inset-top))] pb-3 text-on-coaming md:px-6 print:bg-transparent print:px-0 print:text-black">
+    <div className="focus-deep flex min-h-[76px] items-center gap-3 bg-coaming px-4 pt-[calc(8px+env(safe-area-inset-top))] pb-3 text-on-coaming md:px-[var(--bar-inset,24px)] print:bg-transparent print:px-0 print:text-black">
       <div className="relative min-w-0 flex-1">
         <h1 className="text-[27px] leading-[1.1] font-bold tracking-[-0.01em] break-words md:text-[32px]">
           {onPress ? (
@@ -70,7 +70,7 @@ const TONES: Record<BarTone, string> = {
 
 /** The state of the record in words, always in sight. */
 export function StateBar({ tone, left, right, to }: StateBarProps) {
-  const look = `flex min-h-key items-center justify-between gap-4 border-b-[3px] px-4 py-1 text-[18px] leading-tight md:px-6 ${TONES[tone]}`;
+  const look = `flex min-h-key items-center justify-between gap-4 border-b-[3px] px-4 py-1 text-[18px] leading-tight md:px-[var(--bar-inset,24px)] ${TONES[tone]}`;
   const words = (
     <>
       <span className="flex items-center gap-2 font-bold">

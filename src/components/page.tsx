@@ -14,7 +14,10 @@ interface PageProps {
 export function Page({ bars, foot, width = 'line', children }: PageProps) {
   return (
     <div className="flex min-h-dvh flex-col bg-primer text-bilge">
-      {bars !== undefined && <header>{bars}</header>}
+      {bars !== undefined && (
+        // what a bar says begins where the page's column does
+        <header className={width === 'line' ? '[--bar-inset:max(24px,calc(50vw-386px))]' : ''}>{bars}</header>
+      )}
       <main className={`mx-auto w-full flex-1 ${width === 'wide' ? 'max-w-[1440px]' : 'max-w-[820px]'}`}>
         {children}
       </main>

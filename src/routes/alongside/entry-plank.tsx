@@ -13,7 +13,7 @@ export function EntryPlank({ entry }: { entry: EntryLine }) {
     <Plank mark={entry.mark} markWord={markWord(entry)} time={entry.time} id={`entry-${entry.id}`}>
       <Link
         to={`/entry/${entry.id}`}
-        className={`line-clamp-6 whitespace-pre-line after:absolute after:inset-0 focus-visible:outline-none focus-visible:after:outline-3 focus-visible:after:outline-offset-[-5px] focus-visible:after:outline-bilge ${entry.struck ? 'text-slate line-through' : ''}`}
+        className={`whitespace-pre-line after:absolute after:inset-0 focus-visible:outline-none focus-visible:after:outline-3 focus-visible:after:outline-offset-[-5px] focus-visible:after:outline-bilge ${entry.struck ? 'line-clamp-2 text-slate line-through' : 'line-clamp-6'}`}
       >
         {entry.words.trim() || 'Hours alone'}
       </Link>

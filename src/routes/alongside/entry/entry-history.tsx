@@ -12,9 +12,10 @@ export function EntryHistory({ history }: { history: HistoryLine[] }) {
       <Ribband label="History of this entry, the newest first">
         <Planks>
           {history.map((line) => (
-            <Plank key={line.key} mark={line.mark}>
+            <Plank key={line.key} mark={line.mark} time={line.time}>
               <p className="text-slate">
-                {line.when} · <span className="font-semibold">{capital(line.who)}</span> {line.did}
+                <span className="font-semibold">{capital(line.who)}</span> {line.did}
+                {line.when && ` · ${line.when}`}
               </p>
               {line.before.map((value, index) => (
                 <p key={index} className="whitespace-pre-line text-slate line-through">

@@ -3,7 +3,7 @@ import { useParams } from 'react-router-dom';
 import { BackBar } from '#src/components/back-bar.tsx';
 import { BUNG_WORDS, BungMark } from '#src/components/bung-mark.tsx';
 import { Empty } from '#src/components/empty.tsx';
-import { Page, Section } from '#src/components/page.tsx';
+import { Page } from '#src/components/page.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
 import { HoursByPerson } from '#src/routes/alongside/entry-parts.tsx';
 import { Additions } from '#src/routes/alongside/entry/additions.tsx';
@@ -72,9 +72,10 @@ function Body({ page }: { page: EntryPage }) {
       {line.struck && <p className="font-semibold">{line.struck}</p>}
       <Additions entryId={line.id} additions={line.additions} />
       {line.ends.length > 0 && (
-        <Section title="Loose ends" level={3}>
+        <div className="grid gap-4 pt-3">
+          <h2 className="text-[20px] leading-tight font-bold">Loose ends</h2>
           <LooseEnds page={page} />
-        </Section>
+        </div>
       )}
     </div>
   );

@@ -1,18 +1,22 @@
 import type { EntryRow } from '#shared/entry/entry.ts';
+import { dayAt } from '#shared/sync/day.ts';
 import { liveStatements, saidFields, statementsOf, STRUCK_FIELD } from '#shared/sync/fields.ts';
 import type { Statement } from '#shared/sync/row.ts';
 import { stampTime } from '#shared/sync/stamp.ts';
 import type { Bung } from '#src/components/bung-mark.tsx';
 import type { View } from '#src/replica/view.ts';
 import { fieldWords, readValue, type SaidValue } from '#src/routes/alongside/read-value.ts';
-import { momentWords } from '#src/words/day-words.ts';
+import { dayWords, timeWords, weekdayWords } from '#src/words/day-words.ts';
 import { whoWords } from '#src/words/who.ts';
 
 /** One thing that somebody said about an entry. */
 export interface HistoryLine {
   key: string;
   at: string;
-  when: string;
+  /** '14:05' of today, or the weekday */
+  time: string;
+  /** the whole of the moment where it was not today */
+  when: string | null;
   who: string;
   mark: Bung;
   /** 'wrote it', 'changed the words' */
@@ -37,11 +41,18 @@ export function readHistory(view: View, row: EntryRow): HistoryLine[] {
     .map((line) =>
       line.mark === 'sent' && heldOps.has(line.opId) ? { ...line, mark: 'held' as const } : line,
     )
-    .map(({ opId: _opId, ...line }) => ({ ...line, when: momentWords(line.at, view.timeZone, view.today) }))
+    .map(({ opId: _opId, ...line }) => ({ ...line, ...moment(view, line.at) }))
     .sort((a, b) => (a.at < b.at ? 1 : a.at > b.at ? -1 : 0));
 }
 
-type Draft = Omit<HistoryLine, 'when'> & { opId: string };
+type Draft = Omit<HistoryLine, 'time' | 'when'> & { opId: string };
+
+function moment(view: View, at: string): Pick<HistoryLine, 'time' | 'when'> {
+  const day = dayAt(Date.parse(at), view.timeZone);
+  const time = timeWords(at, view.timeZone);
+  if (day === view.today) return { time, when: null };
+  return { time: weekdayWords(day), when: `${dayWords(day, view.today)} ${time}` };
+}
 
 function madeLine(view: View, row: EntryRow): Draft {
   return {

@@ -14,7 +14,7 @@ import type { Logged } from '#src/routes/alongside/log/logged-undo.tsx';
 import { KindField } from '#src/routes/alongside/log/kind-field.tsx';
 import { readLog } from '#src/routes/alongside/log/read-log.ts';
 import { TickFields } from '#src/routes/alongside/log/tick-fields.tsx';
-import { useEntryForm } from '#src/routes/alongside/log/use-entry-form.ts';
+import { useEntryForm, type LogFor } from '#src/routes/alongside/log/use-entry-form.ts';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 import { DayChoice } from '#src/components/day-choice.tsx';
 import { dayWords, momentWords } from '#src/words/day-words.ts';
@@ -22,13 +22,15 @@ import { dayWords, momentWords } from '#src/words/day-words.ts';
 interface EntryFormProps {
   /** where the work was, unless a draft says otherwise */
   where: Where;
+  /** whose day it is, where the form was opened for somebody else */
+  logFor: LogFor | null;
   onMove: (where: Where) => void;
   onLogged: (logged: Logged) => void;
 }
 
 /** What was done, in how long, with whom: kept on the device at every keystroke until it is logged. */
-export function EntryForm({ where, onMove, onLogged }: EntryFormProps) {
-  const form = useEntryForm(where, onLogged);
+export function EntryForm({ where, logFor, onMove, onLogged }: EntryFormProps) {
+  const form = useEntryForm(where, logFor, onLogged);
   const { draft, change } = form;
   const here = { boatId: draft.boatId, stageId: draft.stageId };
   const shown = useRead(['log', here], (view) => readLog(view, here));
@@ -45,8 +47,8 @@ export function EntryForm({ where, onMove, onLogged }: EntryFormProps) {
             isCoaming
             title={shown.boatName}
             subTitle={shown.stageName}
-            to="/alongside"
-            backWord="Back to Alongside; your words are kept"
+            to={logFor ? `/day/${logFor.day}` : '/alongside'}
+            backWord={`Back to ${logFor ? 'the day sheet' : 'Alongside'}; your words are kept`}
             right={
               <Key kind="onDeep" onClick={() => setMoving(true)}>
                 Other boat

@@ -1,15 +1,18 @@
 import { useState } from 'react';
-import { useNavigate } from 'react-router-dom';
+import { useNavigate, useSearchParams } from 'react-router-dom';
+import { daySchema } from '#shared/sync/day.ts';
 import { BackBar } from '#src/components/back-bar.tsx';
 import { Empty } from '#src/components/empty.tsx';
 import { Page } from '#src/components/page.tsx';
 import { EntryForm } from '#src/routes/alongside/log/entry-form.tsx';
+import type { LogFor } from '#src/routes/alongside/log/use-entry-form.ts';
 import { useWhere } from '#src/routes/alongside/use-where.ts';
 
-/** The form for a new entry. */
+/** The form for a new entry; `?for=<person>&day=<day>` opens it for somebody who has not logged that day. */
 export default function LogPage() {
   const [where, choose] = useWhere();
   const navigate = useNavigate();
+  const logFor = readLogFor(useSearchParams()[0]);
   // the form keeps the place that it was opened at, or that its draft has, whatever is remembered meanwhile
   const [openedAt] = useState(where);
   if (!openedAt) {
@@ -21,9 +24,16 @@ export default function LogPage() {
   }
   return (
     <EntryForm
+      key={logFor ? `${logFor.personId} ${logFor.day}` : ''}
       where={openedAt}
+      logFor={logFor}
       onMove={choose}
-      onLogged={(logged) => void navigate('/alongside', { state: logged })}
+      onLogged={(logged) => void navigate(logFor ? `/day/${logFor.day}` : '/alongside', { state: logged })}
     />
   );
+}
+
+function readLogFor(search: URLSearchParams): LogFor | null {
+  const [personId, day] = [search.get('for'), daySchema.safeParse(search.get('day'))];
+  return personId && day.success ? { personId, day: day.data } : null;
 }

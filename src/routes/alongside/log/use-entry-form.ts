@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import { useMutation } from '@tanstack/react-query';
+import type { Day } from '#shared/sync/day.ts';
 import { useReplica } from '#src/replica/hooks.tsx';
 import type { Replica } from '#src/replica/replica.ts';
 import {
@@ -15,10 +16,18 @@ import type { Logged } from '#src/routes/alongside/log/logged-undo.tsx';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 import { useDraft } from '#src/routes/alongside/use-draft.ts';
 
+/** Somebody else's day that an entry is to be about. */
+export interface LogFor {
+  personId: string;
+  day: Day;
+}
+
 /** The form's draft and what can be done with it. */
-export function useEntryForm(where: Where, onLogged: (logged: Logged) => void) {
+export function useEntryForm(where: Where, logFor: LogFor | null, onLogged: (logged: Logged) => void) {
   const replica = useReplica();
-  const { draft, change, clear, isUnkept } = useDraft(DRAFT_KEY, (kept) => openDraft(replica, where, kept));
+  const { draft, change, clear, isUnkept } = useDraft(draftKey(logFor), (kept) =>
+    openDraft(replica, where, logFor, kept),
+  );
   const [restoredAt, setRestoredAt] = useState(draft.keptAt);
   const [emptied, setEmptied] = useState<EntryDraft | null>(null);
   const [isAsked, setAsked] = useState(false);
@@ -67,10 +76,20 @@ export function useEntryForm(where: Where, onLogged: (logged: Logged) => void) {
   };
 }
 
+// a draft of one's own is not taken for somebody else's day, nor theirs for one's own
+function draftKey(logFor: LogFor | null): string {
+  return logFor ? `${DRAFT_KEY}/${logFor.personId}/${logFor.day}` : DRAFT_KEY;
+}
+
+function freshDraft(replica: Replica, where: Where, logFor: LogFor | null): EntryDraft {
+  const draft = emptyDraft(where, logFor?.day ?? replica.view().today, replica.newId());
+  return logFor ? { ...draft, along: [{ personId: logFor.personId, minutes: null }] } : draft;
+}
+
 /** The draft as it was left; a new one where nothing is on it, or where its entry is already in the record. */
-function openDraft(replica: Replica, where: Where, kept: unknown): EntryDraft {
+function openDraft(replica: Replica, where: Where, logFor: LogFor | null, kept: unknown): EntryDraft {
   const view = replica.view();
-  const fresh = emptyDraft(where, view.today, replica.newId());
+  const fresh = freshDraft(replica, where, logFor);
   const draft = readDraft(kept);
   if (!draft || !isWorthKeeping(draft) || !view.find('boat', draft.boatId)) return fresh;
   // cut off between the entry and its ticks: the ticks are still to be made
