@@ -142,6 +142,17 @@ describe('the day sheet in a browser', () => {
       .toBe('yard');
   });
 
+  test('logs for somebody who has not, and comes back to the day', async () => {
+    await page.goto('/day');
+    await page.getByRole('link', { name: 'Log for Lenny' }).click();
+    await page.getByLabel('What did you do?').fill('Lenny held the staging, I saw him');
+    await page.getByRole('group', { name: "Lenny's hours" }).getByRole('textbox').fill('2 1/2');
+    await page.getByRole('button', { name: 'Log it' }).click();
+    const lenny = page.getByRole('listitem').filter({ has: page.getByRole('heading', { name: 'Lenny' }) });
+    await lenny.getByText('Lenny held the staging, I saw him').waitFor();
+    await lenny.getByText('by you').waitFor();
+  });
+
   test('goes from day to day by the arrow keys', async () => {
     await page.goto('/day/2026-03-04');
     await page.getByRole('heading', { name: /^Wednesday 4 March/ }).waitFor();

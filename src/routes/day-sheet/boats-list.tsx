@@ -12,6 +12,7 @@ export function BoatsList({ boats }: { boats: BoatOnSheet[] }) {
   if (boats.length === 0) return <Empty>Nothing about any boat yet.</Empty>;
   return (
     <section aria-label="By boat">
+      <p className="hidden px-4 pt-4 pb-1 text-[20px] font-bold print:block">By boat</p>
       <ul className="grid grid-cols-[minmax(0,1fr)] gap-seam bg-line py-seam">
         {boats.map((boat) => (
           <BoatBlock key={boat.boatId} boat={boat} />

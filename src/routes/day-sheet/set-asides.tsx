@@ -30,7 +30,7 @@ export function SetAsides({ lines }: { lines: SetAsideOnSheet[] }) {
       <Why
         isOpen={asked !== null}
         onClose={() => setAsked(null)}
-        title={isAdmit ? 'Let it count' : 'Dismiss it'}
+        title={`${isAdmit ? 'Let it count' : 'Dismiss it'}: ${asked?.line.what ?? ''}`}
         question={isAdmit ? 'Why does it count?' : 'Why does it not count?'}
         confirm={isAdmit ? 'Admit it' : 'Dismiss it'}
         onConfirm={(why) => {
@@ -55,7 +55,7 @@ function SetAside({ line, onAsk }: { line: SetAsideOnSheet; onAsk: (choice: Aske
         </p>
         <p className="pt-1">{line.reason}</p>
       </div>
-      <details className="text-[16px]">
+      <details className="text-[16px] print:hidden">
         <summary className="w-fit cursor-pointer py-1 text-verdigris underline">As it came</summary>
         <pre className="max-h-[16em] overflow-auto border-2 border-line p-2 text-[14px] whitespace-pre-wrap">
           {line.raw}
