@@ -20,14 +20,16 @@ export interface SetAsideOnSheet {
   raw: string;
 }
 
-const REASONS: Record<Reason, (who: string) => string> = {
+/** `decider` is 'you', or who else can let it count. */
+const REASONS: Record<Reason, (who: string, decider: string) => string> = {
   malformed: () => 'It could not be read.',
   'not-understood': () =>
     'This server does not know such a thing yet. It is judged again when a newer one is here.',
   'id-reused': () => 'Something else had come under the same mark before.',
-  'not-entitled': (who) => `${capital(who)} may not do this; you can let it count.`,
+  'not-entitled': (who, decider) => `${capital(who)} may not do this; ${decider} can let it count.`,
   'no-such-row': () => 'What it is about has not come yet. It counts by itself as soon as it has.',
-  'device-revoked': () => 'It came from a device that had been shut out; you can let it count.',
+  'device-revoked': (_who, decider) =>
+    `It came from a device that had been shut out; ${decider} can let it count.`,
   'server-fault': () => 'The server made a mistake with it. It is judged again when a newer one is here.',
 };
 
@@ -49,7 +51,7 @@ export function readSetAsides(view: View): SetAsideOnSheet[] {
         where,
         who: whoWords(view, row.authorId),
         when: momentWords(madeAt(row), view.timeZone, view.today),
-        reason: REASONS[row.reason](whoWords(view, row.authorId)),
+        reason: REASONS[row.reason](whoWords(view, row.authorId), isForeman ? 'you' : 'the foreman'),
         mayAdmit: isForeman && isAdmissible(row),
         mayDismiss: isForeman,
         raw: JSON.stringify(row.op, null, 1).slice(0, RAW_LENGTH_MAX),

@@ -33,7 +33,7 @@ function Device({ line, onRevoke }: { line: DeviceLine; onRevoke: () => void }) 
   const isForeman = useMe()?.roles.includes('foreman') ?? false;
   return (
     <li className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2 bg-plank px-4 py-3 md:px-6">
-      <div className="min-w-[14em] flex-1 leading-snug break-words">
+      <div className="min-w-[11em] flex-1 leading-snug break-words">
         <h2 className="text-[20px] font-bold">
           {line.label}
           {line.isThis && <span className="font-normal text-slate"> (this one)</span>}
