@@ -24,7 +24,13 @@ function decideKind(choice: Decision['choice']): OpKind<Decide, SetAsideRow> {
     mayMake: isForeman,
     reduce: (row, op, facts) => {
       if (row.decisions.some((decision) => decision.opId === op.id)) return row;
-      const decision: Decision = { choice, by: op.personId, at: madeAt(facts), opId: op.id, why: op.data.why || null };
+      const decision: Decision = {
+        choice,
+        by: op.personId,
+        at: madeAt(facts),
+        opId: op.id,
+        why: op.data.why || null,
+      };
       return withState({ ...row, decisions: [...row.decisions, decision].sort(byTime) });
     },
   };

@@ -3,7 +3,10 @@ import { idSchema } from '../sync/ids.ts';
 import type { Reason } from '../sync/op.ts';
 import type { Ref, Row } from '../sync/row.ts';
 
-export const decideSchema = z.strictObject({ setAsideId: idSchema, why: z.string().trim().max(2000).optional() });
+export const decideSchema = z.strictObject({
+  setAsideId: idSchema,
+  why: z.string().trim().max(2000).optional(),
+});
 
 export interface Decision {
   choice: 'admit' | 'dismiss';

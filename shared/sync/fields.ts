@@ -21,7 +21,8 @@ function madeValue(row: Row, field: string): unknown {
 
 function writeField(row: Row, field: string, standing: Statement): void {
   if (field === STRUCK_FIELD) row.struck = standing.value as Struck | null;
-  else if (field.startsWith(HOURS_PREFIX)) writeHours(row, field.slice(HOURS_PREFIX.length), standing, statementsOf(row, field));
+  else if (field.startsWith(HOURS_PREFIX))
+    writeHours(row, field.slice(HOURS_PREFIX.length), standing, statementsOf(row, field));
   else if (field === STAGE_FIELD) Object.assign(row, standing.value);
   else (row as unknown as Fields)[field] = standing.value;
 }
@@ -29,8 +30,19 @@ function writeField(row: Row, field: string, standing: Statement): void {
 function madeStatement(row: Row, field: string): Statement[] {
   const value = madeValue(row, field);
   if (value === undefined) return [];
-  const made: Statement = { field, value, opId: row.madeBy, personId: row.makerId, at: row.stamps[row.madeBy]!, over: [] };
-  return [field.startsWith(HOURS_PREFIX) && isKindSet(row, field.slice(HOURS_PREFIX.length)) ? { ...made, settles: true } : made];
+  const made: Statement = {
+    field,
+    value,
+    opId: row.madeBy,
+    personId: row.makerId,
+    at: row.stamps[row.madeBy]!,
+    over: [],
+  };
+  return [
+    field.startsWith(HOURS_PREFIX) && isKindSet(row, field.slice(HOURS_PREFIX.length))
+      ? { ...made, settles: true }
+      : made,
+  ];
 }
 
 /** All that was said about a field, the making op's value first. */
@@ -91,11 +103,19 @@ function headsAndStamps(row: Row): Pick<Row, 'heads' | 'stamps'> {
 
 type Said = Pick<Statement, 'why' | 'saw'>;
 
-function stateField(row: Row, field: string, value: unknown, op: Op<unknown>, facts: Facts, said: Said): void {
+function stateField(
+  row: Row,
+  field: string,
+  value: unknown,
+  op: Op<unknown>,
+  facts: Facts,
+  said: Said,
+): void {
   const before = statementsOf(row, field);
   if (before.some((statement) => statement.opId === op.id)) return;
   const isFirst = !row.statements.some((statement) => statement.field === field);
-  const settles = field.startsWith(HOURS_PREFIX) && (facts.roles.includes('foreman') || facts.roles.includes('office'));
+  const settles =
+    field.startsWith(HOURS_PREFIX) && (facts.roles.includes('foreman') || facts.roles.includes('office'));
   const statement: Statement = {
     field,
     value,
@@ -107,7 +127,8 @@ function stateField(row: Row, field: string, value: unknown, op: Op<unknown>, fa
     ...(said.saw ? { saw: said.saw } : {}),
     ...(settles ? { settles: true as const } : {}),
   };
-  for (const one of isFirst ? [...before, statement] : [statement]) row.statements = withStatement(row.statements, one);
+  for (const one of isFirst ? [...before, statement] : [statement])
+    row.statements = withStatement(row.statements, one);
 }
 
 // kept oldest first: nearly always what is new comes last
@@ -117,7 +138,13 @@ function withStatement(statements: Statement[], statement: Statement): Statement
 }
 
 /** The row once `op` has said `values` about its fields; unchanged where it already did. */
-export function stateFields<R extends Row>(row: R, values: Fields, op: Op<unknown>, facts: Facts, said: Said = {}): R {
+export function stateFields<R extends Row>(
+  row: R,
+  values: Fields,
+  op: Op<unknown>,
+  facts: Facts,
+  said: Said = {},
+): R {
   const next = { ...row };
   for (const [field, value] of Object.entries(values)) {
     stateField(next, field, value, op, facts, said);

@@ -31,7 +31,12 @@ export function understand(op: Op): Understood | Reason {
 export type Judgement = { reason: null } | { reason: Reason; awaits?: Ref };
 
 /** Whether an op may count on the rows as they stand. `isAdmitted` passes over who made it. */
-export function judge({ kind, op, changes, names }: Understood, author: Author, look: RowLookup, isAdmitted = false): Judgement {
+export function judge(
+  { kind, op, changes, names }: Understood,
+  author: Author,
+  look: RowLookup,
+  isAdmitted = false,
+): Judgement {
   const row = look(changes) as Row | undefined;
   const missing = [...(kind.makes ? [] : [changes]), ...names].find((ref) => !look(ref));
   if (missing) {

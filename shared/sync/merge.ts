@@ -49,7 +49,11 @@ export async function applyLogged(store: RecordStore, shopId: string, ops: Logge
   const received = ops.map((logged) => {
     const understood = understandLogged(logged);
     const reason = logged.reason === 'no-such-row' ? null : logged.reason;
-    return { logged: { ...logged, reason }, isRepeat: false, understood: typeof understood === 'string' ? null : understood };
+    return {
+      logged: { ...logged, reason },
+      isRepeat: false,
+      understood: typeof understood === 'string' ? null : understood,
+    };
   });
   const merging = new Merging(store, shopId, { verdictsHeld: true });
   await merging.takeIn(received);

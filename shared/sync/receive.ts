@@ -27,7 +27,10 @@ export class Reception {
   constructor(store: RecordStore, from: BatchFrom) {
     this.store = store;
     this.from = from;
-    this.receipt = { receivedAt: new Date(from.nowMs).toISOString(), receivedOn: dayAt(from.nowMs, from.shop.timeZone) };
+    this.receipt = {
+      receivedAt: new Date(from.nowMs).toISOString(),
+      receivedOn: dayAt(from.nowMs, from.shop.timeZone),
+    };
     this.lastOrderedAt = from.device.lastOrderedAt;
   }
 
@@ -72,7 +75,11 @@ export class Reception {
       outcome: reason ? 'set-aside' : 'kept',
       reason,
     };
-    const received = { logged, isRepeat: false, understood: typeof understood === 'string' ? null : understood };
+    const received = {
+      logged,
+      isRepeat: false,
+      understood: typeof understood === 'string' ? null : understood,
+    };
     this.known.set(key, received);
     return received;
   }
