@@ -270,6 +270,7 @@ describe('what was set aside', () => {
     const shop = await shopWithEntry();
     await shop.record.say(shop.kit, 'entry.amend', { entryId: shop.entryId, set: { text: 'mine' } });
     expect(readSetAsides(shop.record.viewAs(shop.imelda))[0]).toMatchObject({
+      reason: 'Kit may not do this; the foreman can let it count.',
       mayAdmit: false,
       mayDismiss: false,
     });
