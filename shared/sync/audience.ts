@@ -51,7 +51,8 @@ function seenStage(row: AnyRow, viewer: Viewer): AnyRow | null {
 
 function seenBoat(row: AnyRow, viewer: Viewer): AnyRow | null {
   if (worksHere(viewer)) return row;
-  return viewer.boatIds.has(row.id as string) ? forOwner(row) : null;
+  // why a row was struck is said among those who work here
+  return viewer.boatIds.has(row.id as string) && !row.struck ? forOwner(row) : null;
 }
 
 function seenSetAside(row: AnyRow, viewer: Viewer): AnyRow | null {
@@ -103,5 +104,9 @@ export function seesWhole(entity: Entity, viewer: Viewer): boolean {
 /** Whether a person could see an earlier state of a row that is no more (null), or that they see no longer. */
 export function couldSee(entity: Entity, row: object | null, viewer: Viewer): boolean {
   if (entity === 'looseEnd') return worksHere(viewer);
-  return entity === 'stage' && viewer.boatIds.has((row as AnyRow).boatId as string);
+  const { id, boatId } = row as AnyRow;
+  return (
+    (entity === 'boat' && viewer.boatIds.has(id as string)) ||
+    (entity === 'stage' && viewer.boatIds.has(boatId as string))
+  );
 }
