@@ -1,5 +1,6 @@
 import type { Migration } from './migration.ts';
 import { keepShopsApart } from './row-security.ts';
+import { refersTo, rowTable } from './row-table.ts';
 
 // What an op says may be wrong in any way, so nothing in it refers to another table; the device is the request's.
 const OPS = `
@@ -30,27 +31,6 @@ BEGIN
 END $$;
 CREATE TRIGGER kept_as_they_came BEFORE UPDATE OR DELETE OR TRUNCATE ON ops
   FOR EACH STATEMENT EXECUTE FUNCTION refuse_to_change_ops()`;
-
-const ROW_COLUMNS = `
-  shop_id uuid NOT NULL,
-  id uuid NOT NULL,
-  seq bigint NOT NULL,`;
-
-function rowTable(table: string, columns: string): string {
-  return `
-CREATE TABLE ${table} (${ROW_COLUMNS}
-${columns},
-  PRIMARY KEY (shop_id, id)
-);
-CREATE UNIQUE INDEX ${table}_seq ON ${table} (shop_id, seq);
-GRANT SELECT, INSERT, UPDATE ON ${table} TO ribband_app;
-${keepShopsApart(table)}`;
-}
-
-// Deferrable, so that a batch may write its rows in any order.
-function refersTo(table: string, column: string): string {
-  return `FOREIGN KEY (shop_id, ${column}) REFERENCES ${table} (shop_id, id) DEFERRABLE INITIALLY IMMEDIATE`;
-}
 
 const BOATS = rowTable(
   'boats',

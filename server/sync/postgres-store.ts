@@ -1,4 +1,5 @@
 import type { Transaction } from 'sequelize';
+import { FOLLOWER_ENTITIES, type Follower } from '#shared/entry/follow.ts';
 import type { SetAsideRow } from '#shared/set-aside/set-aside.ts';
 import { recordEntitySchema, refKey, type Entity, type Ref } from '#shared/sync/row.ts';
 import type { Changes, LoggedOp, RecordStore } from '#shared/sync/store.ts';
@@ -50,6 +51,14 @@ export class PostgresStore implements RecordStore {
     );
     const keys = new Set(refs.map(refKey));
     return found.map(({ row }) => row).filter((row) => row.awaits && keys.has(refKey(row.awaits)));
+  }
+
+  async readFollowers(entryIds: string[]): Promise<Follower[]> {
+    const parts = FOLLOWER_ENTITIES.map(
+      (entity) =>
+        `SELECT '${entity}' AS entity, row FROM ${ROW_TABLES[entity].table} WHERE shop_id = $1 AND entry_id = ANY($2::uuid[])`,
+    );
+    return query<Follower>(this.transaction, parts.join(' UNION ALL '), [this.shopId, entryIds]);
   }
 
   async write({ ops, rows, looseEnds, lastOrderedAt }: Changes): Promise<void> {

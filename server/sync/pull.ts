@@ -32,6 +32,9 @@ const TABLES: Record<Entity, { table: string; id: string; seq: string }> = {
   stage: { table: ROW_TABLES.stage.table, id: 'id', seq: 'seq' },
   task: { table: ROW_TABLES.task.table, id: 'id', seq: 'seq' },
   entry: { table: ROW_TABLES.entry.table, id: 'id', seq: 'seq' },
+  finding: { table: ROW_TABLES.finding.table, id: 'id', seq: 'seq' },
+  sound: { table: ROW_TABLES.sound.table, id: 'id', seq: 'seq' },
+  photo: { table: ROW_TABLES.photo.table, id: 'id', seq: 'seq' },
   setAside: { table: ROW_TABLES.setAside.table, id: 'id', seq: 'seq' },
   looseEnd: { table: LOOSE_END_TABLE.table, id: 'id', seq: 'seq' },
 };

@@ -8,6 +8,12 @@ export interface RowTable {
   values(row: Record<string, unknown>): Record<string, unknown>;
 }
 
+const PLACED_COLUMNS = { boat_id: 'uuid', stage_id: 'uuid', entry_id: 'uuid' } as const;
+
+function placedValues({ boatId, stageId, entryId }: Record<string, unknown>): Record<string, unknown> {
+  return { boat_id: boatId, stage_id: stageId, entry_id: entryId };
+}
+
 /** In the order in which their rows refer to one another. */
 export const ROW_TABLES: Record<RecordEntity, RowTable> = {
   boat: {
@@ -34,6 +40,13 @@ export const ROW_TABLES: Record<RecordEntity, RowTable> = {
       work_date: workDate,
       author_id: authorId,
     }),
+  },
+  finding: { table: 'findings', columns: PLACED_COLUMNS, values: placedValues },
+  sound: { table: 'sounds', columns: PLACED_COLUMNS, values: placedValues },
+  photo: {
+    table: 'photos',
+    columns: { ...PLACED_COLUMNS, finding_id: 'uuid', sha256: 'text', author_id: 'uuid' },
+    values: (row) => ({ ...placedValues(row), finding_id: row.findingId, sha256: row.sha256, author_id: row.authorId }),
   },
   setAside: {
     table: 'set_asides',

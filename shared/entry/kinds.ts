@@ -1,8 +1,16 @@
 import type { z } from 'zod';
-import { isStageOfBoat, movedFields, movedRefs } from '../stage/moved.ts';
+import { movedFields, movedRefs } from '../stage/moved.ts';
 import { saidFields, statementsOf } from '../sync/fields.ts';
 import { addItem, itemsOf, takeBackItems } from '../sync/items.ts';
-import { isCrewOrForeman, isForeman, isOneOf, type AnyOpKind, type Author, type OpKind, type RowLookup } from '../sync/op-kind.ts';
+import {
+  isCrewOrForeman,
+  isForeman,
+  isOneOf,
+  type AnyOpKind,
+  type Author,
+  type OpKind,
+  type RowLookup,
+} from '../sync/op-kind.ts';
 import type { Op } from '../sync/op.ts';
 import { rowKinds } from '../sync/row-kinds.ts';
 import { madeAt, madeRow, type Facts, type Ref } from '../sync/row.ts';
@@ -27,7 +35,12 @@ function givenHours(hours: HoursGiven, facts: Facts): Hours[] {
   const settles = isOneOf({ personId: '', roles: facts.roles }, 'foreman', 'office');
   return hours
     .filter((figure) => figure.minutes > 0)
-    .map(({ personId, minutes, kind = null }) => ({ personId, minutes, kind, proposed: kind === null || !settles }))
+    .map(({ personId, minutes, kind = null }) => ({
+      personId,
+      minutes,
+      kind,
+      proposed: kind === null || !settles,
+    }))
     .sort((a, b) => (a.personId < b.personId ? -1 : 1));
 }
 
@@ -54,7 +67,9 @@ function withLateness(row: EntryRow): EntryRow {
 
 function setFields(set: EntrySet, look: RowLookup): Record<string, unknown> {
   const { hours, ...others } = movedFields(set, look) as Omit<EntrySet, 'boatId' | 'stageId'>;
-  const figures = (hours ?? []).map(({ personId, minutes, kind = null }) => [hoursField(personId), { minutes, kind }] as const);
+  const figures = (hours ?? []).map(
+    ({ personId, minutes, kind = null }) => [hoursField(personId), { minutes, kind }] as const,
+  );
   return { ...others, ...Object.fromEntries(figures) };
 }
 
@@ -81,7 +96,6 @@ const write: OpKind<EntryWrite, EntryRow> = {
   rowId: (data) => data.entryId,
   makes: true,
   names: (data) => [...movedRefs(data), ...personRefs(data.hours)],
-  fits: isStageOfBoat,
   mayMake: isCrewOrForeman,
   reduce: (_row, op, facts) => writtenEntry(op, facts),
 };
@@ -110,7 +124,10 @@ const takeBack: OpKind<z.infer<typeof entryTakeBackSchema>, EntryRow> = {
   makes: false,
   mayMake: (author, data, row) => {
     const others = itemsOf(row).filter((item) => item.personId !== author.personId);
-    return isForeman(author) || (isCrewOrForeman(author) && !others.some((item) => data.additionIds.includes(item.id)));
+    return (
+      isForeman(author) ||
+      (isCrewOrForeman(author) && !others.some((item) => data.additionIds.includes(item.id)))
+    );
   },
   reduce: (row, op, facts) => takeBackItems(row, op.data.additionIds, op, facts),
 };
@@ -119,10 +136,10 @@ const changes = rowKinds<EntryRow, EntrySet>({
   entity: 'entry',
   set: entrySetSchema,
   names: (set) => [...movedRefs(set), ...personRefs(set.hours)],
-  fits: isStageOfBoat,
   fields: setFields,
   mayAmend,
-  mayStrike: (author, row) => isForeman(author) || (isOneOf(author, 'crew') && row.authorId === author.personId),
+  mayStrike: (author, row) =>
+    isForeman(author) || (isOneOf(author, 'crew') && row.authorId === author.personId),
 }).map((kind) => ({
   ...kind,
   reduce: (...args: Parameters<typeof kind.reduce>) => withLateness(kind.reduce(...args)),
@@ -132,6 +149,8 @@ export const entryKinds: AnyOpKind[] = [write, addTo, takeBack, ...changes];
 
 /** The people who have, or ever had, a figure in an entry's hours. */
 export function peopleInHours(row: EntryRow): string[] {
-  const said = saidFields(row).filter((field) => field.startsWith('hours/')).map((field) => field.slice('hours/'.length));
+  const said = saidFields(row)
+    .filter((field) => field.startsWith('hours/'))
+    .map((field) => field.slice('hours/'.length));
   return [...new Set([...row.hours.map((figure) => figure.personId), ...said])];
 }

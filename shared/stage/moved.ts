@@ -15,11 +15,6 @@ export function movedRefs(set: Moved): Ref[] {
   return [...boats, ...stages];
 }
 
-/** Whether a stage that is named with a boat is one of hers. */
-export function isStageOfBoat({ boatId, stageId }: Moved, look: RowLookup): boolean {
-  return !boatId || !stageId || (look({ entity: 'stage', id: stageId }) as StageRow).boatId === boatId;
-}
-
 /** An amendment's fields with boat and stage as the one field that they are: a stage brings her boat, a boat alone no stage. */
 export function movedFields<Set extends Moved>(set: Set, look: RowLookup): Record<string, unknown> {
   const { boatId, stageId, ...others } = set;

@@ -45,7 +45,9 @@ function seenStage(row: AnyRow, viewer: Viewer): AnyRow | null {
   if (!viewer.boatIds.has(row.boatId as string)) return null;
   const { marks, twice: _twice, struck, ...seen } = forOwner(row);
   if (struck) return null;
-  const days = standingItems(marks as StageRow['marks']).map((mark) => mark.workDate).sort();
+  const days = standingItems(marks as StageRow['marks'])
+    .map((mark) => mark.workDate)
+    .sort();
   return { ...seen, struck: null, doneOn: days[0] ?? null };
 }
 
@@ -77,6 +79,9 @@ export function seen(entity: Entity, row: object, viewer: Viewer): object | null
       return seenSetAside(fields, viewer);
     case 'task':
     case 'entry':
+    case 'finding':
+    case 'sound':
+    case 'photo':
     case 'looseEnd':
       return worksHere(viewer) ? row : null;
   }
@@ -84,7 +89,7 @@ export function seen(entity: Entity, row: object, viewer: Viewer): object | null
 
 /** Whether a person sees no row of an entity and never could. */
 export function seesNone(entity: Entity, viewer: Viewer): boolean {
-  return !worksHere(viewer) && (entity === 'task' || entity === 'entry' || entity === 'looseEnd');
+  return !worksHere(viewer) && ['task', 'entry', 'finding', 'sound', 'photo', 'looseEnd'].includes(entity);
 }
 
 /** Whether a person sees every row of an entity whole, so that rows can be passed on as they are kept. */

@@ -1,3 +1,4 @@
+import { isFollowerEntity, type Follower } from '../entry/follow.ts';
 import type { SetAsideRow } from '../set-aside/set-aside.ts';
 import { entitySchema, refKey, type Entity, type Ref } from './row.ts';
 import type { Stamp } from './stamp.ts';
@@ -35,6 +36,11 @@ export class MemoryStore implements RecordStore {
     const kept = [...this.kept.values()].filter(({ entity }) => entity === 'setAside');
     const rows = kept.map(({ json }) => JSON.parse(json) as SetAsideRow);
     return rows.filter((row) => row.awaits && keys.has(refKey(row.awaits)));
+  }
+
+  async readFollowers(entryIds: string[]): Promise<Follower[]> {
+    const followers = this.feed(0).filter(({ entity }) => isFollowerEntity(entity));
+    return (followers as Follower[]).filter(({ row }) => row.entryId && entryIds.includes(row.entryId));
   }
 
   async write({ ops, rows, looseEnds, lastOrderedAt }: Changes): Promise<void> {

@@ -36,7 +36,8 @@ export class Merging {
     await this.space.load(fresh.flatMap(({ understood }) => (understood ? refsOf(understood) : [])));
     for (const received of fresh) this.apply(received);
     await this.settle();
-    for (const { received, awaits } of this.waiting.splice(0)) this.setAside(received.logged, 'no-such-row', awaits);
+    for (const { received, awaits } of this.waiting.splice(0))
+      this.setAside(received.logged, 'no-such-row', awaits);
     await this.settle();
   }
 
@@ -48,6 +49,7 @@ export class Merging {
 
   async write(fresh: Received[], lastOrderedAt: Stamp | null): Promise<void> {
     for (const received of fresh) this.fixOutcome(received);
+    await this.space.moveFollowers();
     await this.store.write({
       ops: fresh.map((received) => received.logged),
       rows: this.space.rows(),
@@ -114,7 +116,8 @@ export class Merging {
   /** Brings the ops behind set-aside rows, and the rows that they need, into reach. */
   private async recall(rows: SetAsideRow[]): Promise<Map<string, Understood | Reason>> {
     const keys = rows.map((row) => row.opKey).filter((key) => !this.logged.has(key));
-    if (keys.length > 0) for (const [key, logged] of await this.store.readOps(keys)) this.logged.set(key, logged);
+    if (keys.length > 0)
+      for (const [key, logged] of await this.store.readOps(keys)) this.logged.set(key, logged);
     const recalled = new Map<string, Understood | Reason>();
     for (const { opKey } of rows) {
       const understood = understandLogged(this.logged.get(opKey)!);
@@ -139,7 +142,9 @@ export class Merging {
     if (logged.outcome === 'set-aside' || !understood) return;
     const row = this.space.look(understood.changes) as Row;
     const isItsOwn = (statement: Statement) => statement.opId === logged.key;
-    const isLoose = row.statements.filter(isItsOwn).some(({ field }) => differingStatements(row, field).some(isItsOwn));
+    const isLoose = row.statements
+      .filter(isItsOwn)
+      .some(({ field }) => differingStatements(row, field).some(isItsOwn));
     logged.outcome = isLoose ? 'loose-end' : 'kept';
   }
 }

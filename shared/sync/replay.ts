@@ -1,3 +1,5 @@
+import type { EntryRow } from '../entry/entry.ts';
+import { isFollowerEntity, onEntry, type Follower, type FollowerRow } from '../entry/follow.ts';
 import { judge, reduceOp, understand } from './judge.ts';
 import type { RowLookup } from './op-kind.ts';
 import type { Op } from './op.ts';
@@ -9,11 +11,14 @@ export interface HeldOp {
   facts: Facts;
 }
 
+/** The rows that belong to an entry, as they were before. */
+export type FollowersOf = (entryId: string) => Follower[];
+
 /**
  * The rows that held ops change, as they will stand: what a screen shows is the server's rows with these over them.
  * An op that this version does not understand, or whose row is not here, shows in the list of held ops alone.
  */
-export function replay(held: HeldOp[], look: RowLookup): Map<string, { ref: Ref; row: Row }> {
+export function replay(held: HeldOp[], look: RowLookup, followersOf: FollowersOf): Map<string, { ref: Ref; row: Row }> {
   const changed = new Map<string, { ref: Ref; row: Row }>();
   const lookOver: RowLookup = (ref) => changed.get(refKey(ref))?.row ?? look(ref);
   for (const { op, facts } of held) {
@@ -22,7 +27,18 @@ export function replay(held: HeldOp[], look: RowLookup): Map<string, { ref: Ref;
     const { reason } = judge(understood, { personId: op.personId, roles: facts.roles }, lookOver);
     if (reason !== null) continue;
     const ref = understood.changes;
-    changed.set(refKey(ref), { ref, row: reduceOp(understood, facts, lookOver) });
+    const row = reduceOp(understood, facts, lookOver);
+    changed.set(refKey(ref), { ref, row });
+    if (op.kind === 'entry.amend') moveFollowers(row as EntryRow, changed, followersOf);
   }
   return changed;
+}
+
+function moveFollowers(entry: EntryRow, changed: Map<string, { ref: Ref; row: Row }>, followersOf: FollowersOf): void {
+  const known = followersOf(entry.id).map(({ entity, row }) => ({ ref: { entity, id: row.id }, row }));
+  const held = [...changed.values()].filter(({ ref }) => isFollowerEntity(ref.entity));
+  for (const { ref, row } of [...known, ...held]) {
+    const current = (changed.get(refKey(ref))?.row ?? row) as FollowerRow;
+    if (current.entryId === entry.id) changed.set(refKey(ref), { ref, row: onEntry(current, entry) });
+  }
 }

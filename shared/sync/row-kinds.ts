@@ -12,8 +12,6 @@ interface RowKindsOf<R extends Row, Set extends object> {
   set: z.ZodType<Set>;
   /** what an amendment names */
   names?(set: Set): Ref[];
-  /** whether what it names belongs together */
-  fits?(set: Set, look: RowLookup): boolean;
   /** fields as the law keeps them, from what an amendment sets */
   fields?(set: Set, look: RowLookup): Record<string, unknown>;
   mayAmend(author: Author, row: R, set: Set): boolean;
@@ -35,7 +33,6 @@ export function rowKinds<R extends Row, Set extends object>(of: RowKindsOf<R, Se
     makes: false,
     rowId,
     names: (data) => of.names?.(data.set) ?? [],
-    fits: (data, look) => of.fits?.(data.set, look) ?? true,
     mayMake: (author, data, row) => row !== undefined && of.mayAmend(author, row, data.set),
     reduce: (row, op, facts, look) => {
       const fields = of.fields?.(op.data.set, look) ?? (op.data.set as Record<string, unknown>);

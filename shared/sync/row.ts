@@ -5,7 +5,7 @@ import type { Op } from './op.ts';
 import { stampTime, type Stamp } from './stamp.ts';
 
 /** The entities whose rows ops make and change, in the order in which their rows refer to one another. */
-export const recordEntitySchema = z.enum(['boat', 'stage', 'task', 'entry', 'setAside']);
+export const recordEntitySchema = z.enum(['boat', 'stage', 'task', 'entry', 'finding', 'sound', 'photo', 'setAside']);
 export type RecordEntity = z.infer<typeof recordEntitySchema>;
 
 /** Every entity a replica may hold. */

@@ -1,3 +1,4 @@
+import type { Follower } from '../entry/follow.ts';
 import type { Role } from '../identity/role.ts';
 import type { SetAsideRow } from '../set-aside/set-aside.ts';
 import type { LooseEnd } from './loose-ends.ts';
@@ -39,6 +40,8 @@ export interface RecordStore {
   readRows(refs: Ref[]): Promise<Map<string, object>>;
   /** the set-aside rows that wait for one of `refs` */
   readAwaiting(refs: Ref[]): Promise<SetAsideRow[]>;
+  /** the rows that belong to one of these entries */
+  readFollowers(entryIds: string[]): Promise<Follower[]>;
   write(changes: Changes): Promise<void>;
 }
 

@@ -1,3 +1,5 @@
+import type { EntryRow } from '../entry/entry.ts';
+import { isFollowerEntity, onEntry, type Follower, type FollowerRow } from '../entry/follow.ts';
 import type { SetAsideRow } from '../set-aside/set-aside.ts';
 import { isSameJson } from './canonical.ts';
 import { looseEndsOf } from './loose-ends.ts';
@@ -40,6 +42,36 @@ export class Workspace {
       .filter(({ entity }) => entity === 'setAside')
       .map(({ row }) => row as SetAsideRow)
       .filter((row) => row.awaits !== null && keys.has(refKey(row.awaits)));
+  }
+
+  /** The entries that now lie on another boat or stage than they did. */
+  movedEntries(): EntryRow[] {
+    const entries = this.rows().filter(({ entity }) => entity === 'entry').map(({ row }) => row as EntryRow);
+    return entries.filter((entry) => {
+      const earlier = this.read.get(refKey({ entity: 'entry', id: entry.id })) as EntryRow | undefined;
+      return entry.statements.length > 0 && (earlier?.boatId !== entry.boatId || earlier?.stageId !== entry.stageId);
+    });
+  }
+
+  /** What belongs to an entry follows it to the boat and stage that it lies on. */
+  async moveFollowers(): Promise<void> {
+    const moved = new Map(this.movedEntries().map((entry) => [entry.id, entry]));
+    if (moved.size === 0) return;
+    const stored = await this.store.readFollowers([...moved.keys()]);
+    for (const { entity, row } of stored) this.remember({ entity, id: row.id }, row);
+    const here = this.rows().filter(({ entity }) => isFollowerEntity(entity)) as Follower[];
+    for (const { entity, row } of [...stored, ...here]) {
+      const current = this.look({ entity, id: row.id }) as FollowerRow;
+      const entry = current.entryId ? moved.get(current.entryId) : undefined;
+      if (entry) this.put(entity, onEntry(current, entry));
+    }
+  }
+
+  private remember(ref: Ref, row: object): void {
+    const key = refKey(ref);
+    if (this.asked.has(key)) return;
+    this.asked.add(key);
+    this.read.set(key, row);
   }
 
   rows(): Changes['rows'] {

@@ -1,6 +1,6 @@
 import type { z } from 'zod';
 import { UNMARKED, addMark, takeBackMarks } from '../stage/marks.ts';
-import { isStageOfBoat, movedFields, movedRefs } from '../stage/moved.ts';
+import { movedFields, movedRefs } from '../stage/moved.ts';
 import { addItem, itemsOf, takeBackItems } from '../sync/items.ts';
 import { isCrewOrForeman, isForeman, type AnyOpKind, type Author, type OpKind } from '../sync/op-kind.ts';
 import { rowKinds } from '../sync/row-kinds.ts';
@@ -38,7 +38,6 @@ const add: OpKind<TaskAdd, TaskRow> = {
   rowId,
   makes: true,
   names: namedRefs,
-  fits: isStageOfBoat,
   mayMake: isCrewOrForeman,
   reduce: (_row, op, facts) => {
     const { taskId, ...fields } = op.data;
@@ -106,8 +105,7 @@ export const taskKinds: AnyOpKind[] = [
     entity: 'task',
     set: taskSetSchema,
     names: namedRefs,
-    fits: isStageOfBoat,
-    fields: movedFields,
+      fields: movedFields,
     mayAmend: isForeman,
     mayStrike: isForeman,
   }),

@@ -5,6 +5,8 @@ import { understand } from '#shared/sync/judge.ts';
 import { looseEndsOf, type LooseEnd } from '#shared/sync/loose-ends.ts';
 import type { Op } from '#shared/sync/op.ts';
 import { replay, type HeldOp } from '#shared/sync/replay.ts';
+import type { RowLookup } from '#shared/sync/op-kind.ts';
+import { FOLLOWER_ENTITIES, type Follower, type FollowerRow } from '#shared/entry/follow.ts';
 import { recordEntitySchema, refKey, type Entity, type Ref, type Row } from '#shared/sync/row.ts';
 import type { RowOf } from '#shared/sync/rows.ts';
 import { stampMs } from '#shared/sync/stamp.ts';
@@ -108,7 +110,8 @@ class KnownView implements View {
     this.nowMs = known.nowMs;
     this.today = dayAt(known.nowMs, this.timeZone);
     this.heldRefs = new Set(known.held.flatMap(({ op }) => changedRef(op)).map(refKey));
-    this.lay(replay(this.pending(), (ref) => this.groups.get(ref.entity)?.get(ref.id)));
+    const look: RowLookup = (ref) => this.groups.get(ref.entity)?.get(ref.id);
+    this.lay(replay(this.pending(), look, (entryId) => this.followersOf(entryId)));
   }
 
   all<E extends Entity>(entity: E): RowOf[E][] {
@@ -124,6 +127,13 @@ class KnownView implements View {
 
   isHeld(entity: Entity, id: string): boolean {
     return this.heldRefs.has(refKey({ entity, id }));
+  }
+
+  private followersOf(entryId: string): Follower[] {
+    return FOLLOWER_ENTITIES.flatMap((entity) => {
+      const rows = [...(this.groups.get(entity)?.values() ?? [])] as FollowerRow[];
+      return rows.filter((row) => row.entryId === entryId).map((row) => ({ entity, row }));
+    });
   }
 
   private rolesOf(personId: string): Role[] {

@@ -200,7 +200,7 @@ export class Phone {
       const { roles } = this.shop.people.get(op.personId)!;
       return { op, facts: { orderedAt: op.at, orderedOn, receivedAt: null, receivedOn: null, roles } };
     });
-    return replay(held, this.look);
+    return replay(held, this.look, () => []);
   }
 }
 

@@ -1,0 +1,58 @@
+import type { z } from 'zod';
+import { movedFields, type Moved } from '../stage/moved.ts';
+import { isCrewOrForeman, type AnyOpKind, type OpKind } from '../sync/op-kind.ts';
+import { rowKinds } from '../sync/row-kinds.ts';
+import { madeAt, madeRow, type Ref } from '../sync/row.ts';
+import { placedRefs, withEntry, type Follower, type FollowerRow } from './follow.ts';
+
+interface NoteKindsOf<Data extends object, Set extends Moved & { findingId?: string | null }> {
+  entity: Follower['entity'];
+  verb: 'note' | 'attach';
+  data: z.ZodType<Data>;
+  set: z.ZodType<Set>;
+  /** what the server alone knows of a new row */
+  atFirst?: object;
+}
+
+type Placed = Moved & { entryId?: string; findingId?: string; taskId?: string; boatId: string };
+
+/** The kinds of what is noted on a boat, by itself or with an entry: anybody of the crew makes and amends it. */
+export function noteKinds<Data extends Placed, Set extends Moved & { findingId?: string | null }>(
+  of: NoteKindsOf<Data, Set>,
+): AnyOpKind[] {
+  const idField = `${of.entity}Id`;
+  const rowId = (data: Data) => (data as unknown as Record<string, string>)[idField]!;
+  const made = of.verb === 'note' ? 'noted' : 'attached';
+
+  const make: OpKind<Data, FollowerRow> = {
+    kind: `${of.entity}.${of.verb}`,
+    v: 1,
+    data: of.data,
+    entity: of.entity,
+    rowId,
+    makes: true,
+    // a photo's own id is no row that it names, nor is a finding's
+    names: (data) => placedRefs({ ...data, ...(of.entity === 'finding' ? { findingId: undefined } : {}) }),
+    mayMake: isCrewOrForeman,
+    reduce: (_row, op, facts, look) => {
+      const { [idField]: id, stageId, ...fields } = op.data as unknown as Record<string, unknown> & Placed;
+      const said = { authorId: op.personId, [`${made}At`]: madeAt(facts), [`${made}On`]: facts.orderedOn, ...of.atFirst };
+      const row = madeRow(id as string, op, facts, { ...fields, stageId: stageId ?? null, ...said });
+      return withEntry(row as FollowerRow, look);
+    },
+  };
+
+  const changes = rowKinds<FollowerRow, Set>({
+    entity: of.entity,
+    set: of.set,
+    names: (set): Ref[] => placedRefs(set),
+    fields: movedFields,
+    mayAmend: isCrewOrForeman,
+    mayStrike: isCrewOrForeman,
+  }).map((kind) => ({
+    ...kind,
+    reduce: (...args: Parameters<typeof kind.reduce>) => withEntry(kind.reduce(...args) as FollowerRow, args[3]),
+  }));
+
+  return [make, ...changes];
+}
