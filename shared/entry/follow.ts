@@ -15,7 +15,9 @@ export interface Follower {
 export type FollowerRow = Row & { boatId: string; stageId: string | null; entryId?: string };
 
 /** The rows that a thing which may belong to an entry names. */
-export function placedRefs(data: Moved & { entryId?: string; findingId?: string | null; taskId?: string }): Ref[] {
+export function placedRefs(
+  data: Moved & { entryId?: string; findingId?: string | null; taskId?: string },
+): Ref[] {
   const entry: Ref[] = data.entryId ? [{ entity: 'entry', id: data.entryId }] : [];
   const finding: Ref[] = data.findingId ? [{ entity: 'finding', id: data.findingId }] : [];
   const task: Ref[] = data.taskId ? [{ entity: 'task', id: data.taskId }] : [];

@@ -36,7 +36,12 @@ export function noteKinds<Data extends Placed, Set extends Moved & { findingId?:
     mayMake: isCrewOrForeman,
     reduce: (_row, op, facts, look) => {
       const { [idField]: id, stageId, ...fields } = op.data as unknown as Record<string, unknown> & Placed;
-      const said = { authorId: op.personId, [`${made}At`]: madeAt(facts), [`${made}On`]: facts.orderedOn, ...of.atFirst };
+      const said = {
+        authorId: op.personId,
+        [`${made}At`]: madeAt(facts),
+        [`${made}On`]: facts.orderedOn,
+        ...of.atFirst,
+      };
       const row = madeRow(id as string, op, facts, { ...fields, stageId: stageId ?? null, ...said });
       return withEntry(row as FollowerRow, look);
     },
@@ -51,7 +56,8 @@ export function noteKinds<Data extends Placed, Set extends Moved & { findingId?:
     mayStrike: isCrewOrForeman,
   }).map((kind) => ({
     ...kind,
-    reduce: (...args: Parameters<typeof kind.reduce>) => withEntry(kind.reduce(...args) as FollowerRow, args[3]),
+    reduce: (...args: Parameters<typeof kind.reduce>) =>
+      withEntry(kind.reduce(...args) as FollowerRow, args[3]),
   }));
 
   return [make, ...changes];

@@ -4,7 +4,15 @@ import { idSchema, newIdSchema } from '../sync/ids.ts';
 import type { Row } from '../sync/row.ts';
 
 /** How a thing is known, from hearsay to sound wood all round. */
-export const knownSchema = z.enum(['heard', 'seen', 'sounded', 'probed', 'metered', 'opened', 'cut-to-sound']);
+export const knownSchema = z.enum([
+  'heard',
+  'seen',
+  'sounded',
+  'probed',
+  'metered',
+  'opened',
+  'cut-to-sound',
+]);
 export type Known = z.infer<typeof knownSchema>;
 
 export const certaintySchema = z.enum(['suspected', 'proved']);
@@ -60,10 +68,14 @@ export const findingSetSchema = z
     text: textSchema.optional(),
   })
   .refine((set) => Object.keys(set).length > 0, 'sets at least one field')
-  .refine((set) => set.stageId !== null || set.boatId !== undefined, 'a finding without a stage says its boat');
+  .refine(
+    (set) => set.stageId !== null || set.boatId !== undefined,
+    'a finding without a stage says its boat',
+  );
 export type FindingSet = z.infer<typeof findingSetSchema>;
 
-export interface FindingRow extends Row, Omit<FindingNote, 'findingId' | 'seenExtent' | 'fearedExtent' | 'openToKnow' | 'count'> {
+export interface FindingRow
+  extends Row, Omit<FindingNote, 'findingId' | 'seenExtent' | 'fearedExtent' | 'openToKnow' | 'count'> {
   boatId: string;
   stageId: string | null;
   seenExtent?: Extent | null;
