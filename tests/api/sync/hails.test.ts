@@ -1,17 +1,17 @@
 import { once } from 'node:events';
 import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
-import pg from 'pg';
+import { pino } from 'pino';
 import { afterAll, afterEach, beforeAll, expect, test } from 'vitest';
 import { createApp } from '#server/app.ts';
 import { HailStream } from '#server/hails/hail-stream.ts';
 import { Hails } from '#server/hails/hails.ts';
 import { listen } from '#server/main.ts';
 import { HailEar } from '#tests/worlds/hail-ear.ts';
-import { pino } from 'pino';
 import { entryBy, layDown, senderFor, type Sender, type Yard } from '#tests/worlds/sender.ts';
 import { startServer, type TestServer } from '#tests/worlds/server.ts';
 import { makeShop, type TestShop } from '#tests/worlds/shop.ts';
+import { asOwner } from '#tests/worlds/tables.ts';
 
 const HAIL_MAX_MS = 2000;
 
@@ -53,14 +53,14 @@ async function withinMs(ms: number, hail: Promise<void>): Promise<boolean> {
   return performance.now() - startMs < ms;
 }
 
-async function asOwner(sql: string, values: unknown[] = []): Promise<pg.QueryResult> {
-  const client = new pg.Client({ connectionString: server.databaseUrl });
-  await client.connect();
-  try {
-    return await client.query(sql, values);
-  } finally {
-    await client.end();
-  }
+/** Cuts the connections that carry hails. */
+async function cutLine(): Promise<void> {
+  const cut = await asOwner(
+    server,
+    `SELECT pg_terminate_backend(pid) FROM pg_stat_activity
+     WHERE datname = current_database() AND query ~ 'LISTEN|pg_notify' AND pid <> pg_backend_pid()`,
+  );
+  expect(cut).toHaveLength(1);
 }
 
 test('who listens is told at once where the feed stands, uncompressed', async () => {
@@ -109,11 +109,18 @@ test('another shop hears nothing', async () => {
 
 test('hails come again after the connection that carries them was cut', async () => {
   const ear = await earOf(foreman);
-  const cut = await asOwner(
-    `SELECT pg_terminate_backend(pid) FROM pg_stat_activity WHERE datname = current_database() AND query ~ 'LISTEN|pg_notify' AND pid <> pg_backend_pid()`,
-  );
-  expect(cut.rowCount).toBeGreaterThan(0);
+  await cutLine();
   const seq = await logged(crew);
+  expect(await withinMs(HAIL_MAX_MS, ear.hears(seq))).toBe(true);
+});
+
+test('what was announced elsewhere while the connection was cut is told once it is back', async () => {
+  const ear = await earOf(foreman);
+  // another server's commit, whose hail nobody here has heard
+  const [{ seq }] = (await asOwner(server, 'UPDATE shops SET seq = seq + 1 WHERE shop_id = $1 RETURNING seq::int', [shop.shopId])) as [
+    { seq: number },
+  ];
+  await cutLine();
   expect(await withinMs(HAIL_MAX_MS, ear.hears(seq))).toBe(true);
 });
 
