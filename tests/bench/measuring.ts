@@ -1,10 +1,14 @@
-/** What one bench found: the same work by the bare means and by ours, in milliseconds. */
-export interface Finding {
-  what: string;
+/** The same work done by the bare means and by ours, one right after the other, in milliseconds. */
+export interface Pair {
   bareMs: number;
   oursMs: number;
-  /** at most how many times the bare one ours is to take; null where no goal was set */
-  goal: number | null;
+}
+
+export interface Finding {
+  what: string;
+  pairs: Pair[];
+  /** at most how many times the bare one ours is to take */
+  goal: number;
 }
 
 export function median(values: number[]): number {

@@ -2,27 +2,16 @@ import type { Sender } from '#tests/worlds/sender.ts';
 import { startServer } from '#tests/worlds/server.ts';
 import { BareInsert, type KeptBatch } from './bare-insert.ts';
 import { DEVICES, bodyOf, entryOps, latestCursor, makeCrew, postSync, type Crew } from './crew.ts';
-import { median, timed, type Finding } from './measuring.ts';
+import { timed, type Finding, type Pair } from './measuring.ts';
 import { SqlTrace } from './sql-trace.ts';
 import { spendingOf, sumSpending, type Spending } from './sync-spending.ts';
 import { answerIn, type Came } from './wire.ts';
 
 const OPS_A_DEVICE = 400;
 const WARM_UPS = 2;
-const ROUNDS = 5;
+const ROUNDS = 6;
 const ROUND_GAP_MS = 1000;
 const GOAL = 2;
-
-interface Round {
-  oursMs: number;
-  bareMs: number;
-  spending: Spending;
-}
-
-interface Posted {
-  oursMs: number;
-  spending: Spending;
-}
 
 /** What a phone sends in a round. */
 interface Batch {
@@ -42,42 +31,34 @@ export interface MergeFindings {
 export async function benchMerge(): Promise<MergeFindings> {
   const server = await startServer();
   const crew = await makeCrew(server, ['crew']);
-  const trace = new SqlTrace(server.database);
   const bare = await BareInsert.open(server.databaseUrl);
-  const apart: Round[] = [];
-  const together: Round[] = [];
+  const trace = new SqlTrace(server.database);
+  const apart: Pair[] = [];
+  const together: Pair[] = [];
+  let spendings: Spending[] = [];
   try {
     for (let round = 0; round < WARM_UPS + ROUNDS; round += 1) {
-      apart.push(await runRound(crew, bare, (batches) => oneByOne(batches, trace), keepOneByOne));
-      together.push(await runRound(crew, bare, allAtOnce, keepAllAtOnce));
+      if (round === WARM_UPS) spendings = [];
+      apart.push(await oneByOne(crew, bare, trace, spendings));
+      together.push(await allAtOnce(crew, bare));
     }
   } finally {
     await bare.close();
     await server.close();
   }
-  const rounds = apart.slice(WARM_UPS);
   const name = `${DEVICES} x ${OPS_A_DEVICE} entry ops`;
   return {
-    findings: [finding(`${name}, one device after another`, rounds), finding(`${name}, all at once`, together.slice(WARM_UPS))],
-    spending: new Map([...sumSpending(rounds.map(({ spending }) => spending))].map(([part, ms]) => [part, ms / rounds.length / DEVICES])),
+    findings: [
+      { what: `${name}, one device after another`, pairs: apart.slice(WARM_UPS), goal: GOAL },
+      { what: `${name}, all at once`, pairs: together.slice(WARM_UPS), goal: GOAL },
+    ],
+    spending: new Map([...sumSpending(spendings)].map(([part, ms]) => [part, ms / spendings.length])),
   };
 }
 
-function finding(what: string, rounds: Round[]): Finding {
-  return { what, bareMs: median(rounds.map(({ bareMs }) => bareMs)), oursMs: median(rounds.map(({ oursMs }) => oursMs)), goal: GOAL };
-}
-
-async function runRound(
-  crew: Crew,
-  bare: BareInsert,
-  ours: (batches: Batch[]) => Promise<Posted>,
-  theirs: (bare: BareInsert, kept: KeptBatch[]) => Promise<void>,
-): Promise<Round> {
+function makeBatches(crew: Crew): Batch[] {
   crew.server.clock.advance(ROUND_GAP_MS);
-  const batches = crew.hands.map((hand) => makeBatch(crew, hand));
-  const { oursMs, spending } = await ours(batches);
-  const kept = await Promise.all(batches.map(({ opIds, entryIds }) => bare.readKept(crew.shop.shopId, opIds, entryIds)));
-  return { oursMs, spending, bareMs: await timed(() => theirs(bare, kept)) };
+  return crew.hands.map((hand) => makeBatch(crew, hand));
 }
 
 function makeBatch(crew: Crew, hand: Sender): Batch {
@@ -93,36 +74,35 @@ function makeBatch(crew: Crew, hand: Sender): Batch {
   };
 }
 
-async function oneByOne(batches: Batch[], trace: SqlTrace): Promise<Posted> {
-  const spendings: Spending[] = [];
-  let oursMs = 0;
-  for (const { ready } of batches) {
-    const send = await ready();
+function readKept(crew: Crew, bare: BareInsert, { opIds, entryIds }: Batch): Promise<KeptBatch> {
+  return bare.readKept(crew.shop.shopId, opIds, entryIds);
+}
+
+async function oneByOne(crew: Crew, bare: BareInsert, trace: SqlTrace, spendings: Spending[]): Promise<Pair> {
+  const sum: Pair = { bareMs: 0, oursMs: 0 };
+  for (const batch of makeBatches(crew)) {
+    const send = await batch.ready();
     trace.clear();
     const startMs = performance.now();
-    const answer = await send();
+    const came = await send();
     const endMs = performance.now();
-    oursMs += endMs - startMs;
+    sum.oursMs += endMs - startMs;
     spendings.push(spendingOf(trace.queries, startMs, endMs));
-    assertKept(answer);
+    assertKept(came);
+    const kept = await readKept(crew, bare, batch);
+    sum.bareMs += await timed(() => bare.keep(kept));
   }
-  return { oursMs, spending: sumSpending(spendings) };
+  return sum;
 }
 
-async function allAtOnce(batches: Batch[]): Promise<Posted> {
+async function allAtOnce(crew: Crew, bare: BareInsert): Promise<Pair> {
+  const batches = makeBatches(crew);
   const sends = await Promise.all(batches.map(({ ready }) => ready()));
-  let answers: Came[] = [];
-  const oursMs = await timed(async () => (answers = await Promise.all(sends.map((send) => send()))));
-  answers.forEach(assertKept);
-  return { oursMs, spending: new Map() };
-}
-
-async function keepOneByOne(bare: BareInsert, kept: KeptBatch[]): Promise<void> {
-  for (const batch of kept) await bare.keep(batch);
-}
-
-async function keepAllAtOnce(bare: BareInsert, kept: KeptBatch[]): Promise<void> {
-  await Promise.all(kept.map((batch) => bare.keep(batch)));
+  let came: Came[] = [];
+  const oursMs = await timed(async () => (came = await Promise.all(sends.map((send) => send()))));
+  came.forEach(assertKept);
+  const kept = await Promise.all(batches.map((batch) => readKept(crew, bare, batch)));
+  return { oursMs, bareMs: await timed(() => Promise.all(kept.map((batch) => bare.keep(batch)))) };
 }
 
 function assertKept(came: Came): void {

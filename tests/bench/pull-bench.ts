@@ -8,7 +8,7 @@ import { SYNC_BODY_BYTES_MAX, syncRequestSchema, type SyncAnswer } from '#shared
 import type { Sender } from '#tests/worlds/sender.ts';
 import { startServer } from '#tests/worlds/server.ts';
 import { bodyOf, entryOps, makeCrew, postSync, type Crew } from './crew.ts';
-import { median, timed, type Finding } from './measuring.ts';
+import { timed, type Finding, type Pair } from './measuring.ts';
 import { answerIn, post, type Came } from './wire.ts';
 
 const ROWS = 4000;
@@ -39,15 +39,14 @@ export async function benchPull(): Promise<Finding> {
 
 async function comparePulls(crew: Crew, pages: PageAsked[]): Promise<Finding> {
   const memory = await serveFromMemory(pages.map(({ answer }) => answer));
-  const oursMs: number[] = [];
-  const bareMs: number[] = [];
+  const pairs: Pair[] = [];
   for (let round = 0; round < WARM_UPS + ROUNDS; round += 1) {
-    oursMs.push(await timed(() => pullThrough(pages, (body) => postSync(crew, crew.foreman, body))));
-    bareMs.push(await timed(() => pullThrough(pages, (body, page) => post(`${memory.url}/api/sync/${page}`, 'any', body))));
+    const oursMs = await timed(() => pullThrough(pages, (body) => postSync(crew, crew.foreman, body)));
+    const bareMs = await timed(() => pullThrough(pages, (body, page) => post(`${memory.url}/api/sync/${page}`, 'any', body)));
+    pairs.push({ oursMs, bareMs });
   }
   await memory.close();
-  const what = `fresh pull of ${ROWS} rows, ${PAGE_ROWS} a page`;
-  return { what, bareMs: median(bareMs.slice(WARM_UPS)), oursMs: median(oursMs.slice(WARM_UPS)), goal: GOAL };
+  return { what: `fresh pull of ${ROWS} rows, ${PAGE_ROWS} a page`, pairs: pairs.slice(WARM_UPS), goal: GOAL };
 }
 
 async function fill(crew: Crew): Promise<void> {

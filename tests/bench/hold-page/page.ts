@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { browserWorld } from '#src/replica/browser-world.ts';
 import { openReplica, type LiveReplica } from '#src/replica/live-replica.ts';
+import type { Pair } from '#tests/bench/measuring.ts';
 
 z.config({ jitless: true });
 
@@ -16,15 +17,9 @@ export interface HoldOrder {
   sendEvery: number;
 }
 
-/** Each round's times, in milliseconds. */
-export interface HoldTimes {
-  oursMs: number[];
-  bareMs: number[];
-}
-
 declare global {
   interface Window {
-    timeHolds: (order: HoldOrder) => Promise<HoldTimes>;
+    timeHolds: (order: HoldOrder) => Promise<Pair[]>;
   }
 }
 
@@ -32,7 +27,7 @@ declare global {
 window.timeHolds = async ({ entry, warmUps, rounds, sendEvery, ...who }) => {
   const replica = await openSynced(who);
   const database = await openBare();
-  const times: HoldTimes = { oursMs: [], bareMs: [] };
+  const pairs: Pair[] = [];
   for (let round = 0; round < warmUps + rounds; round += 1) {
     if (round % sendEvery === 0) await send(replica);
     const data = { ...entry, entryId: replica.newId() };
@@ -41,12 +36,9 @@ window.timeHolds = async ({ entry, warmUps, rounds, sendEvery, ...who }) => {
     const oursMs = performance.now() - startedMs;
     startedMs = performance.now();
     await put(database, op.at, { op, heldSince: new Date().toISOString() });
-    const bareMs = performance.now() - startedMs;
-    if (round < warmUps) continue;
-    times.oursMs.push(oursMs);
-    times.bareMs.push(bareMs);
+    pairs.push({ oursMs, bareMs: performance.now() - startedMs });
   }
-  return times;
+  return pairs.slice(warmUps);
 };
 
 async function openSynced(who: Pick<HoldOrder, 'email' | 'password' | 'shopId'>): Promise<LiveReplica> {
