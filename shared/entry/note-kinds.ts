@@ -1,8 +1,9 @@
 import type { z } from 'zod';
 import { movedFields, type Moved } from '../stage/moved.ts';
-import { isCrewOrForeman, type AnyOpKind, type OpKind } from '../sync/op-kind.ts';
+import { isCrewOrForeman, type AnyOpKind, type OpKind, type RowLookup } from '../sync/op-kind.ts';
+import type { Op } from '../sync/op.ts';
 import { rowKinds } from '../sync/row-kinds.ts';
-import { madeAt, madeRow, type Ref } from '../sync/row.ts';
+import { madeAt, madeRow, type Facts, type Ref } from '../sync/row.ts';
 import { placedRefs, withEntry, type Follower, type FollowerRow } from './follow.ts';
 
 interface NoteKindsOf<Data extends object, Set extends Moved & { findingId?: string | null }> {
@@ -56,9 +57,20 @@ export function noteKinds<Data extends Placed, Set extends Moved & { findingId?:
     mayStrike: isCrewOrForeman,
   }).map((kind) => ({
     ...kind,
-    reduce: (...args: Parameters<typeof kind.reduce>) =>
-      withEntry(kind.reduce(...args) as FollowerRow, args[3]),
+    reduce: (row: FollowerRow, op: Op<Amended>, ...rest: [Facts, RowLookup]) =>
+      kind.reduce(row, row.entryId ? withoutMove(op) : op, ...rest),
   }));
 
   return [make, ...changes];
+}
+
+interface Amended {
+  set?: Moved;
+}
+
+// what belongs to an entry lies where the entry lies: that it be elsewhere is no value that could stand or ask to
+function withoutMove(op: Op<Amended>): Op<Amended> {
+  if (!op.data.set) return op;
+  const { boatId: _boatId, stageId: _stageId, ...set } = op.data.set;
+  return { ...op, data: { ...op.data, set } };
 }

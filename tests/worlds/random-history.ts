@@ -28,6 +28,7 @@ class History {
     stage: [] as string[],
     task: [] as string[],
     entry: [] as string[],
+    sound: [] as string[],
     item: [] as string[],
   };
   readonly opIds: string[] = [];
@@ -41,7 +42,7 @@ class History {
     // the last is a tablet that two share
     const enrolled = [[0], [1], [2], [3], [4, 0]];
     this.phones = enrolled.map((indexes) => shop.phone(...indexes.map((index) => people[index]!)));
-    for (const kind of ['boat', 'stage', 'task', 'entry', 'item'] as const)
+    for (const kind of ['boat', 'stage', 'task', 'entry', 'sound', 'item'] as const)
       this.ids[kind].push(shop.newId(), shop.newId());
   }
 
@@ -157,6 +158,23 @@ const ACTS = {
     const set = history.pick(ENTRY_SETS, step.c)(history, step);
     history.does(step, 'entry.amend', { entryId: history.pick(history.ids.entry, step.a), set, why: 'so' });
   },
+  note: (history, step) => {
+    const [boatId, entryId] = [
+      history.pick(history.ids.boat, step.b),
+      history.pick(history.ids.entry, step.c),
+    ];
+    const said = { place: { side: 'port' }, known: 'probed', text: `sound ${step.b}` };
+    const soundId = history.fresh('sound', step.a);
+    history.does(step, 'sound.note', { soundId, boatId, ...said, ...(step.c % 4 ? { entryId } : {}) });
+  },
+  amendNote: (history, step) => {
+    const moved =
+      step.c % 3
+        ? { stageId: history.pick(history.ids.stage, step.b) }
+        : { boatId: history.pick(history.ids.boat, step.b) };
+    const set = step.c % 2 ? { text: `sound ${step.b}` } : moved;
+    history.does(step, 'sound.amend', { soundId: history.pick(history.ids.sound, step.a), set });
+  },
   strike: (history, step) =>
     history.does(step, 'entry.strike', {
       entryId: history.pick(history.ids.entry, step.a),
@@ -221,6 +239,8 @@ const ACTS = {
 const WEIGHTS: Partial<Record<keyof typeof ACTS, number>> = {
   amend: 8,
   write: 4,
+  note: 2,
+  amendNote: 2,
   send: 6,
   hear: 2,
   mark: 3,

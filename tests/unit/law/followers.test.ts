@@ -99,6 +99,34 @@ describe('an entry that is moved', () => {
   });
 });
 
+describe('what is noted with an entry', () => {
+  it('is amended without a word of the entry', async () => {
+    const one = photo();
+    await desk.says('photo.attach', one);
+    const set = { caption: 'port side', boatId: otherId };
+    expect(await desk.says('photo.amend', { photoId: one.photoId, set })).toMatchObject({ outcome: 'kept' });
+    expect(shop.row('photo', one.photoId)).toMatchObject({ caption: 'port side', boatId, stageId });
+    expect(await desk.says('photo.strike', { photoId: one.photoId, why: 'blurred' })).toMatchObject({
+      outcome: 'kept',
+    });
+  });
+
+  it('lies where the entry lies whichever is said first, that it moves or that its entry does', async () => {
+    const photos = [photo(), photo()];
+    for (const one of photos) desk.does('photo.attach', one);
+    await desk.sends();
+    const moves = ({ photoId }: { photoId: string }) =>
+      desk.does('photo.amend', { photoId, set: { boatId, stageId } });
+    moves(photos[0]!);
+    desk.does('entry.amend', move());
+    moves(photos[1]!);
+    await desk.sends();
+    for (const { photoId } of photos)
+      expect(shop.row('photo', photoId)).toMatchObject({ boatId: otherId, stageId: null });
+    expect(shop.looseEnds()).toEqual([]);
+  });
+});
+
 it('a photo of an entry that is not here waits for it', async () => {
   const early = { ...photo(), entryId: shop.newId() };
   expect(await desk.says('photo.attach', early)).toMatchObject({ reason: 'no-such-row' });
