@@ -23,7 +23,7 @@ export function readWarnings(sync: SyncState, here: Here): Warning[] {
 function clockWarning({ clockAheadMs }: SyncState, { device }: Here): Warning[] {
   if (clockAheadMs === null) return [];
   const way = clockAheadMs > 0 ? 'ahead' : 'behind';
-  const words = `The clock of this ${device} is ${spanWords(Math.abs(clockAheadMs))} ${way}. Set it to set itself; until then the record goes by the server's.`;
+  const words = `The clock of this ${device} is ${spanWords(Math.abs(clockAheadMs))} ${way}. Let it set its time by itself; meanwhile the record goes by the server's clock.`;
   return [{ kind: 'clock', words }];
 }
 

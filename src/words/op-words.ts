@@ -46,6 +46,18 @@ const WHAT: Record<string, string> = {
   'boat.amend': 'Change of a boat',
   'boat.strike': 'A boat struck',
   'boat.restore': 'A boat restored',
+  'finding.note': 'Finding',
+  'finding.amend': 'Change of a finding',
+  'finding.strike': 'A finding struck',
+  'finding.restore': 'A finding restored',
+  'sound.note': 'Found sound',
+  'sound.amend': 'Change of what was found sound',
+  'sound.strike': 'What was found sound, struck',
+  'sound.restore': 'What was found sound, restored',
+  'photo.attach': 'Photograph',
+  'photo.amend': 'Change of a photograph',
+  'photo.strike': 'A photograph struck',
+  'photo.restore': 'A photograph restored',
   'setAside.admit': 'Something set aside, admitted',
   'setAside.dismiss': 'Something set aside, dismissed',
 };
@@ -92,9 +104,7 @@ function rowTitle(view: View, data: Data): string {
   const task = typeof data['taskId'] === 'string' && view.find('task', data['taskId']);
   if (task) return openingWords(task.title);
   const entry = typeof data['entryId'] === 'string' && view.find('entry', data['entryId']);
-  if (entry) return openingWords(entry.text);
-  const stage = typeof data['stageId'] === 'string' && view.find('stage', data['stageId']);
-  return stage ? stage.name : '';
+  return entry ? openingWords(entry.text) : '';
 }
 
 function hoursWords(view: View, hours: unknown): string {

@@ -5,7 +5,7 @@ import { DayHead } from '#src/components/day-head.tsx';
 import { DayTicks } from '#src/components/day-ticks.tsx';
 import { Empty } from '#src/components/empty.tsx';
 import { Hours } from '#src/components/hours.tsx';
-import { Key } from '#src/components/key.tsx';
+import { Key, KeyLink } from '#src/components/key.tsx';
 import { Page } from '#src/components/page.tsx';
 import { Planks, Ribband } from '#src/components/ribband.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
@@ -85,8 +85,9 @@ function PersonLink() {
 }
 
 function NoBoat() {
+  const isForeman = useRead(['is foreman'], (view) => view.me.roles.includes('foreman'));
   return (
-    <Empty>
+    <Empty action={isForeman && <KeyLink to="/boats">Add a boat</KeyLink>}>
       No boat is here yet. Once the foreman has added one and this device has heard of it, you can log on it.
     </Empty>
   );

@@ -2,10 +2,11 @@ import { useMutation } from '@tanstack/react-query';
 import { useState, type FormEvent } from 'react';
 import { Link } from 'react-router-dom';
 import { Choice } from '#src/components/choice.tsx';
-import { Key } from '#src/components/key.tsx';
+import { Key, KeyLink } from '#src/components/key.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { TextField } from '#src/components/text-field.tsx';
 import { useReplica } from '#src/replica/hooks.tsx';
+import type { Replica } from '#src/replica/replica.ts';
 import type { SignInRequest, SignInResult } from '#src/replica/session.ts';
 import { firstLabel, keepLabel } from '#src/routes/sign-in/device-label.ts';
 import { deviceWord } from '#src/shell/device-words.ts';
@@ -18,9 +19,10 @@ interface SignInFormProps {
 /** E-mail, password, and what this device is called; the shop too where the e-mail is in several. */
 export function SignInForm({ onStart, onSignedIn }: SignInFormProps) {
   const replica = useReplica();
-  const [email, setEmail] = useState('');
+  const known = knownHere(replica);
+  const [email, setEmail] = useState(known?.email ?? '');
   const [password, setPassword] = useState('');
-  const [label, setLabel] = useState(firstLabel);
+  const [label, setLabel] = useState(known?.label ?? firstLabel);
   const [shopId, setShopId] = useState<string | null>(null);
   const [isAsked, setAsked] = useState(false);
   const signingIn = useMutation({
@@ -47,7 +49,11 @@ export function SignInForm({ onStart, onSignedIn }: SignInFormProps) {
     <form className="grid gap-5" onSubmit={submit} noValidate>
       <div>
         <h1 className="text-[34px] leading-tight font-bold">Ribband</h1>
-        <p className="text-slate">The day record of the shop. Sign in once; then it opens without signal.</p>
+        <p className="text-slate">
+          {known
+            ? `${known.name}, the server asks for your password again. What is held here stays.`
+            : 'The day record of the shop. Sign in once; then it opens without signal.'}
+        </p>
       </div>
       <TextField
         label="E-mail"
@@ -86,17 +92,35 @@ export function SignInForm({ onStart, onSignedIn }: SignInFormProps) {
       <Key kind="main" type="submit" disabled={signingIn.isPending}>
         {signingIn.isPending ? 'Signing in …' : 'Sign in'}
       </Key>
-      <p>
-        A new server without a shop?{' '}
-        <Link
-          to="/first-run"
-          className="inline-flex min-h-key items-center text-verdigris underline decoration-2 underline-offset-4"
-        >
-          Set the shop up
-        </Link>
-      </p>
+      {known ? <KeyLink to="/">Later: go on without sending</KeyLink> : <NewShopLink />}
     </form>
   );
+}
+
+function NewShopLink() {
+  return (
+    <p>
+      A new server without a shop?{' '}
+      <Link
+        to="/first-run"
+        className="inline-flex min-h-key items-center text-verdigris underline decoration-2 underline-offset-4"
+      >
+        Set the shop up
+      </Link>
+    </p>
+  );
+}
+
+/** Who is signed in on this device already, as far as their rows tell. */
+function knownHere(replica: Replica): { name: string; email: string; label: string | undefined } | null {
+  const me = replica.session.current();
+  if (!me) return null;
+  const view = replica.view();
+  return {
+    name: me.name,
+    email: view.find('person', me.personId)?.email ?? '',
+    label: view.find('device', me.deviceId)?.label,
+  };
 }
 
 function Problem({ result, error }: { result: SignInResult | undefined; error: Error | null }) {

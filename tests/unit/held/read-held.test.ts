@@ -82,7 +82,7 @@ describe('what a device holds', () => {
     expect([...opKinds.keys()].filter((kind) => words(kind).startsWith('Something this version'))).toEqual(
       [],
     );
-    expect(words('finding.note')).toBe('Something this version does not know (finding.note)');
+    expect(words('tide.turn')).toBe('Something this version does not know (tide.turn)');
   });
 });
 

@@ -71,7 +71,12 @@ export function EntryForm({ where, logFor, onMove, onLogged }: EntryFormProps) {
         </KeyRack>
       }
     >
-      <form className="grid gap-5 p-4 pb-8 md:p-6" onSubmit={(event) => event.preventDefault()}>
+      {/* an emptied form is another one: what its fields remember by themselves goes too */}
+      <form
+        key={draft.entryId}
+        className="grid gap-5 p-4 pb-8 md:p-6"
+        onSubmit={(event) => event.preventDefault()}
+      >
         {form.restoredAt && (
           <p className="text-slate">
             Kept since {momentWords(form.restoredAt, timeZone, shown.today)}, as you left it.
@@ -117,7 +122,8 @@ export function EntryForm({ where, logFor, onMove, onLogged }: EntryFormProps) {
         where={here}
         onClose={() => setMoving(false)}
         onChoose={(chosen) => {
-          change(chosen);
+          // ticks are of the boat that was left
+          change(chosen.boatId === draft.boatId ? chosen : { ...chosen, ticked: [] });
           onMove(chosen);
           setMoving(false);
         }}
