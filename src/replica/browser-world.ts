@@ -26,7 +26,9 @@ export function browserWorld(appVersion: string, onBlocked: () => void): World {
 }
 
 function lockManager(locks: LockManager): Locks {
-  return { request: async <T>(name: string, work: () => Promise<T>) => (await locks.request(name, work)) as T };
+  return {
+    request: async <T>(name: string, work: () => Promise<T>) => (await locks.request(name, work)) as T,
+  };
 }
 
 function broadcastChannel(): Channel {

@@ -27,7 +27,6 @@ function verbOf(kind: string): Verb {
   return verb === 'amend' || verb === 'strike' || verb === 'restore' ? verb : null;
 }
 
-
 function whatIsWrong(kind: string, data: Data): string {
   const known = opKinds.get(kind);
   if (!known) return `This version of the app does not know how to write ‘${kind}’.`;
@@ -38,7 +37,9 @@ function whatIsWrong(kind: string, data: Data): string {
 
 function refuseUnkeepable(data: Data): void {
   if (isKeepableText(data)) return;
-  const isTooLong = Object.values(data).some((value) => typeof value === 'string' && value.length > TEXT_UNITS_MAX);
+  const isTooLong = Object.values(data).some(
+    (value) => typeof value === 'string' && value.length > TEXT_UNITS_MAX,
+  );
   throw new HoldError(
     isTooLong
       ? `This is longer than ${TEXT_UNITS_MAX.toLocaleString('en')} characters. Divide it in two.`
@@ -50,7 +51,8 @@ function refuseUnkeepable(data: Data): void {
 export function readHoldData(data: object): Data {
   const plain = JSON.parse(JSON.stringify(data)) as Data;
   refuseUnkeepable(plain);
-  if (JSON.stringify(plain).length > OP_UNITS_MAX) throw new HoldError('This is too long to be sent. Divide it in two.');
+  if (JSON.stringify(plain).length > OP_UNITS_MAX)
+    throw new HoldError('This is too long to be sent. Divide it in two.');
   return plain;
 }
 
@@ -65,7 +67,12 @@ interface Making {
  * The op that a person's deed is: what it replaces is what `view` shows of the fields and what unsent ops named there;
  * a strike sees all that stands. Throws a HoldError where this version could not read it, or has no such row.
  */
-export function composeOp(kind: string, data: Data, options: HoldOptions, { id, at, personId, view }: Making): Op {
+export function composeOp(
+  kind: string,
+  data: Data,
+  options: HoldOptions,
+  { id, at, personId, view }: Making,
+): Op {
   const verb = verbOf(kind);
   const draft: Op = { id, v: opKinds.get(kind)?.v ?? 1, kind, at, personId, over: {}, data };
   const understood = understand(verb === 'strike' ? { ...draft, data: { saw: [], ...data } } : draft);
@@ -80,6 +87,7 @@ export function composeOp(kind: string, data: Data, options: HoldOptions, { id, 
 
 function changedRow({ changes }: Understood, { rowId }: HoldOptions, view: View): Row {
   const row = view.find(changes.entity, rowId ?? changes.id) as Row | undefined;
-  if (!row) throw new HoldError('What this changes is not on this device yet. Try again once it has been heard.');
+  if (!row)
+    throw new HoldError('What this changes is not on this device yet. Try again once it has been heard.');
   return row;
 }

@@ -28,7 +28,12 @@ export function latestBelieved(stamps: Iterable<Stamp>, nowMs: number): Stamp | 
  * The clock once `latest` has been heard at `nowMs` (the server's time). A clock that had run ahead comes back, but not
  * while ops with its stamps are held.
  */
-export function clockAfterAnswer(clock: Clock | null, latest: Stamp | null, nowMs: number, areOpsHeld: boolean): Clock | null {
+export function clockAfterAnswer(
+  clock: Clock | null,
+  latest: Stamp | null,
+  nowMs: number,
+  areOpsHeld: boolean,
+): Clock | null {
   const isRunaway = clock !== null && clock.ms > nowMs + STAMP_AHEAD_MAX_MS && !areOpsHeld;
   const last = isRunaway ? null : clock;
   const heard = parseStamp(latest);

@@ -38,8 +38,6 @@ export interface Answered {
   /** how far the server is backed up, as an ISO time, where it says so */
   backedUpTo: string | null;
   serverTime: string;
-  /** a restored server's: sent ops answered from this ISO time on go again */
-  replayFrom: string | null;
 }
 
 type Keyed<T> = { key: string } & T;
@@ -112,7 +110,8 @@ export class DeviceStore {
     const held = await this.database.transact(['about', 'outbox'], 'readwrite', async (transaction) => {
       const about = transaction.objectStore('about');
       const state = readState(await promisifyRequest<unknown>(about.get('state')));
-      if (state.outboxVersion !== this.state.outboxVersion || state.rowsVersion !== this.state.rowsVersion) return null;
+      if (state.outboxVersion !== this.state.outboxVersion || state.rowsVersion !== this.state.rowsVersion)
+        return null;
       const clock = tick(this.latestClock(state.clock), this.nowMs());
       const key = formatStamp(clock, this.deviceId);
       const record = { op: compose(key), heldSince: new Date(this.nowMs()).toISOString() };
@@ -130,7 +129,25 @@ export class DeviceStore {
   /** Moves what was answered to the sent list, sets the clock, and forgets what the server has backed up, as one. */
   accept(answered: Answered): Promise<void> {
     return this.turns.take(async () => {
-      await this.database.transact(['about', 'outbox', 'sent'], 'readwrite', (transaction) => this.move(answered, transaction));
+      await this.database.transact(['about', 'outbox', 'sent'], 'readwrite', (transaction) =>
+        this.move(answered, transaction),
+      );
+      await this.readAgain();
+    });
+  }
+
+  /** Puts all kept sent ops into the outbox again, in their old order. */
+  sendAgain(): Promise<void> {
+    return this.turns.take(async () => {
+      await this.database.transact(['about', 'outbox', 'sent'], 'readwrite', async (transaction) => {
+        const about = transaction.objectStore('about');
+        const state = readState(await promisifyRequest<unknown>(about.get('state')));
+        for (const { key, op, heldSince } of this.sent) {
+          transaction.objectStore('outbox').put({ op, heldSince }, key);
+          transaction.objectStore('sent').delete(key);
+        }
+        about.put({ ...state, outboxVersion: state.outboxVersion + 1 }, 'state');
+      });
       await this.readAgain();
     });
   }
@@ -140,7 +157,7 @@ export class DeviceStore {
     const outbox = transaction.objectStore('outbox');
     const sent = transaction.objectStore('sent');
     const state = readState(await promisifyRequest<unknown>(about.get('state')));
-    const hasMoved = this.moveSent(answered, outbox, sent);
+    const hasChanged = this.changeSent(answered, sent);
     for (const { key, sent: record } of answered.ops) {
       outbox.delete(key);
       sent.put({ ...record, inRowsOf: [answered.personId] }, record.orderedAt);
@@ -148,8 +165,11 @@ export class DeviceStore {
     const heldCount = await promisifyRequest(outbox.count());
     const offsetMs = answered.offsetMs ?? state.offsetMs;
     const clock = clockAfterAnswer(state.clock, answered.latest, this.world.now() + offsetMs, heldCount > 0);
-    const outboxVersion = state.outboxVersion + (hasMoved || answered.ops.length > 0 ? 1 : 0);
-    about.put({ clock, offsetMs, outboxVersion, rowsVersion: state.rowsVersion + (answered.hasNewRows ? 1 : 0) }, 'state');
+    const outboxVersion = state.outboxVersion + (hasChanged || answered.ops.length > 0 ? 1 : 0);
+    about.put(
+      { clock, offsetMs, outboxVersion, rowsVersion: state.rowsVersion + (answered.hasNewRows ? 1 : 0) },
+      'state',
+    );
   }
 
   async readSession(): Promise<SessionRecord> {
@@ -166,25 +186,16 @@ export class DeviceStore {
     return this.sent.filter(({ inRowsOf }) => !inRowsOf.includes(personId)).map(({ key }) => key);
   }
 
-  // what is on the sent list already: to be sent again, no longer needed, or heard by one more
-  private moveSent(answered: Answered, outbox: IDBObjectStore, sent: IDBObjectStore): boolean {
-    const { personId, heard, replayFrom } = answered;
-    const newlyHeard = new Set(heard);
-    let hasMoved = false;
-    for (const { key, ...record } of this.sent) {
-      if (replayFrom !== null && record.answeredAt >= replayFrom) {
-        outbox.put({ op: record.op, heldSince: record.heldSince }, key);
-        sent.delete(key);
-      } else if (isForgettable(record, answered)) {
-        sent.delete(key);
-      } else if (newlyHeard.has(key)) {
-        sent.put({ ...record, inRowsOf: [...record.inRowsOf, personId] }, key);
-      } else {
-        continue;
-      }
-      hasMoved = true;
+  // what is on the sent list already: no longer needed, or heard by one more
+  private changeSent(answered: Answered, sent: IDBObjectStore): boolean {
+    const newlyHeard = new Set(answered.heard);
+    const forgettable = this.sent.filter((record) => isForgettable(record, answered));
+    const heard = this.sent.filter((record) => newlyHeard.has(record.key) && !forgettable.includes(record));
+    for (const { key } of forgettable) sent.delete(key);
+    for (const { key, ...record } of heard) {
+      sent.put({ ...record, inRowsOf: [...record.inRowsOf, answered.personId] }, key);
     }
-    return hasMoved;
+    return forgettable.length + heard.length > 0;
   }
 
   private async readLists(): Promise<void> {
@@ -203,8 +214,12 @@ export class DeviceStore {
 }
 
 // what its author has not heard is kept for them to see, but not for ever
-function isForgettable({ answeredAt, inRowsOf, op }: SentRecord, { backedUpTo, serverTime }: Answered): boolean {
-  if (Date.parse(answeredAt) <= Date.parse(serverTime) - SENT_KEPT_MS) return backedUpTo === null || answeredAt <= backedUpTo;
+function isForgettable(
+  { answeredAt, inRowsOf, op }: SentRecord,
+  { backedUpTo, serverTime }: Answered,
+): boolean {
+  if (Date.parse(answeredAt) <= Date.parse(serverTime) - SENT_KEPT_MS)
+    return backedUpTo === null || answeredAt <= backedUpTo;
   return backedUpTo !== null && answeredAt <= backedUpTo && inRowsOf.includes(op.personId);
 }
 

@@ -9,19 +9,24 @@ export class Gathering {
   readonly stamps = new Set<Stamp>();
   cursor: string | null;
   isAll: boolean;
-  replayFrom: string | null = null;
+  isReplayAsked = false;
 
   constructor(cursor: string | null) {
     this.cursor = cursor;
     this.isAll = cursor === null;
   }
 
-  add({ rows, cursor, reset, replayFrom }: Pick<SyncAnswer, 'rows' | 'cursor' | 'reset' | 'replayFrom'>): void {
+  add({
+    rows,
+    cursor,
+    reset,
+    replayFrom,
+  }: Pick<SyncAnswer, 'rows' | 'cursor' | 'reset' | 'replayFrom'>): void {
     if (reset) {
       this.rows.clear();
       this.isAll = true;
     }
-    this.replayFrom ??= replayFrom;
+    this.isReplayAsked ||= replayFrom !== null;
     this.cursor = cursor;
     for (const row of rows) this.addRow(row);
   }

@@ -23,7 +23,7 @@ export async function hearHails(
 async function readEvents(body: ReadableStream<Uint8Array>, onHail: () => void): Promise<void> {
   const decoder = new TextDecoder();
   let rest = '';
-  for (const reader = body.getReader(); ; ) {
+  for (const reader = body.getReader(); ;) {
     const { done, value } = await reader.read();
     if (done) return;
     const events = (rest + decoder.decode(value, { stream: true }).replaceAll('\r\n', '\n')).split('\n\n');

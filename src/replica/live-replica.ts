@@ -17,8 +17,11 @@ import type { World } from './world.ts';
 
 const NOTHING_REMEMBERED: Remembered = { boatId: null, stageId: null };
 
-/** What a view was made of; while all of it is the same, so is the view. */
-type MadeOf = [Me, PersonStore['rows'], DeviceStore['outbox'], DeviceStore['sent'], string];
+/** What a view says its time by, in milliseconds. */
+const MINUTE_MS = 60_000;
+
+/** What a view was made of; while all of it is the same, so is the view. The last two are its day and minute. */
+type MadeOf = [Me, PersonStore['rows'], DeviceStore['outbox'], DeviceStore['sent'], string, number];
 
 /** Opens the replica of whoever is signed in on this device, with signal or without. */
 export async function openReplica(world: World, seal: Seal = unsealed): Promise<LiveReplica> {
@@ -63,7 +66,7 @@ export class LiveReplica implements Replica {
     });
     this.syncer = new Syncer({ world, device, fetchAs: (...request) => this.session.fetchAs(...request) });
     device.onNewRows = async () => this.person?.catchUp();
-    this.leaveChannel = world.channel.listen((about) => void this.hearTab(about));
+    this.leaveChannel = world.channel.listen((about) => void this.hearTab(about).catch(world.report));
   }
 
   close(): void {
@@ -81,7 +84,8 @@ export class LiveReplica implements Replica {
     const { device, person, session } = this;
     const me = session.current();
     if (!me || !person) throw new Error('Nobody is signed in.');
-    const madeOf: MadeOf = [me, person.rows, device.outbox, device.sent, this.today()];
+    const minute = Math.floor(device.nowMs() / MINUTE_MS);
+    const madeOf: MadeOf = [me, person.rows, device.outbox, device.sent, this.today(), minute];
     if (!this.seen?.madeOf.every((part, index) => part === madeOf[index])) {
       this.seen = { view: this.makeView(me, person), madeOf };
     }
@@ -115,7 +119,7 @@ export class LiveReplica implements Replica {
       if (op) {
         this.changed();
         this.world.channel.post('record');
-        void this.askToKeep();
+        void this.askToKeep().catch(this.world.report);
         return op;
       }
       await this.device.catchUp();
@@ -141,7 +145,10 @@ export class LiveReplica implements Replica {
       this.tried(attemptFrom(result));
       return result;
     } catch (error) {
-      this.tried({ phase: 'failed', words: 'Something went wrong on this device. What is held is untouched.' });
+      this.tried({
+        phase: 'failed',
+        words: 'Something went wrong on this device. What is held is untouched.',
+      });
       throw error;
     } finally {
       world.channel.post('record');
@@ -155,14 +162,26 @@ export class LiveReplica implements Replica {
 
   readonly syncState = (): SyncState => {
     const { device, person, session, attempt, storage } = this;
-    const state = composeSyncState({ device, person, attempt, storage, needsSignIn: session.record.needsSignIn });
+    const state = composeSyncState({
+      device,
+      person,
+      attempt,
+      storage,
+      needsSignIn: session.record.needsSignIn,
+    });
     if (JSON.stringify(state) !== JSON.stringify(this.lastState)) this.lastState = state;
     return this.lastState!;
   };
 
   readonly sent = (): SentItem[] =>
     this.device.sent
-      .map(({ op, outcome, reason, answeredAt }) => ({ op, personId: op.personId, outcome, ...(reason ? { reason } : {}), answeredAt }))
+      .map(({ op, outcome, reason, answeredAt }) => ({
+        op,
+        personId: op.personId,
+        outcome,
+        ...(reason ? { reason } : {}),
+        answeredAt,
+      }))
       .reverse();
 
   readonly draft: Replica['draft'] = {
@@ -241,5 +260,7 @@ function attemptFrom(result: SyncResult): Attempt {
 
 function asHoldError(error: unknown): never {
   const isFull = error instanceof DOMException && error.name === 'QuotaExceededError';
-  throw isFull ? new HoldError('This device has no room left, so this could not be kept. Free some room and try again.') : error;
+  throw isFull
+    ? new HoldError('This device has no room left, so this could not be kept. Free some room and try again.')
+    : error;
 }

@@ -78,7 +78,9 @@ export class PersonStore {
   private async write({ rows, isAll, cursor, heardAt, pullsBefore }: Pulled): Promise<boolean> {
     const sealedHeard = await this.seal.seal({ cursor, heardAt });
     const sealedRows = await Promise.all(
-      [...rows].map(async ([key, { entity, row }]) => [key, row && (await this.seal.seal({ entity, row }))] as const),
+      [...rows].map(
+        async ([key, { entity, row }]) => [key, row && (await this.seal.seal({ entity, row }))] as const,
+      ),
     );
     const isKept = await this.database.transact(['rows', 'about'], 'readwrite', async (transaction) => {
       const about = transaction.objectStore('about');
@@ -99,7 +101,10 @@ export class PersonStore {
     return true;
   }
 
-  private withPulled(before: Iterable<[string, { entity: string; row: object }]>, pulled: Pulled['rows']): Rows {
+  private withPulled(
+    before: Iterable<[string, { entity: string; row: object }]>,
+    pulled: Pulled['rows'],
+  ): Rows {
     const next = new Map(before);
     for (const [key, { entity, row }] of pulled) {
       if (row && isReadableRow(entity, row)) next.set(key, { entity, row });
@@ -139,7 +144,9 @@ export class PersonStore {
   writeRemembered(remembered: Partial<Remembered>): Promise<void> {
     this.remembered = { ...this.remembered, ...remembered };
     const next = this.remembered;
-    return this.turns.take(async () => set('remembered', await this.seal.seal(next), this.database.store('about')));
+    return this.turns.take(async () =>
+      set('remembered', await this.seal.seal(next), this.database.store('about')),
+    );
   }
 
   /** Reads the drafts as they are kept; another tab may have changed them. */
@@ -184,10 +191,17 @@ export class PersonStore {
     }
   }
 
-  private async openAll<T>(store: string, schema: z.ZodType<T>): Promise<{ opened: [string, T][]; areSomeBroken: boolean }> {
+  private async openAll<T>(
+    store: string,
+    schema: z.ZodType<T>,
+  ): Promise<{ opened: [string, T][]; areSomeBroken: boolean }> {
     const stored = await readEntries(this.database, store);
-    const values = await Promise.all(stored.map(async ([key, value]) => [key, value, await this.openStored(value, schema)] as const));
-    const broken = values.filter(([, , read]) => read === null).map(([key, value]): [string, unknown] => [key, value]);
+    const values = await Promise.all(
+      stored.map(async ([key, value]) => [key, value, await this.openStored(value, schema)] as const),
+    );
+    const broken = values
+      .filter(([, , read]) => read === null)
+      .map(([key, value]): [string, unknown] => [key, value]);
     if (broken.length > 0) await putAside(this.database, store, broken);
     const opened = values.flatMap(([key, , read]): [string, T][] => (read === null ? [] : [[key, read]]));
     return { opened, areSomeBroken: broken.length > 0 };

@@ -11,7 +11,9 @@ const madeShape = {
   stamps: z.record(z.string(), z.string()),
   struck: z.looseObject({}).nullable(),
   // owners get rows without them
-  statements: z.array(z.looseObject({ field: z.string(), opId: z.string(), over: z.array(z.string()) })).optional(),
+  statements: z
+    .array(z.looseObject({ field: z.string(), opId: z.string(), over: z.array(z.string()) }))
+    .optional(),
 };
 const itemsSchema = z.array(z.looseObject({ id: z.string(), personId: z.string(), opId: z.string() }));
 
@@ -21,7 +23,13 @@ const schemas: Record<string, z.ZodType> = {
   device: deviceRowSchema,
   boat: z.looseObject({ ...madeShape, name: z.string() }),
   stage: z.looseObject({ ...madeShape, boatId: z.string(), name: z.string(), marks: itemsSchema.optional() }),
-  task: z.looseObject({ ...madeShape, boatId: z.string(), title: z.string(), marks: itemsSchema, starts: itemsSchema }),
+  task: z.looseObject({
+    ...madeShape,
+    boatId: z.string(),
+    title: z.string(),
+    marks: itemsSchema,
+    starts: itemsSchema,
+  }),
   entry: z.looseObject({
     ...madeShape,
     boatId: z.string(),
@@ -30,7 +38,11 @@ const schemas: Record<string, z.ZodType> = {
     hours: z.array(z.looseObject({ personId: z.string(), minutes: z.number() })),
     additions: itemsSchema,
   }),
-  setAside: z.looseObject({ ...madeShape, opKey: z.string(), decisions: z.array(z.looseObject({ opId: z.string() })) }),
+  setAside: z.looseObject({
+    ...madeShape,
+    opKey: z.string(),
+    decisions: z.array(z.looseObject({ opId: z.string() })),
+  }),
 };
 
 /** Whether this version of the app can show a row. The others are kept for a version that can. */

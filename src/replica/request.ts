@@ -10,7 +10,11 @@ export class TimedOut extends Error {
 }
 
 /** Runs `work` with a signal that is given up after `ms`; rejects with TimedOut then. */
-export async function inTime<T>(world: Pick<World, 'after'>, ms: number, work: (signal: AbortSignal) => Promise<T>): Promise<T> {
+export async function inTime<T>(
+  world: Pick<World, 'after'>,
+  ms: number,
+  work: (signal: AbortSignal) => Promise<T>,
+): Promise<T> {
   const controller = new AbortController();
   let giveUp = () => {};
   const late = new Promise<never>((_resolve, reject) => {

@@ -1,5 +1,10 @@
 import type { Role } from '#shared/identity/role.ts';
-import { sessionAnswerSchema, shopChoiceSchema, type SessionAnswer, type ShopChoice } from '#shared/identity/session.ts';
+import {
+  sessionAnswerSchema,
+  shopChoiceSchema,
+  type SessionAnswer,
+  type ShopChoice,
+} from '#shared/identity/session.ts';
 import { NOBODY, type SessionRecord } from './device-records.ts';
 import type { DeviceStore } from './device-store.ts';
 import { NOT_OURS, asJson, inTime, isUnreachable, readJson, wordsOf } from './request.ts';
@@ -75,9 +80,16 @@ export class LiveSession implements Session {
 
   async signIn({ email, password, label, shopId, replaces }: SignInRequest): Promise<SignInResult> {
     const { world, device } = this.dealings;
-    const body = { email, password, device: { id: device.deviceId, label, ...(replaces ? { replaces } : {}) }, ...(shopId ? { shopId } : {}) };
+    const body = {
+      email,
+      password,
+      device: { id: device.deviceId, label, ...(replaces ? { replaces } : {}) },
+      ...(shopId ? { shopId } : {}),
+    };
     try {
-      const response = await inTime(world, SIGN_IN_MAX_MS, (signal) => world.fetch('/api/session', { ...asJson(body), signal }));
+      const response = await inTime(world, SIGN_IN_MAX_MS, (signal) =>
+        world.fetch('/api/session', { ...asJson(body), signal }),
+      );
       const answer = await readJson(response.clone());
       if (response.ok) return this.welcome(sessionAnswerSchema.safeParse(answer).data);
       const choice = response.status === 409 ? shopChoiceSchema.safeParse(answer).data : undefined;
@@ -92,10 +104,14 @@ export class LiveSession implements Session {
     const { world, device } = this.dealings;
     const heldCount = device.outbox.length;
     if (heldCount > 0 && !evenWithHeldOps) {
-      return { refused: `${heldCount === 1 ? 'One thing is' : `${heldCount} things are`} not sent yet. Send first, or leave it on this device.` };
+      return {
+        refused: `${heldCount === 1 ? 'One thing is' : `${heldCount} things are`} not sent yet. Send first, or leave it on this device.`,
+      };
     }
     // without signal the server's half waits for the family to run out
-    await inTime(world, SIGN_IN_MAX_MS, (signal) => world.fetch('/api/session', { method: 'DELETE', signal })).catch(() => undefined);
+    await inTime(world, SIGN_IN_MAX_MS, (signal) =>
+      world.fetch('/api/session', { method: 'DELETE', signal }),
+    ).catch(() => undefined);
     this.tokens.clear();
     await this.keep({ ...this.record, me: null, needsSignIn: false });
     return { ok: true };
@@ -165,7 +181,10 @@ export class LiveSession implements Session {
   }
 
   private tokenFrom({ accessToken, expiresInSeconds, person }: SessionAnswer): Token {
-    const token = { text: accessToken, endsAtMs: this.dealings.world.now() + expiresInSeconds * 1000 - TOKEN_SLACK_MS };
+    const token = {
+      text: accessToken,
+      endsAtMs: this.dealings.world.now() + expiresInSeconds * 1000 - TOKEN_SLACK_MS,
+    };
     this.tokens.set(person.id, token);
     return token;
   }

@@ -46,7 +46,9 @@ export class KeptDatabase {
   /** One of the stores, for the functions of idb-keyval. */
   store(name: string): UseStore {
     return (mode, callback) =>
-      this.transact([name], mode === 'readonly' ? 'readonly' : 'readwrite', (transaction) => callback(transaction.objectStore(name)));
+      this.transact([name], mode === 'readonly' ? 'readonly' : 'readwrite', (transaction) =>
+        callback(transaction.objectStore(name)),
+      );
   }
 
   close(): void {
@@ -79,7 +81,8 @@ export class KeptDatabase {
       const request = indexedDB.open(name, VERSION);
       request.onupgradeneeded = () => {
         const database = request.result;
-        for (const store of stores) if (!database.objectStoreNames.contains(store)) database.createObjectStore(store);
+        for (const store of stores)
+          if (!database.objectStoreNames.contains(store)) database.createObjectStore(store);
       };
       request.onblocked = onBlocked;
       request.onerror = () => reject(request.error!);
@@ -101,7 +104,9 @@ export class KeptDatabase {
 function ended(transaction: IDBTransaction): Promise<void> {
   return new Promise((resolve, reject) => {
     transaction.addEventListener('complete', () => resolve());
-    transaction.addEventListener('abort', () => reject(transaction.error ?? new Error('The transaction was given up.')));
+    transaction.addEventListener('abort', () =>
+      reject(transaction.error ?? new Error('The transaction was given up.')),
+    );
   });
 }
 

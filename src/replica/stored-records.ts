@@ -34,7 +34,11 @@ export async function readEntries(database: KeptDatabase, store: string): Promis
   });
 }
 
-export async function putAside(database: KeptDatabase, store: string, broken: [string, unknown][]): Promise<void> {
+export async function putAside(
+  database: KeptDatabase,
+  store: string,
+  broken: [string, unknown][],
+): Promise<void> {
   await database.transact([store, BROKEN_STORE], 'readwrite', (transaction) => {
     for (const [key, value] of broken) {
       transaction.objectStore(BROKEN_STORE).put(value, `${store}/${key}`);

@@ -55,7 +55,8 @@ class SyncLoop {
     const { heldOps, phase } = this.replica.syncState();
     const personId = this.replica.session.current()?.personId ?? '';
     this.lastSeen = { personId, heldOps, needsSignIn: phase === 'sign-in-needed' };
-    const hasCome = personId !== '' && (personId !== before.personId || (before.needsSignIn && !this.lastSeen.needsSignIn));
+    const hasCome =
+      personId !== '' && (personId !== before.personId || (before.needsSignIn && !this.lastSeen.needsSignIn));
     if (hasCome || heldOps > before.heldOps) this.round();
   }
 
@@ -65,7 +66,9 @@ class SyncLoop {
     if (this.ending.signal.aborted || this.replica.syncState().phase === 'sign-in-needed') return;
     const settle = (isDone: boolean) => {
       this.failures = isDone ? 0 : this.failures + 1;
-      this.waitFor(isDone ? ROUND_EVERY_MS * (0.75 + this.world.random() / 2) : backOffMs(this.failures, this.world));
+      this.waitFor(
+        isDone ? ROUND_EVERY_MS * (0.75 + this.world.random() / 2) : backOffMs(this.failures, this.world),
+      );
     };
     this.replica.syncNow().then(
       ({ outcome }) => outcome !== 'sign-in-needed' && settle(outcome === 'done'),
@@ -86,7 +89,7 @@ class SyncLoop {
 
   private async listenForHails(): Promise<void> {
     const listen = async () => {
-      for (let tries = 0; !this.ending.signal.aborted; ) {
+      for (let tries = 0; !this.ending.signal.aborted;) {
         const beganMs = this.world.now();
         await this.hearOnce();
         tries = this.world.now() - beganMs > STREAM_LASTED_MS ? 1 : tries + 1;

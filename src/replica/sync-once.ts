@@ -1,4 +1,9 @@
-import { ROWS_PER_ANSWER_MAX, syncAnswerSchema, type SyncAnswer, type SyncRequest } from '#shared/sync/protocol.ts';
+import {
+  ROWS_PER_ANSWER_MAX,
+  syncAnswerSchema,
+  type SyncAnswer,
+  type SyncRequest,
+} from '#shared/sync/protocol.ts';
 import { takeBatch } from './batch.ts';
 import { latestBelieved, measureOffset } from './device-clock.ts';
 import type { Answered, DeviceStore } from './device-store.ts';
@@ -67,14 +72,23 @@ export class Syncer {
     const first = await this.ask(person.personId, this.firstRequest(batch, person.cursor));
     if (!first.heard) return first.result;
     let last = first.heard;
-    if (last.answer.outcomes.length !== batch.length) return { outcome: 'failed', words: 'The server did not answer for everything that was sent.' };
+    if (last.answer.outcomes.length !== batch.length)
+      return { outcome: 'failed', words: 'The server did not answer for everything that was sent.' };
     gathering.add(last.answer);
     while (last.answer.more) {
-      const next = await this.ask(person.personId, { deviceId: device.deviceId, ops: [], cursor: gathering.cursor });
+      const next = await this.ask(person.personId, {
+        deviceId: device.deviceId,
+        ops: [],
+        cursor: gathering.cursor,
+      });
       if (!next.heard) return next.result;
       last = { ...next.heard, ...quicker(last, next.heard) };
       gathering.add(last.answer);
     }
+    // A restored server has lost ops. All that are kept go again, not only those since the time it names: other devices
+    // may have sent since the restore, and a repeat changes nothing. This comes before the rows are kept, else a kill
+    // between the two would leave the server without them for ever.
+    if (gathering.isReplayAsked) await device.sendAgain();
     const isKept = await person.apply(gathering.pulled(last.serverTime, before.pulls));
     // another tab was faster: what it pulled is read, and the batch goes again
     if (!isKept) return { outcome: 'done', sent: 0, rows: 0 };
@@ -110,7 +124,10 @@ export class Syncer {
       ops: batch.map(({ key, op, heldSince }, index) => {
         const { outcome, reason, orderedAt } = outcomes[index]!;
         const answeredAt = first.serverTime;
-        return { key, sent: { op, heldSince, outcome, ...(reason ? { reason } : {}), orderedAt, answeredAt } };
+        return {
+          key,
+          sent: { op, heldSince, outcome, ...(reason ? { reason } : {}), orderedAt, answeredAt },
+        };
       }),
       heard,
       hasNewRows: gathering.isAll || gathering.rows.size > 0,
@@ -118,7 +135,6 @@ export class Syncer {
       offsetMs: last.offsetMs,
       serverTime: last.serverTime,
       backedUpTo: isoOrNull(last.answer.backedUpTo),
-      replayFrom: isoOrNull(gathering.replayFrom),
     };
   }
 
@@ -146,7 +162,8 @@ export class Syncer {
     const answer = syncAnswerSchema.safeParse(await readJson(response)).data;
     const answeredAtMs = this.syncing.world.now();
     const offsetMs = answer && measureOffset(answer.serverTime, askedAtMs, answeredAtMs);
-    if (!answer || typeof offsetMs !== 'number') return { heard: null, result: { outcome: 'failed', words: NOT_OURS } };
+    if (!answer || typeof offsetMs !== 'number')
+      return { heard: null, result: { outcome: 'failed', words: NOT_OURS } };
     this.share = Math.min(1, this.share * 2);
     const serverTime = new Date(answer.serverTime).toISOString();
     return { heard: { answer, serverTime, offsetMs, roundTripMs: answeredAtMs - askedAtMs } };
@@ -164,7 +181,10 @@ function isoOrNull(time: string | null): string | null {
   return Number.isNaN(ms) ? null : new Date(ms).toISOString();
 }
 
-async function zipped({ gzip }: World, text: string): Promise<{ headers: Record<string, string>; body: BodyInit }> {
+async function zipped(
+  { gzip }: World,
+  text: string,
+): Promise<{ headers: Record<string, string>; body: BodyInit }> {
   const headers = { 'Content-Type': 'application/json' };
   if (!gzip || text.length < GZIP_FROM_UNITS) return { headers, body: text };
   return { headers: { ...headers, 'Content-Encoding': 'gzip' }, body: await gzip(text) };

@@ -115,7 +115,9 @@ class KnownView implements View {
   }
 
   all<E extends Entity>(entity: E): RowOf[E][] {
-    const list = this.lists.get(entity) ?? (entity === 'looseEnd' ? this.looseEnds() : [...(this.groups.get(entity)?.values() ?? [])]);
+    const list =
+      this.lists.get(entity) ??
+      (entity === 'looseEnd' ? this.looseEnds() : [...(this.groups.get(entity)?.values() ?? [])]);
     this.lists.set(entity, list);
     return list as RowOf[E][];
   }
@@ -151,7 +153,10 @@ class KnownView implements View {
       roles: this.rolesOf(op.personId),
     });
     return [
-      ...this.known.unheard.map(({ op, orderedAt, receivedAt }) => ({ op, facts: facts(op, orderedAt, receivedAt) })),
+      ...this.known.unheard.map(({ op, orderedAt, receivedAt }) => ({
+        op,
+        facts: facts(op, orderedAt, receivedAt),
+      })),
       ...this.known.held.map(({ op }) => ({ op, facts: facts(op, op.at, null) })),
     ];
   }
@@ -159,7 +164,11 @@ class KnownView implements View {
   // others of the same device may have changed what this person does not see
   private lay(changed: Map<string, { ref: Ref; row: Row }>): void {
     const mine = this.groups.get('person')?.get(this.me.personId) as RowOf['person'] | undefined;
-    const viewer: Viewer = { personId: this.me.personId, roles: this.me.roles, boatIds: new Set(mine?.boatIds) };
+    const viewer: Viewer = {
+      personId: this.me.personId,
+      roles: this.me.roles,
+      boatIds: new Set(mine?.boatIds),
+    };
     const laid = new Map<string, Map<string, object>>();
     for (const { ref, row } of changed.values()) {
       const visible = seen(ref.entity, row, viewer);

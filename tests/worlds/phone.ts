@@ -1,0 +1,153 @@
+import { IDBFactory } from 'fake-indexeddb';
+import { openReplica, type LiveReplica } from '#src/replica/live-replica.ts';
+import type { World } from '#src/replica/world.ts';
+import type { CookieJar, MemoryServer } from './memory-server.ts';
+import { Power, PowerCut, poweredIndexedDB } from './power.ts';
+import { Seeded } from './seeded.ts';
+import { TabChannels, TabLocks } from './tabs.ts';
+
+/** What befalls a request, each as likely as its share says. */
+export interface Network {
+  isUp: boolean;
+  losesRequest: number;
+  losesAnswer: number;
+  /** the request comes twice, as when something between sends it again */
+  repeats: number;
+  /** neither way comes through, and nothing says so */
+  hangs: number;
+}
+
+export const GOOD_NETWORK: Network = { isUp: true, losesRequest: 0, losesAnswer: 0, repeats: 0, hangs: 0 };
+
+export interface Tab {
+  replica: LiveReplica;
+  power: Power;
+  /** calls what waits for time to pass */
+  ring: () => void;
+}
+
+/** A phone: one browser with its storage, a clock that may be wrong, and a network that may be worse. */
+export class Phone {
+  readonly label: string;
+  readonly indexedDB = new IDBFactory();
+  readonly jar: CookieJar = { deviceId: null };
+  readonly lots: Seeded;
+  network: Network = GOOD_NETWORK;
+  /** how far its clock is ahead of the world's, in milliseconds */
+  aheadMs = 0;
+  hasLocks = true;
+  tabs: Tab[] = [];
+  /** what its code reported as its own mistake */
+  readonly reports: unknown[] = [];
+  private readonly server: MemoryServer;
+  private readonly now: () => number;
+  private readonly channels = new TabChannels();
+  private readonly locks = new TabLocks();
+
+  constructor(label: string, server: MemoryServer, now: () => number, seed: number) {
+    this.label = label;
+    this.server = server;
+    this.now = now;
+    this.lots = new Seeded(seed);
+  }
+
+  /** Opens the app; null where the power was cut before it was open, by `arm`. */
+  async openTab(arm: (power: Power) => void = () => {}): Promise<Tab | null> {
+    const power = new Power();
+    arm(power);
+    const timers = new Set<() => void>();
+    const world = this.world(power, timers);
+    const replica = await untilCut(power, openReplica(world));
+    if (!replica) return null;
+    const tab = { replica, power, ring: () => ringAll(timers) };
+    this.tabs.push(tab);
+    power.atCut(() => (this.tabs = this.tabs.filter((other) => other !== tab)));
+    return tab;
+  }
+
+  /** Every tab ends as it stands. */
+  cutPower(): void {
+    for (const { power } of [...this.tabs]) power.cut();
+  }
+
+  private world(power: Power, timers: Set<() => void>): World {
+    return {
+      indexedDB: poweredIndexedDB(this.indexedDB, power),
+      fetch: (input, init) => this.fetch(power, timers, String(input), init ?? {}),
+      now: () => this.now() + this.aheadMs,
+      random: this.lots.next,
+      randomBytes: this.lots.bytes,
+      locks: this.hasLocks ? this.locks.join(power) : null,
+      channel: this.channels.join(power),
+      storage: null,
+      after(_ms, work) {
+        timers.add(work);
+        return () => timers.delete(work);
+      },
+      onWake: () => () => {},
+      gzip: null,
+      timeZone: 'UTC',
+      appVersion: '0.0.0-test',
+      onBlocked() {},
+      report: (error) => power.isOn && !(error instanceof PowerCut) && this.reports.push(error),
+    };
+  }
+
+  private async fetch(
+    power: Power,
+    timers: Set<() => void>,
+    path: string,
+    init: RequestInit,
+  ): Promise<Response> {
+    const { isUp, losesRequest, losesAnswer, repeats, hangs } = this.network;
+    if (!power.pass()) return never();
+    await this.delay();
+    if (!isUp || this.lots.chance(losesRequest)) throw new TypeError('fetch failed');
+    if (this.lots.chance(hangs)) {
+      setImmediate(() => ringAll(timers));
+      return never();
+    }
+    const asked = {
+      method: init.method ?? 'GET',
+      path,
+      authorization: new Headers(init.headers).get('Authorization'),
+      body: init.body ? (JSON.parse(init.body as string) as unknown) : null,
+    };
+    if (this.lots.chance(repeats)) await this.server.answer(asked, this.jar);
+    const response = await this.server.answer(asked, this.jar);
+    await this.delay();
+    if (!power.pass()) return never();
+    if (this.lots.chance(losesAnswer)) throw new TypeError('fetch failed');
+    return response;
+  }
+
+  private async delay(): Promise<void> {
+    for (let turns = this.lots.below(4); turns > 0; turns -= 1) await nextTurn();
+  }
+}
+
+/** What `work` comes to, or null where the power is cut before. */
+export async function untilCut<T>(power: Power, work: Promise<T>): Promise<T | null> {
+  // what the cut makes of it is nobody's to hear
+  const heard = work.catch((error: unknown) => {
+    if (power.isOn) throw error;
+    return null;
+  });
+  const result = await Promise.race([heard, power.off.then(() => null)]);
+  return power.isOn ? result : null;
+}
+
+export function nextTurn(): Promise<void> {
+  return new Promise((resolve) => setImmediate(resolve));
+}
+
+function ringAll(timers: Set<() => void>): void {
+  for (const work of [...timers]) {
+    timers.delete(work);
+    work();
+  }
+}
+
+function never(): Promise<never> {
+  return new Promise(() => {});
+}
