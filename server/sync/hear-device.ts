@@ -26,7 +26,8 @@ export async function hearDevice(transaction: Transaction, sender: Sender, known
   return null;
 }
 
-function isNews(known: KnownDevice, { held, appVersion, nowMs }: Heard): boolean {
+/** Whether others have to be told of it. */
+export function isNews(known: KnownDevice, { held, appVersion, nowMs }: Heard): boolean {
   if (held && !isSameJson(held, known.held)) return true;
   if (appVersion !== undefined && appVersion !== known.appVersion) return true;
   return known.toldHeardAt === null || nowMs - Date.parse(known.toldHeardAt) > TOLD_AGE_MAX_MS;

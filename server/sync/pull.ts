@@ -39,11 +39,6 @@ const TABLES: Record<Entity, { table: string; id: string; seq: string }> = {
   looseEnd: { table: LOOSE_END_TABLE.table, id: 'id', seq: 'seq' },
 };
 
-// the feed is read along its index: a table without statistics, as after a great many ops at once, would be read and
-// sorted whole for each page. What is off counts as so dear that PostgreSQL would compile the statement, so that is off too
-const READ_IN_ORDER = `
-  SELECT set_config('enable_sort', 'off', true), set_config('enable_bitmapscan', 'off', true), set_config('jit', 'off', true)`;
-
 /**
  * What came or changed in the shop since `cursor`, as the person may see it: at most `limit` numbers of the feed, all
  * read in one snapshot.
@@ -52,7 +47,6 @@ export function pull(database: Database, shopId: string, personId: string, curso
   const work = async (transaction: Transaction): Promise<Page> => {
     const standing = await readStanding(transaction, shopId, personId);
     const start = startOf(cursor, standing);
-    await query(transaction, READ_IN_ORDER);
     const lines = await readFeed(transaction, shopId, standing.viewer, start.seq, limit + 1);
     const more = lines.length > limit;
     const page = lines.slice(0, limit);

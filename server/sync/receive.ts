@@ -7,7 +7,7 @@ import { underSavepoint } from '#server/models/savepoint.ts';
 import type { Parts } from '#server/parts.ts';
 import { readBatchFrom, readDevice, type Sender } from './batch-from.ts';
 import { lockShop } from './feed.ts';
-import { hearDevice, type Heard } from './hear-device.ts';
+import { hearDevice, isNews, type Heard } from './hear-device.ts';
 import { logFault } from './log-fault.ts';
 import { PostgresStore } from './postgres-store.ts';
 
@@ -36,6 +36,8 @@ export async function receive(parts: Parts, sender: Sender, ops: unknown[], hear
 function hearOnly({ database }: Parts, sender: Sender, heard: Heard): Promise<Receipt> {
   return database.inShop(sender.shopId, async (transaction) => {
     const device = await readDevice(transaction, sender);
+    // that a device was heard may be lost with the power, a feed's number that others may have seen may not
+    if (!isNews(device, heard)) await query(transaction, `SELECT set_config('synchronous_commit', 'off', true)`);
     return { outcomes: [], seq: await hearDevice(transaction, sender, device, heard) };
   });
 }
