@@ -88,11 +88,20 @@ describe('an owner', () => {
     await ask('PUT', `/api/boats/${yard.boatId}/owners`, { personIds: [shop.people.owner.id] });
     await layDown(foreman);
     await disagree();
+    const { boatId } = yard;
+    const place = { words: 'the garboard, port' };
+    await crew.send(
+      crew.op('finding.note', { findingId: v7(), boatId, kind: 'rot', place, known: 'probed', certainty: 'suspected', text: 'Soft.' }),
+      crew.op('sound.note', { soundId: v7(), boatId, place, known: 'sounded' }),
+      crew.op('photo.attach', { photoId: v7(), boatId, sha256: 'a1'.repeat(32), width: 800, height: 600, bytes: 90_000 }),
+    );
     owner = await senderFor(server, shop.people.owner);
     await owner.sync(); // else the first pull may come before or after the word that the device was heard
   });
 
-  test('hears of the shop, themselves, their device, their boat and her stages, and of no entry, task or loose end', async () => {
+  test('hears of the shop, themselves, their device, their boat and her stages, and of no entry, task, finding, photo or loose end', async () => {
+    const kept = entitiesOf((await foreman.pullAll()).rows);
+    expect(kept).toEqual(expect.arrayContaining(['entry', 'task', 'finding', 'sound', 'photo', 'looseEnd']));
     const { rows } = await owner.pullAll();
     expect(entitiesOf(rows)).toEqual(['boat', 'device', 'person', 'shop', 'stage']);
     expect(rows.filter(({ entity }) => entity === 'boat').map(({ id }) => id)).toEqual([yard.boatId]);

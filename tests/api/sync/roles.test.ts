@@ -13,6 +13,9 @@ interface Made extends Yard {
   startId: string;
   taskMarkId: string;
   stageMarkId: string;
+  findingId: string;
+  soundId: string;
+  photoId: string;
   setAsideId: string;
 }
 
@@ -23,6 +26,9 @@ const FOREMAN: Role[] = ['foreman'];
 const WORKS: Role[] = ['crew', 'foreman'];
 const why = 'Put down twice.';
 const workDate = '2026-06-01';
+const place = { words: 'the garboard, port' };
+const found = { kind: 'rot', place, known: 'probed', certainty: 'suspected', text: 'Soft for a hand.' };
+const picture = { sha256: 'a1'.repeat(32), width: 1600, height: 1200, bytes: 400_000 };
 
 // a strike and a restore of each entity are alike
 function strikes(entity: string, whose: Case[1], by: Role[], id: (made: Made) => string): Case[] {
@@ -66,6 +72,15 @@ const CASES: Case[] = [
   ['entry.takeBack', "another's", '', FOREMAN, ({ entryId, additionId }) => ({ entryId, additionIds: [additionId] })],
   ...strikes('entry', 'own', WORKS, ({ entryId }) => entryId),
   ...strikes('entry', "another's", FOREMAN, ({ entryId }) => entryId),
+  ['finding.note', 'own', '', WORKS, ({ boatId }) => ({ findingId: v7(), boatId, ...found })],
+  ['finding.amend', "another's", '', WORKS, ({ findingId }) => ({ findingId, set: { certainty: 'proved' } })],
+  ...strikes('finding', "another's", WORKS, ({ findingId }) => findingId),
+  ['sound.note', 'own', '', WORKS, ({ boatId }) => ({ soundId: v7(), boatId, place, known: 'sounded' })],
+  ['sound.amend', "another's", '', WORKS, ({ soundId }) => ({ soundId, set: { known: 'opened' } })],
+  ...strikes('sound', "another's", WORKS, ({ soundId }) => soundId),
+  ['photo.attach', 'own', '', WORKS, ({ boatId }) => ({ photoId: v7(), boatId, ...picture })],
+  ['photo.amend', "another's", '', WORKS, ({ photoId }) => ({ photoId, set: { caption: 'The garboard, port.' } })],
+  ...strikes('photo', "another's", WORKS, ({ photoId }) => photoId),
   ['setAside.admit', "another's", '', FOREMAN, ({ setAsideId }) => ({ setAsideId })],
   ['setAside.dismiss', "another's", '', FOREMAN, ({ setAsideId }) => ({ setAsideId })],
 ];
@@ -90,7 +105,9 @@ async function madeBy(maker: Sender): Promise<Made> {
   const { foreman, office } = senders;
   const yard = await layDown(foreman);
   const { stageId, taskId } = yard;
+  const { boatId } = yard;
   const [additionId, startId, taskMarkId, stageMarkId] = [v7(), v7(), v7(), v7()];
+  const [findingId, soundId, photoId] = [v7(), v7(), v7()];
   const entry = entryBy(maker, yard);
   const entryId = entry.data.entryId as string;
   authorOf.set(entryId, maker.personId);
@@ -102,9 +119,12 @@ async function madeBy(maker: Sender): Promise<Made> {
     maker.op('entry.addTo', { entryId, additionId, text: 'Bunged as well.' }),
     maker.op('task.start', { taskId, startId }),
     maker.op('task.mark', { taskId, markId: taskMarkId, workDate }),
+    maker.op('finding.note', { findingId, boatId, ...found }),
+    maker.op('sound.note', { soundId, boatId, place, known: 'sounded' }),
+    maker.op('photo.attach', { photoId, boatId, ...picture }),
   );
-  expect(outcomes.map(({ outcome }) => outcome)).toEqual(['kept', 'kept', 'kept', 'kept']);
-  return { ...yard, entryId, additionId, startId, taskMarkId, stageMarkId, setAsideId: stray.id };
+  expect(outcomes.filter(({ outcome }) => outcome !== 'kept')).toEqual([]);
+  return { ...yard, entryId, additionId, startId, taskMarkId, stageMarkId, findingId, soundId, photoId, setAsideId: stray.id };
 }
 
 test('the matrix names every kind of op that there is', () => {
