@@ -1,5 +1,6 @@
 import type { ErrorRequestHandler, RequestHandler, Response } from 'express';
 import { z } from 'zod';
+import { logFault } from '#server/log-fault.ts';
 import { isDatabaseAway } from '#server/models/database-away.ts';
 
 export type Issue = { path: string; message: string };
@@ -78,7 +79,7 @@ export const notFound: RequestHandler = (request) => {
 export const problemHandler: ErrorRequestHandler = (error: unknown, request, response, next) => {
   if (response.headersSent) return next(error);
   const problem = problemFrom(error);
-  if (problem.status >= 500) request.log?.error({ err: error }, 'request failed');
+  if (problem.status >= 500 && request.log) logFault(request.log, error, 'request failed');
   sendProblem(response, problem);
 };
 

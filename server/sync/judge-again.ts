@@ -7,7 +7,7 @@ import { query } from '#server/models/query.ts';
 import { underSavepoint } from '#server/models/savepoint.ts';
 import type { Parts } from '#server/parts.ts';
 import { feedSeq, lockShop } from './feed.ts';
-import { logFault } from './log-fault.ts';
+import { logFault } from '#server/log-fault.ts';
 import { PostgresStore } from './postgres-store.ts';
 
 type JudgeParts = Pick<Parts, 'database' | 'log' | 'onChanged'>;

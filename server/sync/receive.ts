@@ -8,7 +8,7 @@ import type { Parts } from '#server/parts.ts';
 import { readBatchFrom, readDevice, type Sender } from './batch-from.ts';
 import { lockShop } from './feed.ts';
 import { hearDevice, isNews, type Heard } from './hear-device.ts';
-import { logFault } from './log-fault.ts';
+import { logFault } from '#server/log-fault.ts';
 import { PostgresStore } from './postgres-store.ts';
 
 export interface Receipt {

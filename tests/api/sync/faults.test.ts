@@ -2,9 +2,11 @@ import pg from 'pg';
 import { v7 } from 'uuid';
 import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { pino } from 'pino';
+import { createApp } from '#server/app.ts';
+import { listen } from '#server/main.ts';
 import { judgeAllAgain } from '#server/sync/judge-again.ts';
 import { formatStamp } from '#shared/sync/stamp.ts';
-import { entryBy, layDown, senderFor, type Sender, type Yard } from '#tests/worlds/sender.ts';
+import { entryBy, layDown, senderFor, Sender, type Yard } from '#tests/worlds/sender.ts';
 import { startServer, type TestServer } from '#tests/worlds/server.ts';
 import { makeShop, type TestShop } from '#tests/worlds/shop.ts';
 import { asOwner, countRows } from '#tests/worlds/tables.ts';
@@ -174,4 +176,21 @@ describe('a database that is away', () => {
     expect((await sender.sync()).status).toBe(200);
     await lost.close();
   });
+});
+
+test("a failing write leaves none of people's words in the log", async () => {
+  await plantFault('tar');
+  const lines: string[] = [];
+  const log = pino({ level: 'info' }, { write: (line) => void lines.push(line) });
+  const { database, hails, clock } = server;
+  const talkative = await listen(createApp({ database, hails, now: clock.now, log }), 0, '127.0.0.1');
+  const sender = new Sender({ ...server, url: talkative.url }, crew.session);
+  await sender.send(entryBy(sender, yard, { text: 'Pitch and tar.' }));
+  await mend();
+  await plantFault('tar', 'RAISE disk_full');
+  expect((await sender.sync({ ops: [entryBy(sender, yard, { text: 'Oil and tar.' })] })).status).toBe(503);
+  await talkative.close();
+  expect(lines.filter((line) => line.includes('planted'))).toHaveLength(2);
+  expect(lines.filter((line) => line.includes('request failed'))).toHaveLength(1);
+  expect(lines.filter((line) => /and tar|entry\.write/.test(line))).toEqual([]);
 });
