@@ -1,18 +1,18 @@
 import { dayAt } from '#shared/sync/day.ts';
 import type { Op } from '#shared/sync/op.ts';
-import { composeOp, readHoldData, type HoldOptions } from './compose-op.ts';
+import { composeOps, readHoldData, type HoldOptions, type OpDraft } from './compose-op.ts';
 import { DeviceStore } from './device-store.ts';
 import { HoldError } from './hold-error.ts';
 import { idMaker } from './new-id.ts';
 import { PersonStore, type Remembered } from './person-store.ts';
-import type { Replica, SentItem } from './replica.ts';
+import type { Holding, Replica, SentItem } from './replica.ts';
 import { unsealed, type Seal } from './seal.ts';
 import { LiveSession } from './session.ts';
 import { composeSyncState, type Attempt } from './standing.ts';
 import { Syncer } from './sync-once.ts';
 import type { SyncResult, SyncState } from './sync-state.ts';
 import { Turns } from './turns.ts';
-import { makeView, type Me, type View } from './view.ts';
+import { makeView, type HeldItem, type Me, type View } from './view.ts';
 import type { World } from './world.ts';
 
 const NOTHING_REMEMBERED: Remembered = { boatId: null, stageId: null };
@@ -92,12 +92,13 @@ export class LiveReplica implements Replica {
     return this.seen!.view;
   };
 
-  private makeView(me: Me, person: PersonStore): View {
+  private makeView(me: Me, person: PersonStore, further: HeldItem[] = []): View {
     const { device, session, world } = this;
+    const held = device.outbox.map(({ op, heldSince }) => ({ op, personId: op.personId, heldSince }));
     return makeView({
       me,
       rows: person.rows,
-      held: device.outbox.map(({ op, heldSince }) => ({ op, personId: op.personId, heldSince })),
+      held: [...held, ...further],
       unheard: device.sent
         .filter(({ outcome, inRowsOf }) => outcome !== 'set-aside' && !inRowsOf.includes(person.personId))
         .map(({ op, orderedAt, answeredAt }) => ({ op, orderedAt, receivedAt: answeredAt })),
@@ -107,23 +108,41 @@ export class LiveReplica implements Replica {
     });
   }
 
+  private viewWith(ops: Op[]): View {
+    const heldSince = new Date(this.device.nowMs()).toISOString();
+    const further = ops.map((op) => ({ op, personId: op.personId, heldSince }));
+    return this.makeView(this.session.current()!, this.signedIn(), further);
+  }
+
   async hold(kind: string, data: object, options: HoldOptions = {}): Promise<Op> {
+    const [op] = await this.holdAll([{ kind, data, ...options }]);
+    return op!;
+  }
+
+  readonly holdAll = async (holdings: Holding[]): Promise<Op[]> => {
     const me = this.session.current();
     if (!me) throw new HoldError('Nobody is signed in on this device.');
-    const plain = readHoldData(data);
-    const made = { id: this.newId(), personId: me.personId };
+    if (holdings.length === 0) return [];
+    const drafts = holdings.map((holding) => this.draftOf(holding));
     for (;;) {
-      const op = await this.device
-        .hold((at) => composeOp(kind, plain, options, { ...made, at, view: this.view() }))
+      const ops = await this.device
+        .hold((nextStamp) => {
+          const viewWith = (before: Op[]) => this.viewWith(before);
+          return composeOps(drafts, { personId: me.personId, nextStamp, view: this.view(), viewWith });
+        })
         .catch(asHoldError);
-      if (op) {
+      if (ops) {
         this.changed();
         this.world.channel.post('record');
         void this.askToKeep().catch(this.world.report);
-        return op;
+        return ops;
       }
       await this.device.catchUp();
     }
+  };
+
+  private draftOf({ kind, data, ...options }: Holding): OpDraft {
+    return { id: this.newId(), kind, data: readHoldData(data), options };
   }
 
   /** Asks while another is under way wait for one more round together. */
@@ -167,7 +186,7 @@ export class LiveReplica implements Replica {
       person,
       attempt,
       storage,
-      needsSignIn: session.record.needsSignIn,
+      needsSignIn: session.needsSignIn,
     });
     if (JSON.stringify(state) !== JSON.stringify(this.lastState)) this.lastState = state;
     return this.lastState!;
@@ -229,6 +248,8 @@ export class LiveReplica implements Replica {
   private async prepare(me: Me | null): Promise<() => void> {
     const before = this.person;
     if (me?.personId === before?.personId) return () => {};
+    // the record does not stay behind for whoever picks the device up; what is held, and drafts, do
+    if (!me) await before?.forgetRows();
     const next = me && (await PersonStore.open(this.world, this.seal, me.personId));
     return () => {
       this.person = next;

@@ -58,7 +58,7 @@ interface Dealings {
 }
 
 export class LiveSession implements Session {
-  record: SessionRecord = NOBODY;
+  private record: SessionRecord = NOBODY;
   private readonly tokens = new Map<string, Token>();
   private readonly dealings: Dealings;
   private me: Me | null = null;
@@ -73,6 +73,11 @@ export class LiveSession implements Session {
   }
 
   readonly current = (): Me | null => this.me;
+
+  /** Whether the server wants the password before anything else. */
+  get needsSignIn(): boolean {
+    return this.record.needsSignIn;
+  }
 
   get rolesOnDevice(): ReadonlyMap<string, Role[]> {
     return new Map(Object.entries(this.record.rolesOnDevice));

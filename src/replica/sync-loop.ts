@@ -52,18 +52,18 @@ class SyncLoop {
   /** A round where something new is held, or somebody has come. */
   private notice(): void {
     const before = this.lastSeen;
-    const { heldOps, phase } = this.replica.syncState();
+    const { needsSignIn } = this.replica.session;
+    const { heldOps } = this.replica.syncState();
     const personId = this.replica.session.current()?.personId ?? '';
-    this.lastSeen = { personId, heldOps, needsSignIn: phase === 'sign-in-needed' };
-    const hasCome =
-      personId !== '' && (personId !== before.personId || (before.needsSignIn && !this.lastSeen.needsSignIn));
+    this.lastSeen = { personId, heldOps, needsSignIn };
+    const hasCome = personId !== '' && (personId !== before.personId || (before.needsSignIn && !needsSignIn));
     if (hasCome || heldOps > before.heldOps) this.round();
   }
 
   private round(): void {
     this.cancelTimer();
     // the next sign-in begins again
-    if (this.ending.signal.aborted || this.replica.syncState().phase === 'sign-in-needed') return;
+    if (this.ending.signal.aborted || this.replica.session.needsSignIn) return;
     const settle = (isDone: boolean) => {
       this.failures = isDone ? 0 : this.failures + 1;
       this.waitFor(
@@ -101,8 +101,8 @@ class SyncLoop {
   }
 
   private async hearOnce(): Promise<void> {
-    const { session, syncState } = this.replica;
-    if (!session.current() || syncState().phase === 'sign-in-needed') return;
+    const { session } = this.replica;
+    if (!session.current() || session.needsSignIn) return;
     await hearHails(session.fetchAsMe, () => this.round(), this.ending.signal);
   }
 

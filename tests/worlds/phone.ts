@@ -22,8 +22,16 @@ export const GOOD_NETWORK: Network = { isUp: true, losesRequest: 0, losesAnswer:
 export interface Tab {
   replica: LiveReplica;
   power: Power;
-  /** calls what waits for time to pass */
-  ring: () => void;
+  world: World;
+  /** what waits for time to pass */
+  timers: Timer[];
+  /** as when signal comes back, or the person does */
+  wake: () => void;
+}
+
+export interface Timer {
+  ms: number;
+  work: () => void;
 }
 
 /** A phone: one browser with its storage, a clock that may be wrong, and a network that may be worse. */
@@ -55,11 +63,12 @@ export class Phone {
   async openTab(arm: (power: Power) => void = () => {}): Promise<Tab | null> {
     const power = new Power();
     arm(power);
-    const timers = new Set<() => void>();
-    const world = this.world(power, timers);
+    const timers: Timer[] = [];
+    const wakers = new Set<() => void>();
+    const world = this.world(power, timers, wakers);
     const replica = await untilCut(power, openReplica(world));
     if (!replica) return null;
-    const tab = { replica, power, ring: () => ringAll(timers) };
+    const tab = { replica, power, world, timers, wake: () => wakers.forEach((waker) => waker()) };
     this.tabs.push(tab);
     power.atCut(() => (this.tabs = this.tabs.filter((other) => other !== tab)));
     return tab;
@@ -70,7 +79,7 @@ export class Phone {
     for (const { power } of [...this.tabs]) power.cut();
   }
 
-  private world(power: Power, timers: Set<() => void>): World {
+  private world(power: Power, timers: Timer[], wakers: Set<() => void>): World {
     return {
       indexedDB: poweredIndexedDB(this.indexedDB, power),
       fetch: (input, init) => this.fetch(power, timers, String(input), init ?? {}),
@@ -80,11 +89,17 @@ export class Phone {
       locks: this.hasLocks ? this.locks.join(power) : null,
       channel: this.channels.join(power),
       storage: null,
-      after(_ms, work) {
-        timers.add(work);
-        return () => timers.delete(work);
+      after(ms, work) {
+        const timer = { ms, work };
+        timers.push(timer);
+        return () => {
+          if (timers.includes(timer)) timers.splice(timers.indexOf(timer), 1);
+        };
       },
-      onWake: () => () => {},
+      onWake(listener) {
+        wakers.add(listener);
+        return () => wakers.delete(listener);
+      },
       gzip: null,
       timeZone: 'UTC',
       appVersion: '0.0.0-test',
@@ -93,12 +108,7 @@ export class Phone {
     };
   }
 
-  private async fetch(
-    power: Power,
-    timers: Set<() => void>,
-    path: string,
-    init: RequestInit,
-  ): Promise<Response> {
+  private async fetch(power: Power, timers: Timer[], path: string, init: RequestInit): Promise<Response> {
     const { isUp, losesRequest, losesAnswer, repeats, hangs } = this.network;
     if (!power.pass()) return never();
     await this.delay();
@@ -141,11 +151,9 @@ export function nextTurn(): Promise<void> {
   return new Promise((resolve) => setImmediate(resolve));
 }
 
-function ringAll(timers: Set<() => void>): void {
-  for (const work of [...timers]) {
-    timers.delete(work);
-    work();
-  }
+/** Lets the time pass that things wait for. */
+export function ringAll(timers: Timer[]): void {
+  for (const { work } of timers.splice(0)) work();
 }
 
 function never(): Promise<never> {
