@@ -91,3 +91,30 @@ function changedRow({ changes }: Understood, { rowId }: HoldOptions, view: View)
     throw new HoldError('What this changes is not on this device yet. Try again once it has been heard.');
   return row;
 }
+
+/** Something to be made an op of, its data as `readHoldData` answered it. */
+export interface OpDraft {
+  id: string;
+  kind: string;
+  data: Data;
+  options: HoldOptions;
+}
+
+interface MakingSeveral {
+  personId: string;
+  nextStamp: () => Stamp;
+  view: View;
+  /** the view with further held ops in it */
+  viewWith: (ops: Op[]) => View;
+}
+
+/** As `composeOp`, several held together. One that changes a row sees what those before it made of it. */
+export function composeOps(drafts: OpDraft[], { personId, nextStamp, view, viewWith }: MakingSeveral): Op[] {
+  const ops: Op[] = [];
+  for (const { id, kind, data, options } of drafts) {
+    // a view is dear, and only what changes a row looks at it
+    const seen = verbOf(kind) !== null && ops.length > 0 ? viewWith(ops) : view;
+    ops.push(composeOp(kind, data, options, { id, at: nextStamp(), personId, view: seen }));
+  }
+  return ops;
+}

@@ -99,31 +99,33 @@ export class DeviceStore {
   }
 
   /**
-   * Stamps what `compose` makes and keeps it in the outbox, as one: two tabs never share a stamp. Resolves once durable;
-   * null, with nothing kept, where another tab has changed something since, so that `compose` would not have seen it.
+   * Keeps what `compose` makes in the outbox, each under the stamp that it asked for, as one: two tabs never share a
+   * stamp. Resolves once durable; null, with nothing kept, where another tab has changed something since, so that
+   * `compose` would not have seen it.
    */
-  hold(compose: (at: Stamp) => Op): Promise<Op | null> {
+  hold(compose: (nextStamp: () => Stamp) => Op[]): Promise<Op[] | null> {
     return this.turns.take(() => this.stampAndKeep(compose));
   }
 
-  private async stampAndKeep(compose: (at: Stamp) => Op): Promise<Op | null> {
+  private async stampAndKeep(compose: (nextStamp: () => Stamp) => Op[]): Promise<Op[] | null> {
     const held = await this.database.transact(['about', 'outbox'], 'readwrite', async (transaction) => {
       const about = transaction.objectStore('about');
       const state = readState(await promisifyRequest<unknown>(about.get('state')));
       if (state.outboxVersion !== this.state.outboxVersion || state.rowsVersion !== this.state.rowsVersion)
         return null;
-      const clock = tick(this.latestClock(state.clock), this.nowMs());
-      const key = formatStamp(clock, this.deviceId);
-      const record = { op: compose(key), heldSince: new Date(this.nowMs()).toISOString() };
+      let clock = this.latestClock(state.clock);
+      const ops = compose(() => formatStamp((clock = tick(clock, this.nowMs())), this.deviceId));
+      const heldSince = new Date(this.nowMs()).toISOString();
+      const outbox = transaction.objectStore('outbox');
+      for (const op of ops) outbox.put({ op, heldSince } satisfies OutboxRecord, op.at);
       const next = { ...state, clock, outboxVersion: state.outboxVersion + 1 };
-      transaction.objectStore('outbox').put(record, key);
       about.put(next, 'state');
-      return { item: { key, ...record }, state: next };
+      return { items: ops.map((op) => ({ key: op.at, op, heldSince })), state: next };
     });
     if (!held) return null;
-    this.outbox = [...this.outbox, held.item];
+    this.outbox = [...this.outbox, ...held.items];
     this.state = held.state;
-    return held.item.op;
+    return held.items.map(({ op }) => op);
   }
 
   /** Moves what was answered to the sent list, sets the clock, and forgets what the server has backed up, as one. */

@@ -1,7 +1,6 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { createContext, useContext, useEffect, useSyncExternalStore, type ReactNode } from 'react';
-import type { HoldOptions } from './compose-op.ts';
-import type { Replica } from './replica.ts';
+import type { Holding, Replica } from './replica.ts';
 import type { Me, View } from './view.ts';
 
 const ReplicaContext = createContext<Replica | null>(null);
@@ -44,18 +43,11 @@ export function useRead<T>(key: unknown[], read: (view: View) => T): T {
   return query.data.read;
 }
 
-/** What to hold. */
-export interface Holding {
-  kind: string;
-  data: object;
-  options?: HoldOptions;
-}
-
 /** A mutation that is done once the phone has the op, with signal or without. */
 export function useHold() {
   const replica = useReplica();
   return useMutation({
-    mutationFn: ({ kind, data, options }: Holding) => replica.hold(kind, data, options),
+    mutationFn: ({ kind, data, ...options }: Holding) => replica.hold(kind, data, options),
     networkMode: 'always',
     retry: false,
   });

@@ -9,6 +9,9 @@ export type SyncResult =
 export interface SyncState {
   phase: 'idle' | 'syncing' | 'offline' | 'sign-in-needed' | 'failed';
   heldOps: number;
+  /** pictures of this person's that the server does not have whole */
+  heldPhotos: number;
+  isSendingPhotos: boolean;
   oldestHeldAt: string | null;
   lastHeardAt: string | null;
   /** how far the device's own clock is ahead (behind, where negative); null unless wrong by more than two minutes */

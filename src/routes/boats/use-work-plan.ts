@@ -1,10 +1,9 @@
 import { useMutation, useQuery } from '@tanstack/react-query';
-import { useState } from 'react';
 import type { BoatRow } from '#shared/boat/boat.ts';
 import { TEMPLATE_IDS, loadTemplate, type Template } from '#shared/trade/load.ts';
 import { orderOfWork, type BoatToWorkOn } from '#shared/trade/order-of-work.ts';
-import { useReplica, type Holding } from '#src/replica/hooks.tsx';
-import { holdInTurn } from './hold-work.ts';
+import { useReplica } from '#src/replica/hooks.tsx';
+import type { Holding } from '#src/replica/replica.ts';
 
 export type WorkPlan = Omit<BoatToWorkOn, 'boatId'>;
 
@@ -18,23 +17,16 @@ export function useTemplates() {
   });
 }
 
-/** Makes a boat's list of work. Asked again after a failure, it goes on with the same list where that stopped. */
+/** Makes a boat's list of work, all of it or nothing. */
 export function useMakeWork(boat: BoatRow) {
   const replica = useReplica();
-  const [holdings, setHoldings] = useState<Holding[]>([]);
-  const [kept, setKept] = useState(0);
   const { mutate, error, isPending } = useMutation({
-    mutationFn: (list: Holding[]) =>
-      holdInTurn(({ kind, data, options }) => replica.hold(kind, data, options), list, kept, setKept),
+    mutationFn: ({ template, plan }: { template: Template; plan: WorkPlan }) =>
+      replica.holdAll(workHoldings(boat, template, plan, replica.newId)),
     networkMode: 'always',
     retry: false,
   });
-  const make = (template: Template, plan: WorkPlan, onDone: () => void) => {
-    const list = kept > 0 ? holdings : workHoldings(boat, template, plan, replica.newId);
-    setHoldings(list);
-    mutate(list, { onSuccess: onDone });
-  };
-  return { make, error, isPending, kept, of: holdings.length };
+  return { make: mutate, error, isPending };
 }
 
 function workHoldings(boat: BoatRow, template: Template, plan: WorkPlan, newId: () => string): Holding[] {

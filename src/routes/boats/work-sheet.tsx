@@ -15,11 +15,10 @@ import { WorkQuestions } from './work-questions.tsx';
 /** Gives a boat without stages the stages and tasks of a template. */
 export function WorkSheet({ boat, onClose }: { boat: BoatRow; onClose: () => void }) {
   const { data: templates, error: loadError } = useTemplates();
-  const { make, error, isPending, kept, of } = useMakeWork(boat);
+  const { make, error, isPending } = useMakeWork(boat);
   const [draft, setDraft] = useState({ ...NEW_WORK, templateId: boat.templateId ?? null });
   const template = templates?.find(({ id }) => id === draft.templateId);
   const plan = planOf(draft, boat);
-  const isBegun = isPending || kept > 0;
   return (
     <Sheet
       isOpen
@@ -31,9 +30,9 @@ export function WorkSheet({ boat, onClose }: { boat: BoatRow; onClose: () => voi
           <Key
             kind="main"
             disabled={isPending || !template || !plan}
-            onClick={() => template && plan && make(template, plan, onClose)}
+            onClick={() => template && plan && make({ template, plan }, { onSuccess: onClose })}
           >
-            {isBegun ? `${isPending ? '' : 'Go on: '}${kept} of ${of} kept` : 'Make the list'}
+            {isPending ? 'Making it …' : 'Make the list'}
           </Key>
         </>
       }
@@ -43,7 +42,7 @@ export function WorkSheet({ boat, onClose }: { boat: BoatRow; onClose: () => voi
       )}
       {error && <Notice tone="error">{error.message}</Notice>}
       {!templates && !loadError && <Loading />}
-      {templates && !isBegun && (
+      {templates && !isPending && (
         <Choice
           label="Template"
           value={draft.templateId}
@@ -51,7 +50,7 @@ export function WorkSheet({ boat, onClose }: { boat: BoatRow; onClose: () => voi
           options={templates.map(({ id, name }) => ({ value: id, label: name }))}
         />
       )}
-      {template && !isBegun && (
+      {template && !isPending && (
         <WorkQuestions
           template={template}
           draft={draft}

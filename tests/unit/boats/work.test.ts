@@ -1,6 +1,5 @@
 import { describe, expect, test } from 'vitest';
 import { loadTemplate } from '#shared/trade/load.ts';
-import { holdInTurn } from '#src/routes/boats/hold-work.ts';
 import { readWhich } from '#src/routes/boats/which-ones.ts';
 import { NEW_WORK, planOf, readOutlook } from '#src/routes/boats/work-draft.ts';
 
@@ -41,20 +40,4 @@ test('what a list comes to is told before it is made', async () => {
   expect(some.tasks - none.tasks).toBe(12 * 2 + 2 * 2);
   expect((some.minutes - none.minutes) / 60).toBe(12 * (2.5 + 2) + 2 * (9 + 1) + 8);
   expect(planOf({ ...draft, ribs: { count: 'x', which: '' } }, {})).toBeNull();
-});
-
-test('a list that was broken off goes on where it stopped, nothing twice', async () => {
-  const held: string[] = [];
-  let room = 2;
-  const hold = async (op: string) => {
-    if (held.length === room) throw new Error('no room');
-    held.push(op);
-  };
-  let kept = 0;
-  const go = () => holdInTurn(hold, ['a', 'b', 'c', 'd'], kept, (count) => (kept = count));
-  await expect(go()).rejects.toThrow('no room');
-  expect(kept).toBe(2);
-  room = 9;
-  await go();
-  expect(held).toEqual(['a', 'b', 'c', 'd']);
 });
