@@ -43,3 +43,59 @@ function fromBare(text: string, units: Units): number | null {
   if (!/^\d+(?:\.\d+)?$/.test(text)) return null;
   return Number(text) * (units === 'metric' ? 1000 : FOOT_MM);
 }
+
+const SIXTEENTH_MM = INCH_MM / 16;
+const SIXTEENTHS_IN_FOOT = 12 * 16;
+// above this, inches are counted out in feet
+const INCHES_ALONE_MAX = 48;
+
+/** A length as the bench writes it: whole inches and sixteenths. */
+export interface Inches {
+  whole: number;
+  /** 0 to 15 */
+  sixteenths: number;
+}
+
+/** The nearest sixteenth of an inch to a length in millimetres. */
+export function inchesFromMm(mm: number): Inches {
+  const all = Math.round(mm / SIXTEENTH_MM);
+  return { whole: Math.floor(all / 16), sixteenths: all % 16 };
+}
+
+/** Whole millimetres; `inchesFromMm` gives the same inches back. */
+export function mmFromInches({ whole, sixteenths }: Inches): number {
+  return Math.round((whole * 16 + sixteenths) * SIXTEENTH_MM);
+}
+
+/** A length taken apart for the eye: '4 ft 2', '3/4', 'in'. */
+export interface WrittenLength {
+  whole: string;
+  /** in its lowest terms; null where there is none */
+  fraction: string | null;
+  unit: string;
+}
+
+/** A length of a part: inches to the sixteenth, with feet above 48 of them, or millimetres. */
+export function formatLength(mm: number, units: Units): WrittenLength {
+  if (units === 'metric') return { whole: String(mm), fraction: null, unit: 'mm' };
+  const { whole, sixteenths } = inchesFromMm(mm);
+  const fraction = fractionText(sixteenths);
+  if (whole <= INCHES_ALONE_MAX)
+    return { whole: whole === 0 && fraction ? '' : String(whole), fraction, unit: 'in' };
+  const feet = Math.floor((whole * 16) / SIXTEENTHS_IN_FOOT);
+  return { whole: `${feet} ft ${whole % 12}`, fraction, unit: 'in' };
+}
+
+/** '11 3/4 in', '4 ft 2 in', '298 mm'. */
+export function lengthText(mm: number, units: Units): string {
+  const { whole, fraction, unit } = formatLength(mm, units);
+  return [whole, fraction, unit].filter(Boolean).join(' ');
+}
+
+/** '3/4' of 12 sixteenths; null of none. */
+export function fractionText(sixteenths: number): string | null {
+  if (sixteenths === 0) return null;
+  let [top, bottom] = [sixteenths, 16];
+  while (top % 2 === 0) [top, bottom] = [top / 2, bottom / 2];
+  return `${top}/${bottom}`;
+}

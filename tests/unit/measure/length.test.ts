@@ -1,6 +1,12 @@
 import fc from 'fast-check';
 import { expect, test } from 'vitest';
-import { boatLengthText, parseBoatLength } from '#shared/measure/length.ts';
+import {
+  boatLengthText,
+  inchesFromMm,
+  lengthText,
+  mmFromInches,
+  parseBoatLength,
+} from '#shared/measure/length.ts';
 
 test.each([
   ['26', 'imperial', 7925],
@@ -40,5 +46,23 @@ test('what is written is read back to within half an inch, or half a centimetre'
       lengths,
       (mm) => Math.abs((parseBoatLength(boatLengthText(mm, 'metric'), 'metric') ?? 0) - mm) <= 5,
     ),
+  );
+});
+
+test.each([
+  [298, 'imperial', '11 3/4 in'],
+  [19, 'imperial', '3/4 in'],
+  [0, 'imperial', '0 in'],
+  [1283, 'imperial', '4 ft 2 1/2 in'],
+  [298, 'metric', '298 mm'],
+] as const)('%i mm of a part in a shop with %s units is %s', (mm, units, text) => {
+  expect(lengthText(mm, units)).toBe(text);
+});
+
+test('inches and sixteenths come back from the whole millimetres that are kept', () => {
+  fc.assert(
+    fc.property(fc.nat(3000), fc.nat(15), (whole, sixteenths) => {
+      expect(inchesFromMm(mmFromInches({ whole, sixteenths }))).toEqual({ whole, sixteenths });
+    }),
   );
 });
