@@ -6,6 +6,7 @@ import { Hails } from '#server/hails/hails.ts';
 import { listen } from '#server/main.ts';
 import { migrate } from '#server/migrations/migrate.ts';
 import { openDatabase } from '#server/models/database.ts';
+import { openPictureFolder } from '#server/photos/folder-store.ts';
 import { judgeAllAgain } from '#server/sync/judge-again.ts';
 import { claimDataFolder } from './data-folder.ts';
 import { readEnvironment } from './environment.ts';
@@ -46,10 +47,11 @@ async function start(stopping: Stopping): Promise<void> {
     nowMs: Date.now(),
     timeZone,
   });
+  const pictures = await openPictureFolder(path.join(environment.dataDir, 'pictures'));
   const log = pino();
   const hails = new Hails({ url: databaseUrl, database, log });
   await judgeAllAgain({ database, log, onChanged: (shopId, seq) => hails.announce(shopId, seq) });
-  const app = createApp({ database, now: Date.now, log, hails, ...(distDir ? { distDir } : {}) });
+  const app = createApp({ database, pictures, now: Date.now, log, hails, ...(distDir ? { distDir } : {}) });
   const { url, close } = await listen(app, environment.port, environment.host).catch(
     (error: NodeJS.ErrnoException) => {
       throw error.code === 'EADDRINUSE' || error.code === 'EACCES' || error.code === 'EADDRNOTAVAIL'

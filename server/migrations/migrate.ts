@@ -4,9 +4,10 @@ import { migration as shops } from './0001-shops.ts';
 import { migration as identity } from './0002-identity.ts';
 import { migration as record } from './0003-record.ts';
 import { migration as notes } from './0004-notes.ts';
+import { migration as pictureFiles } from './0005-picture-files.ts';
 import type { MigrationContext } from './migration.ts';
 
-const MIGRATIONS = [shops, identity, record, notes];
+const MIGRATIONS = [shops, identity, record, notes, pictureFiles];
 
 // any number, so long as every Ribband takes the same one
 const MIGRATION_LOCK = 7_424_233;

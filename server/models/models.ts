@@ -1,6 +1,7 @@
 import type { Sequelize } from 'sequelize';
 import { devicePersonTable, deviceTable, refreshFamilyTable } from './device.ts';
 import { boatOwnerTable, personTable } from './person.ts';
+import { pictureFileTable } from './picture-file.ts';
 import {
   boatTable,
   entryTable,
@@ -30,6 +31,7 @@ export function defineModels(sequelize: Sequelize) {
     Entry: entryTable(sequelize),
     LooseEnd: looseEndTable(sequelize),
     SetAside: setAsideTable(sequelize),
+    PictureFile: pictureFileTable(sequelize),
   };
 }
 

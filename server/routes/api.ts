@@ -9,6 +9,7 @@ import { eventOperations, eventRoutes } from './events.ts';
 import { firstRunOperations, firstRunRoutes } from './first-run.ts';
 import { healthOperations, healthRoutes } from './health.ts';
 import { peopleOperations, peopleRoutes } from './people.ts';
+import { photoOperations, photoRoutes } from './photos.ts';
 import { sessionOperations, sessionRoutes } from './session.ts';
 import { syncOperations, syncRoutes } from './sync.ts';
 
@@ -21,6 +22,7 @@ const modules: { routes: (parts: Parts) => Router; operations: Operation[] }[] =
   { routes: deviceRoutes, operations: deviceOperations },
   { routes: boatRoutes, operations: boatOperations },
   { routes: syncRoutes, operations: syncOperations },
+  { routes: photoRoutes, operations: photoOperations },
   { routes: eventRoutes, operations: eventOperations },
 ];
 

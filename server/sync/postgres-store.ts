@@ -1,9 +1,11 @@
 import type { Transaction } from 'sequelize';
 import { FOLLOWER_ENTITIES, type Follower } from '#shared/entry/follow.ts';
+import type { PhotoRow } from '#shared/photo/photo.ts';
 import type { SetAsideRow } from '#shared/set-aside/set-aside.ts';
 import { recordEntitySchema, refKey, type Entity, type Ref } from '#shared/sync/row.ts';
 import type { Changes, LoggedOp, RecordStore } from '#shared/sync/store.ts';
 import { query } from '#server/models/query.ts';
+import { withArrived } from '#server/photos/arrivals.ts';
 import { numberRows } from './feed.ts';
 import { appendOps, readOps } from './op-log.ts';
 import { LOOSE_END_TABLE, ROW_TABLES } from './tables.ts';
@@ -71,7 +73,9 @@ export class PostgresStore implements RecordStore {
     this.seq = last;
     let next = first;
     for (const entity of recordEntitySchema.options) {
-      const numbered = rows.filter((one) => one.entity === entity).map(({ row }) => ({ id: row.id, seq: next++, row }));
+      const made = rows.filter((one) => one.entity === entity).map(({ row }) => row);
+      const told = entity === 'photo' ? await withArrived(this.transaction, this.shopId, made as PhotoRow[]) : made;
+      const numbered = told.map((row) => ({ id: row.id, seq: next++, row }));
       await writeRows(this.transaction, this.shopId, ROW_TABLES[entity], numbered);
     }
     await this.writeLooseEnds(looseEnds.map(({ id, end }): Placed => ({ id, seq: next++, row: end })));

@@ -39,6 +39,7 @@ test('the eleventh failure of an e-mail is told to wait, right password or not, 
   const database = openDatabase(server.databaseUrl);
   const second = createApp({
     database,
+    pictures: server.pictures,
     now: server.clock.now,
     hails: server.hails,
     log: pino({ level: 'silent' }),

@@ -182,8 +182,8 @@ test("a failing write leaves none of people's words in the log", async () => {
   await plantFault('tar');
   const lines: string[] = [];
   const log = pino({ level: 'info' }, { write: (line) => void lines.push(line) });
-  const { database, hails, clock } = server;
-  const talkative = await listen(createApp({ database, hails, now: clock.now, log }), 0, '127.0.0.1');
+  const { database, pictures, hails, clock } = server;
+  const talkative = await listen(createApp({ database, pictures, hails, now: clock.now, log }), 0, '127.0.0.1');
   const sender = new Sender({ ...server, url: talkative.url }, crew.session);
   await sender.send(entryBy(sender, yard, { text: 'Pitch and tar.' }));
   await mend();

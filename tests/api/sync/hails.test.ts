@@ -80,7 +80,7 @@ test('a hail goes to the devices on every server of the database', async () => {
   const log = pino({ level: 'silent' });
   const { database, databaseUrl: url, clock } = server;
   const hails = new Hails({ url, database, log });
-  const other = await listen(createApp({ database, hails, now: clock.now, log }), 0, '127.0.0.1');
+  const other = await listen(createApp({ database, pictures: server.pictures, hails, now: clock.now, log }), 0, '127.0.0.1');
   const ear = await earOf(foreman, other.url);
   const seq = await logged(crew);
   expect(await withinMs(HAIL_MAX_MS, ear.hears(seq))).toBe(true);
