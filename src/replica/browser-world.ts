@@ -18,6 +18,8 @@ export function browserWorld(appVersion: string, onBlocked: () => void): World {
     },
     onWake: listenForWaking,
     gzip: 'CompressionStream' in window ? gzip : null,
+    // read when the first picture is taken: nobody else waits for it
+    preparePicture: async (file) => (await import('./photos/prepare.ts')).preparePicture(file),
     timeZone: Intl.DateTimeFormat().resolvedOptions().timeZone,
     appVersion,
     onBlocked,

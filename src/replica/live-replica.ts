@@ -5,6 +5,8 @@ import { DeviceStore } from './device-store.ts';
 import { HoldError } from './hold-error.ts';
 import { idMaker } from './new-id.ts';
 import { PersonStore, type Remembered } from './person-store.ts';
+import { LivePhotos } from './photos/live-photos.ts';
+import type { HeldPicture } from './photos/picture.ts';
 import type { Holding, Replica, SentItem } from './replica.ts';
 import { unsealed, type Seal } from './seal.ts';
 import { LiveSession } from './session.ts';
@@ -15,6 +17,7 @@ import { Turns } from './turns.ts';
 import { makeView, type HeldItem, type Me, type View } from './view.ts';
 import type { World } from './world.ts';
 
+const NO_PICTURES: HeldPicture[] = [];
 const NOTHING_REMEMBERED: Remembered = { boatId: null, stageId: null };
 
 /** What a view says its time by, in milliseconds. */
@@ -46,6 +49,7 @@ export class LiveReplica implements Replica {
   private readonly listeners = new Set<() => void>();
   private readonly leaveChannel: () => void;
   private person: PersonStore | null = null;
+  private photos: LivePhotos | null = null;
   private seen: { view: View; madeOf: MadeOf } | null = null;
   private queuedSync: Promise<SyncResult> | null = null;
   private attempt: Attempt = { phase: 'idle' };
@@ -154,6 +158,13 @@ export class LiveReplica implements Replica {
     return this.queuedSync;
   };
 
+  readonly sendNow = async (): Promise<SyncResult> => {
+    await this.photos?.retryRefused();
+    const result = await this.syncNow();
+    if (result.outcome !== 'done') return result;
+    return (await this.photos?.send()) ?? result;
+  };
+
   private async sync(): Promise<SyncResult> {
     const { person, world } = this;
     if (!person) return { outcome: 'sign-in-needed' };
@@ -162,6 +173,8 @@ export class LiveReplica implements Replica {
     try {
       const result = await (world.locks ? world.locks.request('ribband-sync', work) : work());
       this.tried(attemptFrom(result));
+      // pictures are many times larger: ops never wait for them
+      if (result.outcome === 'done') void this.photos?.send().catch(world.report);
       return result;
     } catch (error) {
       this.tried({
@@ -180,10 +193,12 @@ export class LiveReplica implements Replica {
   }
 
   readonly syncState = (): SyncState => {
-    const { device, person, session, attempt, storage } = this;
+    const { device, person, photos, session, attempt, storage } = this;
     const state = composeSyncState({
       device,
       person,
+      heldPhotos: photos?.held().length ?? 0,
+      isSendingPhotos: photos?.isSending ?? false,
       attempt,
       storage,
       needsSignIn: session.needsSignIn,
@@ -202,6 +217,13 @@ export class LiveReplica implements Replica {
         answeredAt,
       }))
       .reverse();
+
+  readonly attachPhotos: Replica['attachPhotos'] = (...args) => this.livePhotos().attach(...args);
+  readonly keepPictures: Replica['keepPictures'] = (...args) => this.livePhotos().keepAll(...args);
+  readonly attachKept: Replica['attachKept'] = (...args) => this.livePhotos().attachKept(...args);
+  readonly dropKept: Replica['dropKept'] = (...args) => this.livePhotos().dropKept(...args);
+  readonly picture: Replica['picture'] = (...args) => this.livePhotos().find(...args);
+  readonly heldPictures: Replica['heldPictures'] = () => this.photos?.held() ?? NO_PICTURES;
 
   readonly draft: Replica['draft'] = {
     read: <T>(key: string) => this.person?.drafts.get(key) as T | undefined,
@@ -236,6 +258,24 @@ export class LiveReplica implements Replica {
     return this.person;
   }
 
+  private livePhotos(): LivePhotos {
+    if (!this.photos) throw new Error('Nobody is signed in.');
+    return this.photos;
+  }
+
+  private photosOf({ personId, pictures }: PersonStore): LivePhotos {
+    return new LivePhotos({
+      world: this.world,
+      store: pictures,
+      newId: this.newId,
+      nowMs: () => this.device.nowMs(),
+      view: this.view,
+      holdAll: this.holdAll,
+      fetch: (path, init) => this.session.fetchAs(personId, path, init),
+      onChange: () => this.changed(),
+    });
+  }
+
   private today(): string {
     const shopZone = this.seen?.view.timeZone ?? this.world.timeZone;
     return dayAt(this.device.nowMs(), shopZone);
@@ -253,6 +293,7 @@ export class LiveReplica implements Replica {
     const next = me && (await PersonStore.open(this.world, this.seal, me.personId));
     return () => {
       this.person = next;
+      this.photos = next && this.photosOf(next);
       this.attempt = { phase: 'idle' };
       before?.close();
     };
@@ -261,6 +302,7 @@ export class LiveReplica implements Replica {
   private async hearTab(about: string): Promise<void> {
     if (about === 'session') await this.session.load();
     else if (about === 'drafts') await this.person?.readDrafts();
+    else if (about === 'pictures') await this.person?.pictures.read();
     else await this.device.catchUp();
     this.changed();
   }

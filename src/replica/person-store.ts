@@ -1,10 +1,12 @@
 import { get, promisifyRequest, set } from 'idb-keyval';
 import { z } from 'zod';
 import { refKey, type Entity } from '#shared/sync/row.ts';
+import { PICTURE_STORES, PictureStore } from './photos/picture-store.ts';
 import { isReadableRow } from './readable-row.ts';
 import type { Seal } from './seal.ts';
+import { openRecord, openRecords } from './sealed-records.ts';
 import { KeptDatabase } from './store.ts';
-import { BROKEN_STORE, putAside, readEntries } from './stored-records.ts';
+import { BROKEN_STORE } from './stored-records.ts';
 import { Turns } from './turns.ts';
 import type { Rows } from './view.ts';
 import type { World } from './world.ts';
@@ -27,9 +29,10 @@ export interface Pulled {
   pullsBefore: number;
 }
 
-/** What the device keeps for a person: rows, how far they are heard, drafts, and where the person was last. All of it sealed. */
+/** What the device keeps for a person: rows, how far they are heard, drafts, pictures, and where the person was last. All of it sealed. */
 export class PersonStore {
   readonly personId: string;
+  readonly pictures: PictureStore;
   rows: Rows = new Map();
   cursor: string | null = null;
   heardAt: string | null = null;
@@ -47,15 +50,21 @@ export class PersonStore {
     this.database = new KeptDatabase({
       indexedDB: world.indexedDB,
       name: `ribband-person-${personId}`,
-      stores: ['rows', 'about', 'drafts', BROKEN_STORE],
+      stores: ['rows', 'about', 'drafts', ...PICTURE_STORES, BROKEN_STORE],
       onBlocked: world.onBlocked,
     });
+    this.pictures = new PictureStore(this.sealed);
+  }
+
+  private get sealed() {
+    return { database: this.database, seal: this.seal };
   }
 
   static async open(world: World, seal: Seal, personId: string): Promise<PersonStore> {
     const store = new PersonStore(world, seal, personId);
     await store.turns.take(() => store.readAll());
     await store.readDrafts();
+    await store.pictures.read();
     return store;
   }
 
@@ -113,8 +122,9 @@ export class PersonStore {
     return next;
   }
 
-  /** Forgets the rows, as when the person signs out. Drafts stay: nobody else has them. */
-  forgetRows(): Promise<void> {
+  /** Forgets the rows, and pictures that the server has, as when the person signs out. Drafts stay: nobody else has them. */
+  async forgetRows(): Promise<void> {
+    await this.pictures.forgetSent();
     return this.turns.take(async () => {
       await this.database.transact(['rows', 'about'], 'readwrite', (transaction) => {
         transaction.objectStore('rows').clear();
@@ -152,15 +162,15 @@ export class PersonStore {
   /** Reads the drafts as they are kept; another tab may have changed them. */
   readDrafts(): Promise<void> {
     return this.turns.take(async () => {
-      const { opened } = await this.openAll('drafts', z.object({ value: z.unknown() }));
+      const { opened } = await openRecords(this.sealed, 'drafts', z.object({ value: z.unknown() }));
       this.drafts = new Map(opened.map(([key, { value }]) => [key, value]));
     });
   }
 
   private async readAll(): Promise<void> {
     this.pulls = await this.readPulls();
-    const { opened, areSomeBroken } = await this.openAll('rows', storedRowSchema);
-    const heard = await this.openOne('heard', heardSchema);
+    const { opened, areSomeBroken } = await openRecords(this.sealed, 'rows', storedRowSchema);
+    const heard = await openRecord(this.sealed, 'about', 'heard', heardSchema);
     // a row that cannot be read is asked for again, with all the others
     this.cursor = areSomeBroken ? null : (heard?.cursor ?? null);
     this.heardAt = heard?.heardAt ?? null;
@@ -170,41 +180,11 @@ export class PersonStore {
         .filter(([, { entity, row }]) => isReadableRow(entity, row))
         .map(([, { entity, row }]) => [refKey({ entity: entity as Entity, id: row.id }), { entity, row }]),
     );
-    this.remembered = (await this.openOne('remembered', rememberedSchema)) ?? this.remembered;
+    this.remembered = (await openRecord(this.sealed, 'about', 'remembered', rememberedSchema)) ?? this.remembered;
   }
 
   private async readPulls(): Promise<number> {
     return readCount(await get('pulls', this.database.store('about')));
-  }
-
-  private async openOne<T>(key: string, schema: z.ZodType<T>): Promise<T | null> {
-    const stored: unknown = await get(key, this.database.store('about'));
-    return stored === undefined ? null : this.openStored(stored, schema);
-  }
-
-  private async openStored<T>(stored: unknown, schema: z.ZodType<T>): Promise<T | null> {
-    try {
-      const read = schema.safeParse(await this.seal.open(stored));
-      return read.success ? read.data : null;
-    } catch {
-      return null;
-    }
-  }
-
-  private async openAll<T>(
-    store: string,
-    schema: z.ZodType<T>,
-  ): Promise<{ opened: [string, T][]; areSomeBroken: boolean }> {
-    const stored = await readEntries(this.database, store);
-    const values = await Promise.all(
-      stored.map(async ([key, value]) => [key, value, await this.openStored(value, schema)] as const),
-    );
-    const broken = values
-      .filter(([, , read]) => read === null)
-      .map(([key, value]): [string, unknown] => [key, value]);
-    if (broken.length > 0) await putAside(this.database, store, broken);
-    const opened = values.flatMap(([key, , read]): [string, T][] => (read === null ? [] : [[key, read]]));
-    return { opened, areSomeBroken: broken.length > 0 };
   }
 }
 

@@ -38,6 +38,15 @@ const schemas: Record<string, z.ZodType> = {
     hours: z.array(z.looseObject({ personId: z.string(), minutes: z.number() })),
     additions: itemsSchema,
   }),
+  finding: z.looseObject({ ...madeShape, boatId: z.string(), kind: z.string(), text: z.string() }),
+  sound: z.looseObject({ ...madeShape, boatId: z.string() }),
+  photo: z.looseObject({
+    ...madeShape,
+    boatId: z.string(),
+    sha256: z.string(),
+    width: z.number(),
+    height: z.number(),
+  }),
   setAside: z.looseObject({
     ...madeShape,
     opKey: z.string(),

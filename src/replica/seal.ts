@@ -1,4 +1,7 @@
-/** What stands between the replica and what is stored of a person. Sealing is done before a transaction opens. */
+/**
+ * What stands between the replica and what is stored of a person. Sealing is done before a transaction opens. Values are
+ * plain data; a picture's bytes in it are a Uint8Array.
+ */
 export interface Seal {
   seal(value: unknown): Promise<unknown>;
   /** Rejects where `stored` cannot be opened. */

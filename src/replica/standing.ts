@@ -11,15 +11,20 @@ interface Standing {
   device: DeviceStore;
   person: PersonStore | null;
   attempt: Attempt;
+  heldPhotos: number;
+  isSendingPhotos: boolean;
   storage: SyncState['storage'];
   needsSignIn: boolean;
 }
 
-export function composeSyncState({ device, person, attempt, storage, needsSignIn }: Standing): SyncState {
+export function composeSyncState(standing: Standing): SyncState {
+  const { device, person, attempt, heldPhotos, isSendingPhotos, storage, needsSignIn } = standing;
   const replaced = person && replacedDevice(device.deviceId, person);
   return {
     phase: needsSignIn && attempt.phase !== 'syncing' ? 'sign-in-needed' : attempt.phase,
     heldOps: device.outbox.length,
+    heldPhotos,
+    isSendingPhotos,
     oldestHeldAt: device.outbox[0]?.heldSince ?? null,
     lastHeardAt: person?.heardAt ?? null,
     clockAheadMs: clockAheadMs(device.state.offsetMs),

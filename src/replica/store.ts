@@ -7,7 +7,8 @@ interface Settings {
   onBlocked: () => void;
 }
 
-const VERSION = 1;
+// one more for each time that a list of stores has grown
+const VERSION = 2;
 
 /**
  * An IndexedDB database of key-value stores. Every transaction is strict: once it is done, it is on the disk.

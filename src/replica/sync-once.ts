@@ -9,6 +9,7 @@ import { latestBelieved, measureOffset } from './device-clock.ts';
 import type { Answered, DeviceStore } from './device-store.ts';
 import { Gathering } from './gathering.ts';
 import type { PersonStore } from './person-store.ts';
+import { heldPictures } from './photos/picture-store.ts';
 import { NOT_OURS, TimedOut, inTime, isUnreachable, readJson, wordsOf } from './request.ts';
 import type { SyncResult } from './sync-state.ts';
 import type { World } from './world.ts';
@@ -69,7 +70,7 @@ export class Syncer {
     const before = { pulls: person.pulls, heard: device.unheardBy(person.personId) };
     const batch = takeBatch(device.outbox, this.share);
     const gathering = new Gathering(person.cursor);
-    const first = await this.ask(person.personId, this.firstRequest(batch, person.cursor));
+    const first = await this.ask(person.personId, this.firstRequest(batch, person));
     if (!first.heard) return first.result;
     let last = first.heard;
     if (last.answer.outcomes.length !== batch.length)
@@ -96,14 +97,14 @@ export class Syncer {
     return { outcome: 'done', sent: batch.length, rows: gathering.rows.size };
   }
 
-  private firstRequest(batch: Batch, cursor: string | null): SyncRequest {
+  private firstRequest(batch: Batch, { cursor, pictures }: PersonStore): SyncRequest {
     const { device, world } = this.syncing;
     const left = device.outbox.slice(batch.length);
     return {
       deviceId: device.deviceId,
       cursor,
       ops: batch.map(({ op }) => op),
-      held: { ops: left.length, photos: 0, ...(left[0] ? { oldest: left[0].heldSince } : {}) },
+      held: { ops: left.length, photos: heldPictures(pictures.queue).length, ...(left[0] ? { oldest: left[0].heldSince } : {}) },
       appVersion: world.appVersion,
       sentAt: new Date(device.nowMs()).toISOString(),
     };

@@ -1,3 +1,5 @@
+import type { PreparedPicture } from './photos/picture.ts';
+
 /** What tells the tabs of one device of each other's doings. */
 export interface Channel {
   post(message: string): void;
@@ -9,8 +11,9 @@ export interface Locks {
   request<T>(name: string, work: () => Promise<T>): Promise<T>;
 }
 
-/** The browser's promise to keep what is stored. */
+/** The browser's promise to keep what is stored, and how much room it gives, in bytes. */
 export interface StorageKeeping {
+  estimate(): Promise<{ quota?: number; usage?: number }>;
   persist(): Promise<boolean>;
   persisted(): Promise<boolean>;
 }
@@ -34,6 +37,8 @@ export interface World {
   onWake(listener: () => void): () => void;
   /** the bytes of a text in gzip, or null where the browser cannot */
   gzip: ((text: string) => Promise<Blob>) | null;
+  /** Makes a picture of a file ready to be sent. Rejects with a PictureError where it is none. */
+  preparePicture(file: File): Promise<PreparedPicture>;
   timeZone: string;
   appVersion: string;
   /** told when another tab, on an older version, holds a database back */

@@ -6,6 +6,7 @@ import { mergeBatch } from '#shared/sync/merge.ts';
 import { syncRequestSchema, type SyncAnswer, type SyncRequest } from '#shared/sync/protocol.ts';
 import type { Entity } from '#shared/sync/row.ts';
 import { Turns } from '#src/replica/turns.ts';
+import { MemoryPictures } from './memory-pictures.ts';
 
 export const TIME_ZONE = 'Europe/Dublin';
 
@@ -42,6 +43,7 @@ export class MemoryServer {
   store = new MemoryStore();
   readonly people = new Map<string, Person>();
   readonly devices = new Map<string, Device>();
+  readonly pictures = new MemoryPictures(() => this.store);
   readonly shopId: string;
   /** rows in an answer, at most, whatever a phone asks for */
   pageRowsMax = 1000;
@@ -108,6 +110,7 @@ export class MemoryServer {
       const bearer = this.tokens.get(asked.authorization?.replace('Bearer ', '') ?? '');
       if (!bearer || this.isEveryoneSignedOut) return problem(401, 'Sign in.');
       if (method === 'POST' && path === '/api/sync') return this.sync(asked.body, bearer);
+      if (path.startsWith('/api/photos/')) return this.pictures.answer(asked);
       return problem(404, 'There is nothing here.');
     });
   }

@@ -3,6 +3,7 @@ import { openReplica } from '#src/replica/live-replica.ts';
 import type { World } from '#src/replica/world.ts';
 import { makeClock } from './clock.ts';
 import { Power } from './power.ts';
+import { preparedAsItIs } from './prepared-picture.ts';
 import { Seeded } from './seeded.ts';
 import { TabChannels, TabLocks } from './tabs.ts';
 
@@ -29,6 +30,7 @@ export async function openNetworked(changes: Partial<World> = {}) {
     },
     onWake: () => () => {},
     gzip: null,
+    preparePicture: (file) => preparedAsItIs(file),
     timeZone: 'UTC',
     appVersion: '0.0.0-test',
     onBlocked() {},

@@ -1,7 +1,8 @@
 import { IDBFactory } from 'fake-indexeddb';
 import { openReplica, type LiveReplica } from '#src/replica/live-replica.ts';
-import type { World } from '#src/replica/world.ts';
+import type { StorageKeeping, World } from '#src/replica/world.ts';
 import type { CookieJar, MemoryServer } from './memory-server.ts';
+import { preparedAsItIs } from './prepared-picture.ts';
 import { Power, PowerCut, poweredIndexedDB } from './power.ts';
 import { Seeded } from './seeded.ts';
 import { TabChannels, TabLocks } from './tabs.ts';
@@ -44,6 +45,8 @@ export class Phone {
   /** how far its clock is ahead of the world's, in milliseconds */
   aheadMs = 0;
   hasLocks = true;
+  /** null is a browser that tells nothing of its room */
+  storage: StorageKeeping | null = null;
   tabs: Tab[] = [];
   /** what its code reported as its own mistake */
   readonly reports: unknown[] = [];
@@ -88,7 +91,8 @@ export class Phone {
       randomBytes: this.lots.bytes,
       locks: this.hasLocks ? this.locks.join(power) : null,
       channel: this.channels.join(power),
-      storage: null,
+      storage: this.storage,
+      preparePicture: (file) => preparedAsItIs(file),
       after(ms, work) {
         const timer = { ms, work };
         timers.push(timer);
@@ -121,7 +125,7 @@ export class Phone {
       method: init.method ?? 'GET',
       path,
       authorization: new Headers(init.headers).get('Authorization'),
-      body: init.body ? (JSON.parse(init.body as string) as unknown) : null,
+      body: typeof init.body === 'string' ? (JSON.parse(init.body) as unknown) : init.body,
     };
     if (this.lots.chance(repeats)) await this.server.answer(asked, this.jar);
     const response = await this.server.answer(asked, this.jar);

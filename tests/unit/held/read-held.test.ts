@@ -124,6 +124,8 @@ describe('how sending stands', () => {
   const state: SyncState = {
     phase: 'idle',
     heldOps: 0,
+    heldPhotos: 0,
+    isSendingPhotos: false,
     oldestHeldAt: null,
     lastHeardAt: '2026-05-04T06:40:00.000Z',
     clockAheadMs: null,

@@ -15,6 +15,8 @@ const here = {
 const state: SyncState = {
   phase: 'idle',
   heldOps: 0,
+  heldPhotos: 0,
+  isSendingPhotos: false,
   oldestHeldAt: null,
   lastHeardAt: HEARD,
   clockAheadMs: null,
@@ -83,8 +85,8 @@ describe('what is wrong with a device', () => {
 
 describe('the places', () => {
   test('are those of all roles that a person has', () => {
-    expect(placesFor(['crew']).map(({ to }) => to)).toEqual(['/alongside']);
-    expect(placesFor(['crew', 'owner']).map(({ to }) => to)).toEqual(['/alongside', '/own-boats']);
+    expect(placesFor(['crew']).map(({ to }) => to)).toEqual(['/alongside', '/work', '/plan']);
+    expect(placesFor(['crew', 'owner']).map(({ to }) => to)).toEqual(['/alongside', '/work', '/plan', '/own-boats']);
   });
 
   test('begin where the person works', () => {
