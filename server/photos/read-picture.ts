@@ -36,7 +36,7 @@ export async function readPicture(bytes: Buffer): Promise<ReadPicture | Refused>
   const begin = bytes.toString('latin1', 0, BEGIN_BYTES);
   const format = FORMATS.find(({ begins }) => begins.test(begin));
   if (!format) return { refused: 'This is no JPEG, PNG or WebP picture.' };
-  const unreadable = { refused: `This begins as a ${format.mediaType} but cannot be read as one.` };
+  const unreadable = { refused: `This begins as ${format.mediaType} but cannot be read as such.` };
   const said = await readHead(bytes);
   if (!said || said.format !== format.name) return unreadable;
   const { width, height } = said.autoOrient;

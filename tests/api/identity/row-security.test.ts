@@ -140,7 +140,7 @@ test('an owner who is no superuser can migrate, twice at once, and the app works
     pathname: `/${name}`,
   }).href;
   const runs = await Promise.all([migrate(url), migrate(url)]);
-  expect(runs.flat().sort()).toEqual(['0001-shops', '0002-identity', '0003-record', '0004-notes']);
+  expect(runs.flat().sort()).toEqual(['0001-shops', '0002-identity', '0003-record', '0004-notes', '0005-picture-files']);
   const database = openDatabase(url);
   const shop = await makeShop(database);
   expect(
