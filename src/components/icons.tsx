@@ -19,6 +19,7 @@ const STROKES = {
   plus: <path d="M12 4v16M4 12h16" />,
   minus: <path d="M4 12h16" />,
   back: <path d="M10.500 4.500L3 12l7.500 7.500M3.500 12H21" />,
+  forward: <path d="M13.500 4.500L21 12l-7.500 7.500M20.500 12H3" />,
   undo: <path d="M8 4L3.500 8.500 8 13M4 8.500h10a5.750 5.750 0 010 11.500H8" />,
   people: (
     <>
@@ -33,6 +34,15 @@ const STROKES = {
       <circle cx="12" cy="13" r="3.750" />
     </>
   ),
+  found: <path d="M15 2.500l6.500 6.500-9 4-6.500 1.500L7.500 8zM9.500 14.500L3 21M6 21.500h12" />,
+  search: (
+    <>
+      <circle cx="10.500" cy="10.500" r="7" />
+      <path d="M15.500 15.500L21.500 21.500" />
+    </>
+  ),
+  days: <path d="M3.500 5h17v15.500h-17zM3.500 10h17M8 2.500v5M16 2.500v5" />,
+  pictures: <path d="M6.500 6.500h15v14h-15zM3 17V3h15M6.500 17l4.500-5 4 4.500 2.500-2.500 4 4" />,
   close: <path d="M5 5l14 14M19 5L5 19" />,
 } satisfies Record<string, ReactNode>;
 

@@ -1,5 +1,7 @@
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { createContext, useContext, useEffect, useSyncExternalStore, type ReactNode } from 'react';
+import { arrivedOf, canCome } from './photos/arrived.ts';
+import type { HeldPicture, PictureSize } from './photos/picture.ts';
 import type { Holding, Replica } from './replica.ts';
 import type { Me, View } from './view.ts';
 
@@ -62,4 +64,46 @@ export function useSyncState() {
 export function useMe(): Me | null {
   const replica = useReplica();
   return useSyncExternalStore(replica.subscribe, replica.session.current);
+}
+
+/** The record's pictures that this device has not brought to the server whole. */
+export function useHeldPictures(): HeldPicture[] {
+  const replica = useReplica();
+  return useSyncExternalStore(replica.subscribe, replica.heldPictures);
+}
+
+export interface SeenPicture {
+  blob: Blob | null;
+  /** 'coming': the server has not got it yet; 'away': it has, and cannot be asked just now */
+  state: 'here' | 'looking' | 'coming' | 'away';
+  /** how this device stands with sending it, where it has it to send */
+  held: HeldPicture | undefined;
+}
+
+/** How long until a picture that could not be had is asked for again, in milliseconds. */
+const ASK_AGAIN_MS = 20_000;
+
+/** A picture from this device, or else from the server; asked for again while it is not to be had. */
+export function usePicture(sha256: string, size: PictureSize): SeenPicture {
+  const replica = useReplica();
+  const arrived = useSyncExternalStore(replica.subscribe, () =>
+    replica.session.current() ? arrivedOf(replica.view(), sha256) : undefined,
+  );
+  const held = useHeldPictures().find((picture) => picture.sha256 === sha256);
+  const { data, refetch } = useQuery({
+    queryKey: ['picture', sha256, size],
+    queryFn: () => replica.picture(sha256, size),
+    networkMode: 'always',
+    staleTime: ({ state }) => (state.data ? Infinity : 0),
+    refetchInterval: ({ state }) => (state.data ? false : ASK_AGAIN_MS),
+    retry: false,
+  });
+  // the server has more of it, or this device, since it was last looked for
+  useEffect(() => {
+    if (data === null) void refetch();
+    // eslint-disable-next-line react-hooks/exhaustive-deps -- an answer of nothing must not ask again at once
+  }, [arrived, held?.state, refetch]);
+  if (data) return { blob: data, state: 'here', held };
+  if (data === undefined) return { blob: null, state: 'looking', held };
+  return { blob: null, state: canCome(arrived, size) ? 'away' : 'coming', held };
 }

@@ -4,6 +4,7 @@ import type { Attached, Holding, Kept } from '../replica.ts';
 import { Turns } from '../turns.ts';
 import type { View } from '../view.ts';
 import type { World } from '../world.ts';
+import { arrivedOf, canCome } from './arrived.ts';
 import type {
   HeldPicture,
   KeptPicture,
@@ -42,7 +43,10 @@ export class LivePhotos {
 
   constructor(dealings: Dealings) {
     this.dealings = dealings;
-    this.finder = new PictureFinder(dealings);
+    this.finder = new PictureFinder({
+      ...dealings,
+      canCome: (sha256, size) => canCome(arrivedOf(dealings.view(), sha256), size),
+    });
   }
 
   async attach(
@@ -50,7 +54,7 @@ export class LivePhotos {
     about: PhotoAbout,
     onProgress: OnProgress = () => {},
   ): Promise<Attached> {
-    const use = async (picture: PreparedPicture, name: string) => {
+    const settle = async (picture: PreparedPicture, name: string) => {
       const kept = await this.keep(picture, name, true);
       try {
         await this.dealings.holdAll([attachOf(kept, about)]);
@@ -60,14 +64,14 @@ export class LivePhotos {
       }
       return kept.photoId;
     };
-    const { taken, failed } = await takePictures({ ...this.dealings, files, onProgress, use });
+    const { taken, failed } = await takePictures({ ...this.dealings, files, onProgress, settle });
     this.changed();
     return { attached: taken, failed };
   }
 
   async keepAll(files: readonly File[], onProgress: OnProgress = () => {}): Promise<Kept> {
-    const use = (picture: PreparedPicture, name: string) => this.keep(picture, name, false);
-    const { taken, failed } = await takePictures({ ...this.dealings, files, onProgress, use });
+    const settle = (picture: PreparedPicture, name: string) => this.keep(picture, name, false);
+    const { taken, failed } = await takePictures({ ...this.dealings, files, onProgress, settle });
     this.changed();
     return { kept: taken, failed };
   }

@@ -16,6 +16,8 @@ interface Showing {
   world: World;
   store: PictureStore;
   nowMs: () => number;
+  /** whether the server has it, as far as is known here */
+  canCome: (sha256: string, size: PictureSize) => boolean;
   fetch: (path: string, init: RequestInit) => Promise<Response>;
 }
 
@@ -41,6 +43,7 @@ export class PictureFinder {
   private async look(sha256: string, size: PictureSize): Promise<Blob | null> {
     const own = await this.showing.store.bytes(sha256, SERVES[size]);
     if (own) return own;
+    if (!this.showing.canCome(sha256, size)) return null;
     const heard = await this.ask(sha256, size);
     if (heard && size !== 'full') await this.keep(sha256, size, heard);
     return heard;

@@ -14,7 +14,7 @@ interface Taking<T> {
   files: readonly File[];
   onProgress: (progress: PickProgress) => void;
   /** what is to become of each; what it rejects with is told of that one alone */
-  use: (picture: PreparedPicture, name: string) => Promise<T>;
+  settle: (picture: PreparedPicture, name: string) => Promise<T>;
 }
 
 /** Takes in a pick of files, one after another. What fails is named, and holds up none of the others. */
@@ -37,14 +37,14 @@ export async function takePictures<T>(taking: Taking<T>): Promise<{ taken: T[]; 
   return { taken, failed };
 }
 
-async function takeOne<T>({ world, store, use }: Taking<T>, file: File): Promise<T> {
+async function takeOne<T>({ world, store, settle }: Taking<T>, file: File): Promise<T> {
   const picture = await world.preparePicture(file);
   try {
-    return await use(picture, file.name);
+    return await settle(picture, file.name);
   } catch (error) {
     // what the server has is let go of before anything is refused
     if (!isDiskFull(error) || (await store.trim(0)) === 0) throw error;
-    return use(picture, file.name);
+    return settle(picture, file.name);
   }
 }
 
