@@ -65,6 +65,7 @@ export class LiveReplica implements Replica {
     this.session = new LiveSession({
       world,
       device,
+      heldPhotos: () => this.heldPictures().length,
       prepare: (me) => this.prepare(me),
       onChange: () => this.changed(),
     });
@@ -162,7 +163,7 @@ export class LiveReplica implements Replica {
     await this.photos?.retryRefused();
     const result = await this.syncNow();
     if (result.outcome !== 'done') return result;
-    return (await this.photos?.send()) ?? result;
+    return (await this.photos?.sent()) ?? result;
   };
 
   private async sync(): Promise<SyncResult> {
@@ -197,7 +198,7 @@ export class LiveReplica implements Replica {
     const state = composeSyncState({
       device,
       person,
-      heldPhotos: photos?.held().length ?? 0,
+      heldPictures: photos?.held() ?? NO_PICTURES,
       isSendingPhotos: photos?.isSending ?? false,
       attempt,
       storage,

@@ -51,6 +51,8 @@ interface Token {
 interface Dealings {
   world: World;
   device: DeviceStore;
+  /** how many pictures of the one signed in are not sent; they go when that person signs in here again */
+  heldPhotos: () => number;
   /** makes ready what `me` needs; what it resolves with is called as they become the one who is signed in */
   prepare: (me: Me | null) => Promise<() => void>;
   /** called once who is signed in, or how, has changed */
@@ -106,12 +108,11 @@ export class LiveSession implements Session {
   }
 
   async signOut({ evenWithHeldOps = false } = {}): Promise<SignOutResult> {
-    const { world, device } = this.dealings;
-    const heldCount = device.outbox.length;
-    if (heldCount > 0 && !evenWithHeldOps) {
-      return {
-        refused: `${heldCount === 1 ? 'One thing is' : `${heldCount} things are`} not sent yet. Send first, or leave it on this device.`,
-      };
+    const { world } = this.dealings;
+    const held = this.heldWords();
+    if (held && !evenWithHeldOps) {
+      const photoWords = this.dealings.heldPhotos() > 0 ? ' Photos go when you sign in here again.' : '';
+      return { refused: `${held} not sent yet. Send first, or leave it on this device.${photoWords}` };
     }
     // without signal the server's half waits for the family to run out
     await inTime(world, SIGN_IN_MAX_MS, (signal) =>
@@ -120,6 +121,17 @@ export class LiveSession implements Session {
     this.tokens.clear();
     await this.keep({ ...this.record, me: null, needsSignIn: false });
     return { ok: true };
+  }
+
+  /** What would stay behind: 'One thing is', '3 things and 2 photos are'; null where nothing would. */
+  private heldWords(): string | null {
+    const { device, heldPhotos } = this.dealings;
+    const [ops, photos] = [device.outbox.length, heldPhotos()];
+    if (ops + photos === 0) return null;
+    if (ops + photos === 1) return ops === 1 ? 'One thing is' : 'One photo is';
+    const things = ops > 0 && `${ops} ${ops === 1 ? 'thing' : 'things'}`;
+    const pictures = photos > 0 && `${photos} ${photos === 1 ? 'photo' : 'photos'}`;
+    return `${[things, pictures].filter(Boolean).join(' and ')} are`;
   }
 
   readonly fetchAsMe = (path: string, init: RequestInit = {}): Promise<Response> => {

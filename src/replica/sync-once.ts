@@ -11,6 +11,7 @@ import { Gathering } from './gathering.ts';
 import type { PersonStore } from './person-store.ts';
 import { heldPictures } from './photos/picture-store.ts';
 import { NOT_OURS, TimedOut, inTime, isUnreachable, readJson, wordsOf } from './request.ts';
+import { oldestOf } from './standing.ts';
 import type { SyncResult } from './sync-state.ts';
 import type { World } from './world.ts';
 
@@ -100,11 +101,13 @@ export class Syncer {
   private firstRequest(batch: Batch, { cursor, pictures }: PersonStore): SyncRequest {
     const { device, world } = this.syncing;
     const left = device.outbox.slice(batch.length);
+    const photos = heldPictures(pictures.queue);
+    const oldest = oldestOf(left[0]?.heldSince, photos[0]?.since);
     return {
       deviceId: device.deviceId,
       cursor,
       ops: batch.map(({ op }) => op),
-      held: { ops: left.length, photos: heldPictures(pictures.queue).length, ...(left[0] ? { oldest: left[0].heldSince } : {}) },
+      held: { ops: left.length, photos: photos.length, ...(oldest ? { oldest } : {}) },
       appVersion: world.appVersion,
       sentAt: new Date(device.nowMs()).toISOString(),
     };

@@ -1,6 +1,6 @@
 import type { SyncState } from '#src/replica/sync-state.ts';
 import type { BarTone } from '#src/components/bars.tsx';
-import { momentWords } from '#src/words/day-words.ts';
+import { counted, momentWords } from '#src/words/day-words.ts';
 
 export interface RecordState {
   tone: BarTone;
@@ -21,12 +21,25 @@ interface Here {
 export function readRecordState(sync: SyncState, { timeZone, today, device }: Here): RecordState {
   const heard = sync.lastHeardAt && momentWords(sync.lastHeardAt, timeZone, today);
   const lastHeard = heard ? `last heard ${heard}` : 'not heard yet';
-  const held = sync.heldOps > 0 ? `${sync.heldOps} held on this ${device}` : null;
+  const held = heldWords(sync, device);
   if (sync.phase === 'sign-in-needed')
     return { tone: 'warning', left: 'Sign in to send', right: held ?? lastHeard };
-  if (held) return { tone: 'held', left: held, right: sync.phase === 'syncing' ? 'sending …' : lastHeard };
+  if (held)
+    return {
+      tone: 'held',
+      left: held,
+      right: sync.phase === 'syncing' || sync.isSendingPhotos ? 'sending …' : lastHeard,
+    };
   if (sync.phase === 'offline') return { tone: 'quiet', left: 'No signal, nothing held', right: lastHeard };
   if (sync.phase === 'failed') return { tone: 'quiet', left: 'Server not reached', right: lastHeard };
   if (!heard) return { tone: 'quiet', left: 'Getting the record …', right: null };
   return { tone: 'quiet', left: `All sent ${heard}`, right: null };
+}
+
+// '3 held on this phone', '2 photos held on this phone', '3 and 2 photos held on this phone'
+function heldWords({ heldOps, heldPhotos }: SyncState, device: string): string | null {
+  const held = [heldOps > 0 && String(heldOps), heldPhotos > 0 && counted(heldPhotos, 'photo')].filter(
+    Boolean,
+  );
+  return held.length > 0 ? `${held.join(' and ')} held on this ${device}` : null;
 }

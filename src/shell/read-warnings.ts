@@ -28,9 +28,12 @@ function clockWarning({ clockAheadMs }: SyncState, { device }: Here): Warning[] 
 }
 
 // the browser's promise matters only while something is here that is nowhere else
-function storageWarning({ storage, heldOps, oldestHeldAt }: SyncState, { device, nowMs }: Here): Warning[] {
+function storageWarning(
+  { storage, heldOps, heldPhotos, oldestHeldAt }: SyncState,
+  { device, nowMs }: Here,
+): Warning[] {
   const isOld = oldestHeldAt !== null && nowMs - Date.parse(oldestHeldAt) > OLD_MS;
-  if (storage === 'persistent' || heldOps === 0 || !isOld) return [];
+  if (storage === 'persistent' || heldOps + heldPhotos === 0 || !isOld) return [];
   const words = `What is held here is older than a day, and this browser may clear it to make room. Bring this ${device} into signal, or put Ribband on its home screen.`;
   return [{ kind: 'storage', words }];
 }

@@ -50,6 +50,8 @@ export class MemoryServer {
   backedUpTo: string | null = null;
   /** sessions are no longer good, as after a password was changed */
   isEveryoneSignedOut = false;
+  /** what the device that was heard last said that it holds */
+  lastHeld: SyncRequest['held'] | null = null;
   private readonly now: () => number;
   private readonly turns = new Turns();
   private tokens = new Map<string, { deviceId: string; personId: string }>();
@@ -174,6 +176,7 @@ export class MemoryServer {
     { deviceId, personId }: { deviceId: string; personId: string },
   ): Promise<Response> {
     const request = syncRequestSchema.parse(body);
+    this.lastHeld = request.held ?? null;
     if (request.deviceId !== deviceId) return problem(403, 'This token is for another device.');
     const outcomes = await mergeBatch(this.store, this.batchFrom(deviceId, personId), request.ops);
     const serverTime = new Date(this.now()).toISOString();

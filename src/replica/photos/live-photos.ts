@@ -39,6 +39,7 @@ export class LivePhotos {
   private readonly finder: PictureFinder;
   private readonly sends = new Turns();
   private queuedSend: Promise<NotSent> | null = null;
+  private lastSend: Promise<NotSent> = Promise.resolve(null);
   private seen: { queue: Queue; held: HeldPicture[] } | null = null;
 
   constructor(dealings: Dealings) {
@@ -117,14 +118,19 @@ export class LivePhotos {
   }
 
   /** Sends what waits. Asks while another is under way wait for one more round together. */
-  readonly send = (): Promise<NotSent> => {
-    if (!hasWaiting(this.dealings.store)) return Promise.resolve(null);
+  send(): Promise<NotSent> {
+    if (!hasWaiting(this.dealings.store)) return (this.lastSend = Promise.resolve(null));
     this.queuedSend ??= this.sends.take(() => {
       this.queuedSend = null;
       return this.sendWaiting();
     });
-    return this.queuedSend;
-  };
+    return (this.lastSend = this.queuedSend);
+  }
+
+  /** What comes of the sending that was last asked for. */
+  sent(): Promise<NotSent> {
+    return this.lastSend;
+  }
 
   /** Tries again, when next sending, what the server has refused. */
   async retryRefused(): Promise<void> {

@@ -3,8 +3,8 @@ import { Empty } from '#src/components/empty.tsx';
 import { Page, Section } from '#src/components/page.tsx';
 import { Planks } from '#src/components/ribband.tsx';
 import { useMe, useRead, useReplica } from '#src/replica/hooks.tsx';
-import { HeldRow, SentRow, SetAsideRow } from '#src/routes/held/op-rows.tsx';
-import { readHeld, readSent, readSetAside } from '#src/routes/held/read-held.ts';
+import { HeldPhotoRow, HeldRow, SentRow, SetAsideRow } from '#src/routes/held/op-rows.tsx';
+import { readHeld, readHeldPhotos, readSent, readSetAside } from '#src/routes/held/read-held.ts';
 import { SendNow } from '#src/routes/held/send-now.tsx';
 import { deviceWord } from '#src/shell/device-words.ts';
 import { homeFor } from '#src/shell/places.ts';
@@ -17,6 +17,7 @@ export default function HeldPage() {
   const home = homeFor(useMe()?.roles ?? []);
   const minute = useMinute();
   const held = useRead(['held', minute], readHeld);
+  const photos = useRead(['held photos'], (view) => readHeldPhotos(view, replica.heldPictures()));
   const setAside = useRead(['set aside'], readSetAside);
   const sent = useRead(['sent'], (view) => readSent(view, replica.sent()));
   return (
@@ -37,10 +38,21 @@ export default function HeldPage() {
               <HeldRow key={line.id} line={line} />
             ))}
           </Planks>
+        ) : photos.length > 0 ? (
+          <Empty>All that was said here is with the server; photos are on their way.</Empty>
         ) : (
           <Empty>Nothing is held. Everything said here is with the server.</Empty>
         )}
       </Section>
+      {photos.length > 0 && (
+        <Section title={`Photos on their way (${photos.length})`}>
+          <Planks>
+            {photos.map((line) => (
+              <HeldPhotoRow key={line.sha256} line={line} />
+            ))}
+          </Planks>
+        </Section>
+      )}
       {setAside.length > 0 && (
         <Section title="Set aside">
           <Planks>

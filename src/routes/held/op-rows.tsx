@@ -1,8 +1,9 @@
 import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
 import { type Bung, BungMark } from '#src/components/bung-mark.tsx';
+import { Thumb } from '#src/components/photo/thumb.tsx';
 import { PlainPlank } from '#src/components/plank.tsx';
-import type { HeldLine, SentLine, SetAsideLine } from '#src/routes/held/read-held.ts';
+import type { HeldLine, HeldPhotoLine, SentLine, SetAsideLine } from '#src/routes/held/read-held.ts';
 import type { OpInWords } from '#src/words/op-words.ts';
 
 /** Something held: what it is, where, since when, how old. */
@@ -11,6 +12,25 @@ export function HeldRow({ line }: { line: HeldLine }) {
     <OpRow line={line} mark="held">
       Made {line.made}, {line.age} ago{line.whose && `, by ${line.whose}`}
     </OpRow>
+  );
+}
+
+/** A picture on its way: where it is of, since when, how far it has come. */
+export function HeldPhotoRow({ line }: { line: HeldPhotoLine }) {
+  return (
+    <PlainPlank>
+      <div className="relative flex items-start gap-3">
+        <BungMark mark={line.isRefused ? 'loose' : 'held'} word="" />
+        <div className="w-[148px] shrink-0">
+          <Thumb sha256={line.sha256} words={`Photo, ${line.where}`} />
+        </div>
+        <div className="min-w-0">
+          <p className="font-semibold break-words">{line.where}</p>
+          <p>{line.became}</p>
+          <p className="text-slate">Taken in {line.made}</p>
+        </div>
+      </div>
+    </PlainPlank>
   );
 }
 

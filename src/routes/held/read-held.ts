@@ -1,4 +1,5 @@
 import type { SetAsideRow } from '#shared/set-aside/set-aside.ts';
+import type { HeldPicture } from '#src/replica/photos/picture.ts';
 import type { SentItem } from '#src/replica/replica.ts';
 import type { View } from '#src/replica/view.ts';
 import { momentWords, spanWords } from '#src/words/day-words.ts';
@@ -31,6 +32,16 @@ export interface SentLine extends OpInWords {
   isLoose: boolean;
 }
 
+export interface HeldPhotoLine {
+  sha256: string;
+  /** 'Penny Candle', or what the file was called where no photo names it */
+  where: string;
+  /** what has become of it, in one sentence */
+  became: string;
+  made: string;
+  isRefused: boolean;
+}
+
 const SENT_SHOWN_MAX = 30;
 
 /** What this device has not sent yet, the oldest first. */
@@ -42,6 +53,28 @@ export function readHeld(view: View): HeldLine[] {
     age: spanWords(Math.max(view.nowMs - Date.parse(heldSince), 0)),
     whose: personId === view.me.personId ? null : whoWords(view, personId),
   }));
+}
+
+/** The pictures that are not with the server whole, the oldest first. */
+export function readHeldPhotos(view: View, held: HeldPicture[]): HeldPhotoLine[] {
+  const photos = new Map(view.all('photo').map((photo) => [photo.sha256, photo]));
+  return held.map((picture) => {
+    const { sha256, name, since, state } = picture;
+    const boatId = photos.get(sha256)?.boatId;
+    return {
+      sha256,
+      where: (boatId && view.find('boat', boatId)?.name) ?? name,
+      became: pictureBecame(picture),
+      made: momentWords(since, view.timeZone, view.today),
+      isRefused: state === 'refused',
+    };
+  });
+}
+
+function pictureBecame({ state, words }: HeldPicture): string {
+  if (state === 'refused')
+    return `The server does not take it: ${words} It stays here; ‘Send now’ tries it again.`;
+  return state === 'thumb' ? 'The small picture is sent, the whole one waits.' : 'Waits to be sent.';
 }
 
 /** What this person sent and the server set aside: what waits first, then the newest. */

@@ -9,8 +9,8 @@ export function SendNow() {
   const replica = useReplica();
   const sync = useSyncState();
   const { timeZone, today } = useRead(['clock'], (view) => ({ timeZone: view.timeZone, today: view.today }));
-  const sending = useMutation({ mutationFn: () => replica.syncNow(), networkMode: 'always', retry: false });
-  const isBusy = sending.isPending || sync.phase === 'syncing';
+  const sending = useMutation({ mutationFn: () => replica.sendNow(), networkMode: 'always', retry: false });
+  const isBusy = sending.isPending || sync.phase === 'syncing' || sync.isSendingPhotos;
   return (
     <KeyRack>
       <p role="status">{isBusy ? 'Sending …' : sendWords(sync, timeZone, today)}</p>
@@ -20,7 +20,7 @@ export function SendNow() {
         </KeyLink>
       ) : (
         <Key kind="main" disabled={isBusy} onClick={() => sending.mutate()}>
-          {sync.heldOps > 0 ? 'Send now' : 'Ask for news now'}
+          {sync.heldOps + sync.heldPhotos > 0 ? 'Send now' : 'Ask for news now'}
         </Key>
       )}
     </KeyRack>

@@ -12,5 +12,5 @@ export function sendWords(sync: SyncState, timeZone: string, today: string): str
   if (sync.phase === 'offline') return `No way to the server just now. It is tried again by itself. ${heard}`;
   if (sync.phase === 'failed')
     return `${sync.words ?? 'The server could not take it.'} It is tried again by itself. ${heard}`;
-  return sync.heldOps > 0 ? `It goes by itself. ${heard}` : `All sent. ${heard}`;
+  return sync.heldOps + sync.heldPhotos > 0 ? `It goes by itself. ${heard}` : `All sent. ${heard}`;
 }

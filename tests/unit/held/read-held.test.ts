@@ -2,7 +2,7 @@ import { describe, expect, test } from 'vitest';
 import type { Op } from '#shared/sync/op.ts';
 import { formatStamp } from '#shared/sync/stamp.ts';
 import type { SyncState } from '#src/replica/sync-state.ts';
-import { readHeld, readSent, readSetAside } from '#src/routes/held/read-held.ts';
+import { readHeld, readHeldPhotos, readSent, readSetAside } from '#src/routes/held/read-held.ts';
 import { sendWords } from '#src/routes/held/send-words.ts';
 import { entryBy, MONDAY, shopAtBench, type Bench } from '#tests/unit/alongside/bench.ts';
 import type { Hand } from '#tests/worlds/record.ts';
@@ -120,6 +120,30 @@ test('what was sent tells what became of it, newest answer first, of this person
   expect(lines[0]!.became).toContain('loose end');
 });
 
+test('photos on their way are told by their boat, with how far they have come', async () => {
+  const bench = await shopAtBench();
+  const since = new Date(bench.record.nowMs).toISOString();
+  const [named, nameless] = ['a'.repeat(64), 'b'.repeat(64)];
+  const attach = {
+    photoId: bench.record.newId(),
+    sha256: named,
+    boatId: bench.boatId,
+    width: 4,
+    height: 3,
+    bytes: 9,
+  };
+  const view = heldView(bench, bench.rosa, [opOf(bench, bench.rosa, 'photo.attach', attach)]);
+  const lines = readHeldPhotos(view, [
+    { sha256: named, name: 'img_1.jpg', since, state: 'thumb' },
+    { sha256: nameless, name: 'img_2.jpg', since, state: 'refused', words: 'This is no picture.' },
+  ]);
+  expect(lines).toMatchObject([
+    { where: 'Penny Candle', became: 'The small picture is sent, the whole one waits.', isRefused: false },
+    { where: 'img_2.jpg', isRefused: true },
+  ]);
+  expect(lines[1]!.became).toContain('This is no picture.');
+});
+
 describe('how sending stands', () => {
   const state: SyncState = {
     phase: 'idle',
@@ -135,6 +159,7 @@ describe('how sending stands', () => {
 
   test('is said with what happens next', () => {
     expect(words({})).toBe('All sent. Last heard 07:40.');
+    expect(words({ heldPhotos: 1 })).toBe('It goes by itself. Last heard 07:40.');
     expect(words({ heldOps: 2 })).toBe('It goes by itself. Last heard 07:40.');
     expect(words({ phase: 'offline' })).toBe(
       'No way to the server just now. It is tried again by itself. Last heard 07:40.',

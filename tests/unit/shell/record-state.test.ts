@@ -38,6 +38,14 @@ describe('the state of the record', () => {
     });
   });
 
+  test('counts photos that are not sent beside what is held', () => {
+    expect(bar({ heldPhotos: 1 })).toMatchObject({ tone: 'held', left: '1 photo held on this phone' });
+    expect(bar({ heldOps: 3, heldPhotos: 2, isSendingPhotos: true })).toMatchObject({
+      left: '3 and 2 photos held on this phone',
+      right: 'sending …',
+    });
+  });
+
   test('never says that all is sent where the server cannot be reached', () => {
     for (const phase of ['offline', 'failed'] as const) expect(bar({ phase }).left).not.toContain('All sent');
   });
