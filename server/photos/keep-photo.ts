@@ -25,8 +25,13 @@ export async function keepPhoto(parts: PhotoParts, arrival: Arrival, bytes: Buff
   const read = await readPicture(bytes);
   if ('refused' in read) return read;
   // the bytes first: rows must not tell of what is not there
-  if (!(await isKept(parts, photo, size))) await parts.pictures.put(photo, size, read.bytes);
+  if (!(await isThere(parts, arrival))) await parts.pictures.put(photo, size, read.bytes);
   return noteAndTell(parts, arrival, read);
+}
+
+// under the name of whole bytes there can be no others; a thumbnail is told from another only by what is noted of it
+function isThere(parts: PhotoParts, { photo, size }: Arrival): Promise<boolean> {
+  return size === 'full' ? parts.pictures.has(photo, size) : isKept(parts, photo, size);
 }
 
 async function noteAndTell(
