@@ -14,6 +14,8 @@ const OPEN_SCREENS: [path: string, load: Load][] = [
 ];
 
 const loadDaySheet = () => import('#src/routes/day-sheet/day-sheet-page.tsx');
+const loadWeek = () => import('#src/routes/day-sheet/week/week-page.tsx');
+const loadPlan = () => import('#src/routes/plan/plan-page.tsx');
 const SIGNED_IN_SCREENS: [path: string, load: Load][] = [
   ['alongside', () => import('#src/routes/alongside/alongside-page.tsx')],
   ['log', () => import('#src/routes/alongside/log/log-page.tsx')],
@@ -24,6 +26,12 @@ const SIGNED_IN_SCREENS: [path: string, load: Load][] = [
   ['own-boats', () => import('#src/routes/own-boats/own-boats-page.tsx')],
   ['day', loadDaySheet],
   ['day/:date', loadDaySheet],
+  ['week', loadWeek],
+  ['week/:date', loadWeek],
+  ['work', () => import('#src/routes/work/work-page.tsx')],
+  ['work/:id', () => import('#src/routes/work/order-page.tsx')],
+  ['plan', loadPlan],
+  ['plan/:date', loadPlan],
   ['boats', () => import('#src/routes/boats/boats-page.tsx')],
   ['boats/:id', () => import('#src/routes/boats/boat-page.tsx')],
   ['people', () => import('#src/routes/people/people-page.tsx')],

@@ -14,11 +14,13 @@ interface PlacePageProps {
   /** For the window's title. */
   title: string;
   width?: 'wide' | 'line';
+  /** What stands at the foot: a DeedBar. */
+  foot?: ReactNode;
   children: ReactNode;
 }
 
 /** A place's whole screen: the places and the state of the record above it. On a desk both share one bar. */
-export function PlacePage({ title, width = 'line', children }: PlacePageProps) {
+export function PlacePage({ title, width = 'line', foot, children }: PlacePageProps) {
   const me = useMe();
   const isHeard = useRead(['heard'], (view) => view.all('shop').length > 0);
   const bars = (
@@ -29,7 +31,7 @@ export function PlacePage({ title, width = 'line', children }: PlacePageProps) {
     </>
   );
   return (
-    <Page width={width} bars={bars}>
+    <Page width={width} bars={bars} foot={foot}>
       <Warnings />
       {isHeard ? children : <NotHeard />}
     </Page>

@@ -9,6 +9,8 @@ interface PlaceForRoles {
 const PLACES: readonly PlaceForRoles[] = [
   { to: '/day', label: 'Day sheet', roles: ['foreman', 'office'] },
   { to: '/alongside', label: 'Alongside', roles: ['crew', 'foreman'] },
+  { to: '/work', label: 'Order of work', roles: ['foreman', 'crew', 'office'] },
+  { to: '/plan', label: 'Plan', roles: ['foreman', 'crew', 'office'] },
   { to: '/boats', label: 'Boats', roles: ['foreman', 'office'] },
   { to: '/people', label: 'People', roles: ['foreman', 'office'] },
   { to: '/devices', label: 'Devices', roles: ['foreman', 'office'] },

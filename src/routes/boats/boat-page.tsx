@@ -12,10 +12,6 @@ import { PlacePage } from '#src/shell/place-page.tsx';
 import { BoatSheet } from './boat-sheet.tsx';
 import { OwnersSheet } from './owners-sheet.tsx';
 import { readBoat, type BoatPage as Boat } from './read-boat.ts';
-import { StageBlock } from './stage-block.tsx';
-import { StageSheet } from './stage-sheet.tsx';
-import { Struck } from './struck.tsx';
-import { WorkSheet } from './work-sheet.tsx';
 
 /** One boat: what is known of her, whose she is, her stages and their tasks. */
 export default function BoatPage() {
@@ -34,7 +30,6 @@ export default function BoatPage() {
       <Particulars boat={boat} />
       <Owners boat={boat} />
       <Stages boat={boat} />
-      <Struck boat={boat} />
       <StrikeHer boat={boat} />
     </PlacePage>
   );
@@ -97,34 +92,24 @@ function Owners({ boat }: { boat: Boat }) {
 }
 
 function Stages({ boat }: { boat: Boat }) {
-  const [isAdding, setAdding] = useState(false);
-  const [isMaking, setMaking] = useState(false);
+  const orderKey = <KeyLink to={`/work/${boat.row.id}`}>Her order of work</KeyLink>;
   return (
-    <Section
-      title="Stages and tasks"
-      aside={
-        boat.mayChange && (
-          <Key icon="plus" onClick={() => setAdding(true)}>
-            Add a stage
-          </Key>
-        )
-      }
-    >
+    <Section title="Stages and tasks" aside={orderKey}>
       {boat.stages.length === 0 ? (
-        <Empty
-          action={boat.mayChange && <Key onClick={() => setMaking(true)}>Make her list from a template</Key>}
-        >
-          She has no stages yet. Work can be logged on her without one.
-        </Empty>
+        <Empty>She has no stages yet. Work can be logged on her without one.</Empty>
       ) : (
         <Planks>
-          {boat.stages.map((stage) => (
-            <StageBlock key={stage.row.id} boat={boat} stage={stage} />
+          {boat.stages.map(({ id, name, finished, tasks, minutes }) => (
+            <li key={id} className="flex items-baseline gap-4 bg-plank px-4 py-2 md:px-6">
+              <p className="min-w-0 flex-1 leading-snug break-words">
+                <span className={finished ? '' : 'font-semibold'}>{name}</span>
+                <span className="block text-slate">{[finished, tasks].filter(Boolean).join(' · ')}</span>
+              </p>
+              {minutes > 0 && <Hours minutes={minutes} />}
+            </li>
           ))}
         </Planks>
       )}
-      {isAdding && <StageSheet boat={boat} stage={null} onClose={() => setAdding(false)} />}
-      {isMaking && <WorkSheet boat={boat.row} onClose={() => setMaking(false)} />}
     </Section>
   );
 }

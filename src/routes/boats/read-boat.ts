@@ -6,28 +6,19 @@ import type { StageRow } from '#shared/stage/stage.ts';
 import { standingItems } from '#shared/sync/items.ts';
 import type { TaskRow } from '#shared/task/task.ts';
 import type { View } from '#src/replica/view.ts';
-import { dayWords, momentWords } from '#src/words/day-words.ts';
+import { counted, dayWords } from '#src/words/day-words.ts';
 import { listWords } from '#src/words/name-words.ts';
-import { stageWords } from '#src/words/where.ts';
 import { whoWords } from '#src/words/who.ts';
 import { readProgress } from './read-boats.ts';
 
-export interface TaskOfBoat {
-  row: TaskRow;
-  /** 'done by Rosa Mon 4 May' */
-  words: string | null;
-  assigned: string | null;
-}
-
 export interface StageOfBoat {
-  row: StageRow;
+  id: string;
+  name: string;
   minutes: number;
   /** 'finished Mon 4 May by Orrin'; null where it is not */
   finished: string | null;
-  /** 'after Strip out and Survey' */
-  after: string | null;
-  tasks: TaskOfBoat[];
-  doneTasks: number;
+  /** '3 of 4 tasks done'; null where it has none */
+  tasks: string | null;
 }
 
 export interface BoatPage {
@@ -38,8 +29,6 @@ export interface BoatPage {
   progress: { stages: string; tasks: string };
   minutes: number;
   stages: StageOfBoat[];
-  struckStages: StageRow[];
-  struckTasks: TaskRow[];
   mayChange: boolean;
 }
 
@@ -49,8 +38,8 @@ export function readBoat(view: View, boatId: string): BoatPage | null {
   if (!row) return null;
   const units = view.all('shop')[0]?.units ?? 'imperial';
   const own = view.all('entry').filter((entry) => entry.boatId === boatId);
-  const stages = view.all('stage').filter((stage) => stage.boatId === boatId);
-  const tasks = view.all('task').filter((task) => task.boatId === boatId);
+  const stages = view.all('stage').filter((stage) => stage.boatId === boatId && !stage.struck);
+  const tasks = view.all('task').filter((task) => task.boatId === boatId && !task.struck);
   const minutes = sumHours(hoursLines(own), 'stage');
   return {
     row,
@@ -62,24 +51,18 @@ export function readBoat(view: View, boatId: string): BoatPage | null {
       .map(({ id, name }) => ({ id, name })),
     progress: readProgress(view, boatId),
     minutes: [...minutes.values()].reduce((sum, part) => sum + part, 0),
-    stages: inOrder(stages.filter((stage) => !stage.struck)).map((stage) => ({
-      row: stage,
+    stages: inOrder(stages).map((stage) => ({
+      id: stage.id,
+      name: stage.name,
       minutes: minutes.get(stage.id) ?? 0,
       finished: finishedWords(view, stage),
-      after:
-        stage.after.length > 0 ? `after ${listWords(stage.after.map((id) => stageWords(view, id)))}` : null,
-      ...readTasks(
-        view,
-        tasks.filter((task) => task.stageId === stage.id && !task.struck),
-      ),
+      tasks: tasksWords(tasks.filter((task) => task.stageId === stage.id)),
     })),
-    struckStages: inOrder(stages.filter((stage) => stage.struck)),
-    struckTasks: tasks.filter((task) => task.struck),
     mayChange: view.me.roles.includes('foreman'),
   };
 }
 
-export function inOrder(stages: StageRow[]): StageRow[] {
+function inOrder(stages: StageRow[]): StageRow[] {
   return [...stages].sort((a, b) => a.order - b.order || (a.id < b.id ? -1 : 1));
 }
 
@@ -108,32 +91,7 @@ function finishedWords(view: View, stage: StageRow): string | null {
   return `finished ${dayWords(marks[0]!.workDate, view.today)} by ${names}`;
 }
 
-function readTasks(view: View, tasks: TaskRow[]): Pick<StageOfBoat, 'tasks' | 'doneTasks'> {
-  const sorted = [...tasks].sort((a, b) => Number(a.done) - Number(b.done) || (a.id < b.id ? -1 : 1));
-  return {
-    tasks: sorted.map((row) => ({
-      row,
-      words: taskWords(view, row),
-      assigned: row.assigneeIds?.length
-        ? `for ${listWords(row.assigneeIds.map((id) => whoWords(view, id)))}`
-        : null,
-    })),
-    doneTasks: tasks.filter((task) => task.done).length,
-  };
-}
-
-function taskWords(view: View, task: TaskRow): string | null {
-  const marks = standingItems(task.marks);
-  if (marks.length > 0) {
-    const said = marks.map(
-      (mark) => `${whoWords(view, mark.personId)} ${dayWords(mark.workDate, view.today)}`,
-    );
-    return `${task.twice ? 'done twice, by' : 'done by'} ${listWords(said)}`;
-  }
-  const starts = standingItems(task.starts);
-  if (starts.length === 0) return null;
-  const said = starts.map(
-    (start) => `${whoWords(view, start.personId)} ${momentWords(start.at, view.timeZone, view.today)}`,
-  );
-  return `started by ${listWords(said)}`;
+function tasksWords(tasks: TaskRow[]): string | null {
+  if (tasks.length === 0) return null;
+  return `${tasks.filter((task) => task.done).length} of ${counted(tasks.length, 'task')} done`;
 }

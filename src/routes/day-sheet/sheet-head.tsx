@@ -6,8 +6,9 @@ import { Key, KeyLink } from '#src/components/key.tsx';
 import { keyLook } from '#src/components/key-look.ts';
 import { Sheet } from '#src/components/sheet.tsx';
 import { TextField } from '#src/components/text-field.tsx';
-import { useRead, useSyncState } from '#src/replica/hooks.tsx';
-import { counted, longDayWords, momentWords } from '#src/words/day-words.ts';
+import { useRead } from '#src/replica/hooks.tsx';
+import { counted, longDayWords } from '#src/words/day-words.ts';
+import { AsLastHeard } from './as-last-heard.tsx';
 import { readNeighbours, type DaySheet } from './read-day-sheet.ts';
 
 interface SheetHeadProps {
@@ -38,6 +39,7 @@ export function SheetHead({ sheet, isByBoat, endCount, setAsideCount }: SheetHea
       <AsLastHeard />
       <div data-keys className="flex flex-wrap items-center justify-between gap-3">
         <CutChoice isByBoat={isByBoat} />
+        <KeyLink to={`/week/${sheet.day}`}>Week</KeyLink>
         <WaitingLink endCount={endCount} setAsideCount={setAsideCount} />
       </div>
     </div>
@@ -110,21 +112,6 @@ function OtherDay({ sheet, onClose }: { sheet: DaySheet; onClose: () => void }) 
         <TextField label="Which day" type="date" value={day} onChange={setDay} />
       </form>
     </Sheet>
-  );
-}
-
-/** Without signal the sheet says how old its news is. */
-function AsLastHeard() {
-  const sync = useSyncState();
-  const { timeZone, today } = useRead(['clock'], (view) => ({ timeZone: view.timeZone, today: view.today }));
-  if (sync.phase !== 'offline' && sync.phase !== 'failed') return null;
-  const heard = sync.lastHeardAt
-    ? `as last heard ${momentWords(sync.lastHeardAt, timeZone, today)}`
-    : 'nothing heard yet';
-  return (
-    <p className="justify-self-start bg-seam px-2 py-1 text-on-seam" role="status">
-      No signal here: this is {heard}. What you settle is held and sent later.
-    </p>
   );
 }
 

@@ -1,14 +1,14 @@
 import { describe, expect, test } from 'vitest';
 import { readBoat } from '#src/routes/boats/read-boat.ts';
 import { readBoats } from '#src/routes/boats/read-boats.ts';
-import { TestRecord, type Hand } from '#tests/worlds/record.ts';
+import { TestRecord } from '#tests/worlds/record.ts';
 
 const MONDAY = '2026-05-04';
 
 async function shop() {
   const record = new TestRecord();
   const orrin = record.hand('Orrin', 'foreman');
-  const [rosa, wes] = ['Rosa', 'Wes'].map((name) => record.hand(name, 'crew')) as [Hand, Hand];
+  const rosa = record.hand('Rosa', 'crew');
   const [boatId, first, second, taskId] = [record.newId(), record.newId(), record.newId(), record.newId()];
   await record.say(orrin, 'boat.add', { boatId, name: 'Brindle', arrivedOn: '2026-05-01', lengthMm: 5791 });
   await record.say(orrin, 'stage.add', {
@@ -25,7 +25,6 @@ async function shop() {
     record,
     orrin,
     rosa,
-    wes,
     boatId,
     first,
     second,
@@ -41,7 +40,7 @@ test('a boat nobody has added is not known', async () => {
 });
 
 describe('a boat', () => {
-  test('has her stages in order, with hours, and says what comes before each', async () => {
+  test('has her stages in order, with their hours and how many tasks are done', async () => {
     const { record, rosa, boatId, second, page } = await shop();
     const hours = [{ personId: rosa.personId, minutes: 90 }];
     const entry = {
@@ -54,9 +53,9 @@ describe('a boat', () => {
     };
     await record.say(rosa, 'entry.write', { ...entry, hours });
     const { stages, minutes } = page();
-    expect(stages.map(({ row, minutes: own, after }) => [row.name, own, after])).toEqual([
-      ['Strip', 0, null],
-      ['Varnish', 90, 'after Strip'],
+    expect(stages.map(({ name, minutes: own, tasks }) => [name, own, tasks])).toEqual([
+      ['Strip', 0, '0 of 1 task done'],
+      ['Varnish', 90, null],
     ]);
     expect(minutes).toBe(90);
   });
@@ -71,7 +70,7 @@ describe('a boat', () => {
     });
     await record.say(orrin, 'task.strike', { taskId, why: 'no need', saw: [] });
     expect(list().here[0]!.tasks).toBe('no tasks yet');
-    expect(page().struckTasks.map(({ title }) => title)).toEqual(['Scrape the transom']);
+    expect(page().stages[0]!.tasks).toBeNull();
   });
 
   test('tells a stage that is finished, by whom and when, and one that was taken up again', async () => {
@@ -81,13 +80,6 @@ describe('a boat', () => {
     expect(page().stages[0]!.finished).toBe('finished Mon 4 May by you');
     await record.say(orrin, 'stage.unmark', { stageId: first, markIds: [markId] });
     expect(page().stages[0]!.finished).toBeNull();
-  });
-
-  test('names both who ticked one task', async () => {
-    const { record, rosa, wes, taskId, page } = await shop();
-    for (const hand of [rosa, wes])
-      await record.say(hand, 'task.mark', { taskId, markId: record.newId(), workDate: MONDAY });
-    expect(page().stages[0]!.tasks[0]!.words).toBe('done twice, by Rosa Mon 4 May and Wes Mon 4 May');
   });
 
   test("is the foreman's to change, and shows her length in the shop's units", async () => {

@@ -7,25 +7,25 @@ import { Sheet } from '#src/components/sheet.tsx';
 import { TextField } from '#src/components/text-field.tsx';
 import { Why } from '#src/components/why.tsx';
 import { useHold, useReplica } from '#src/replica/hooks.tsx';
-import { FinishKey } from './finish-key.tsx';
-import type { BoatPage, StageOfBoat } from './read-boat.ts';
+import type { OrderOfWork } from './read-order.ts';
+import type { StageOfOrder } from './read-stages.ts';
 
 interface StageSheetProps {
-  boat: BoatPage;
+  order: OrderOfWork;
   /** null: a new stage */
-  stage: StageOfBoat | null;
+  stage: StageOfOrder | null;
   onClose: () => void;
 }
 
 const FIRST = 'first';
 
 /** Adds a stage, or changes its name, its place in the order and what comes before it. */
-export function StageSheet({ boat, stage, onClose }: StageSheetProps) {
+export function StageSheet({ order, stage, onClose }: StageSheetProps) {
   const replica = useReplica();
   const { mutateAsync: hold, error, isPending } = useHold();
-  const others = boat.stages.map(({ row }) => row).filter((row) => row.id !== stage?.row.id);
+  const others = order.stages.map(({ row }) => row).filter((row) => row.id !== stage?.row.id);
   const [name, setName] = useState(stage?.row.name ?? '');
-  const [follows, setFollows] = useState(() => before(boat, stage));
+  const [follows, setFollows] = useState(() => before(order, stage));
   const [after, setAfter] = useState(stage?.row.after ?? []);
   const [isAsked, setAsked] = useState(false);
   const [isStriking, setStriking] = useState(false);
@@ -37,7 +37,7 @@ export function StageSheet({ boat, stage, onClose }: StageSheetProps) {
     else {
       const data = {
         stageId: replica.newId(),
-        boatId: boat.row.id,
+        boatId: order.boat.id,
         name: name.trim(),
         order: orderAfter(others, follows),
         after,
@@ -47,10 +47,10 @@ export function StageSheet({ boat, stage, onClose }: StageSheetProps) {
     onClose();
   }
 
-  async function amend({ row }: StageOfBoat) {
+  async function amend({ row }: StageOfOrder) {
     const set = {
       ...(name.trim() !== row.name ? { name: name.trim() } : {}),
-      ...(follows !== before(boat, stage) ? { order: orderAfter(others, follows) } : {}),
+      ...(follows !== before(order, stage) ? { order: orderAfter(others, follows) } : {}),
       ...([...after].sort().join() !== [...row.after].sort().join() ? { after } : {}),
     };
     if (Object.keys(set).length > 0) await hold({ kind: 'stage.amend', data: { stageId: row.id, set } });
@@ -60,7 +60,7 @@ export function StageSheet({ boat, stage, onClose }: StageSheetProps) {
     <Sheet
       isOpen
       onClose={onClose}
-      title={stage?.row.name ?? `A stage of ${boat.row.name}`}
+      title={stage?.row.name ?? `A stage of ${order.boat.name}`}
       foot={
         <Key kind="main" disabled={isPending} onClick={() => void save()}>
           {stage ? 'Change' : 'Add it'}
@@ -96,7 +96,6 @@ export function StageSheet({ boat, stage, onClose }: StageSheetProps) {
           ))}
         </fieldset>
       )}
-      {stage?.finished && <FinishKey stage={stage} />}
       {stage && (
         <Key kind="danger" onClick={() => setStriking(true)}>
           Strike this stage
@@ -118,8 +117,8 @@ export function StageSheet({ boat, stage, onClose }: StageSheetProps) {
 }
 
 /** The stage that stands before one in the list; a new one stands last. */
-function before(boat: BoatPage, stage: StageOfBoat | null): string {
-  const ids = boat.stages.map(({ row }) => row.id);
+function before(order: OrderOfWork, stage: StageOfOrder | null): string {
+  const ids = order.stages.map(({ row }) => row.id);
   const index = stage ? ids.indexOf(stage.row.id) : ids.length;
   return ids[index - 1] ?? FIRST;
 }

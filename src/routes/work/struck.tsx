@@ -5,7 +5,7 @@ import { Section } from '#src/components/page.tsx';
 import { Planks } from '#src/components/ribband.tsx';
 import { Why } from '#src/components/why.tsx';
 import { useHold } from '#src/replica/hooks.tsx';
-import type { BoatPage } from './read-boat.ts';
+import type { OrderOfWork } from './read-order.ts';
 
 interface StruckLine {
   entity: 'stage' | 'task';
@@ -15,17 +15,17 @@ interface StruckLine {
 }
 
 /** Stages and tasks that were struck, and the way back. */
-export function Struck({ boat }: { boat: BoatPage }) {
+export function Struck({ order }: { order: OrderOfWork }) {
   const { mutate: hold } = useHold();
   const [asked, setAsked] = useState<StruckLine | null>(null);
   const lines: StruckLine[] = [
-    ...boat.struckStages.map(({ id, name, struck }) => ({
+    ...order.struckStages.map(({ id, name, struck }) => ({
       entity: 'stage' as const,
       id,
       title: name,
       why: struck!.why,
     })),
-    ...boat.struckTasks.map(({ id, title, struck }) => ({
+    ...order.struckTasks.map(({ id, title, struck }) => ({
       entity: 'task' as const,
       id,
       title,
@@ -42,7 +42,7 @@ export function Struck({ boat }: { boat: BoatPage }) {
             <p className="min-w-0 flex-1 leading-snug break-words">
               {line.title} <span className="text-slate">· {line.why}</span>
             </p>
-            {boat.mayChange && (
+            {order.mayChange && (
               <Key onClick={() => setAsked(line)}>
                 Restore<span className="sr-only"> {line.title}</span>
               </Key>
