@@ -1,0 +1,42 @@
+import type { Locator } from 'playwright-core';
+import { SIZES } from '#tests/e2e/gallery/open-gallery.ts';
+import { Device, type Owner } from '#tests/e2e/people/device.ts';
+
+/** The foreman at the laptop, with the Day sheet open. */
+export class Laptop {
+  readonly device: Device;
+
+  private constructor(device: Device) {
+    this.device = device;
+  }
+
+  static async unpack(owner: Owner, serverUrl: string): Promise<Laptop> {
+    return new Laptop(await Device.unpack(owner, { viewport: SIZES.desk }, serverUrl));
+  }
+
+  get page() {
+    return this.device.page;
+  }
+
+  /** What the sheet has under one person. */
+  person(name: string): Locator {
+    const heading = this.page.getByRole('heading', { name, exact: true });
+    return this.page.getByRole('listitem').filter({ has: heading });
+  }
+
+  /** The loose ends about one field of one entry. */
+  looseEnds(about: string, words: string): Locator {
+    const heading = this.page.getByRole('heading', { name: about });
+    return this.page
+      .locator('#loose-ends')
+      .getByRole('listitem')
+      .filter({ has: heading })
+      .filter({ hasText: words });
+  }
+
+  /** Takes one of the values of a loose end; done once it is gone. */
+  async settles(end: Locator, value: string): Promise<void> {
+    await end.getByRole('button', { name: `take ${value}` }).click();
+    await end.waitFor({ state: 'detached' });
+  }
+}
