@@ -40,10 +40,11 @@ export async function readRecord(serverUrl: string): Promise<ShopRecord> {
 }
 
 async function post(url: string, body: object, token?: string): Promise<unknown> {
-  const authorization = token ? { Authorization: `Bearer ${token}` } : {};
+  const headers = new Headers({ 'Content-Type': 'application/json' });
+  if (token) headers.set('Authorization', `Bearer ${token}`);
   const response = await fetch(url, {
     method: 'POST',
-    headers: { 'Content-Type': 'application/json', ...authorization },
+    headers,
     body: JSON.stringify(body),
   });
   if (!response.ok) throw new Error(`${url} answered ${response.status}: ${await response.text()}`);
