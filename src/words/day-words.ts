@@ -48,6 +48,11 @@ export function longDayWords(day: Day, today: Day): string {
   return `${LONG_WEEKDAYS[date.getUTCDay()]} ${date.getUTCDate()} ${LONG_MONTHS[date.getUTCMonth()]}${year}`;
 }
 
+/** 'August 2026', of a day in it. */
+export function monthWords(day: Day): string {
+  return `${LONG_MONTHS[new Date(day).getUTCMonth()]} ${day.slice(0, 4)}`;
+}
+
 /** 'today', 'yesterday', or the day written out. */
 export function nearDayWords(day: Day, today: Day): string {
   if (day === today) return 'today';

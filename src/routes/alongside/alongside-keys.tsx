@@ -1,48 +1,66 @@
-import { useState } from 'react';
-import { Icon } from '#src/components/icons.tsx';
-import { keyLook } from '#src/components/key-look.ts';
-import { KeyRack } from '#src/components/page.tsx';
-import { useRead, useReplica } from '#src/replica/hooks.tsx';
+import { Suspense, useState } from 'react';
 import { Link } from 'react-router-dom';
+import { Icon, type IconName } from '#src/components/icons.tsx';
+import { keyLook } from '#src/components/key-look.ts';
+import { IconKey } from '#src/components/key.tsx';
+import { KeyRack, KeyRow } from '#src/components/page.tsx';
+import { useRead, useReplica } from '#src/replica/hooks.tsx';
+import { DoneUndo } from '#src/routes/alongside/done-undo.tsx';
+import type { Done } from '#src/routes/alongside/done.ts';
+import { OwnHoursSheet } from '#src/routes/alongside/lazy-sheets.ts';
 import { DRAFT_KEY, isWorthKeeping, readDraft } from '#src/routes/alongside/log/entry-draft.ts';
-import { isLogged, LoggedUndo } from '#src/routes/alongside/log/logged-undo.tsx';
-import { readTasks, type TaskGroup } from '#src/routes/alongside/tasks/read-tasks.ts';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 import { momentWords } from '#src/words/day-words.ts';
 
 interface AlongsideKeysProps {
   where: Where;
-  /** what the screen before this one left: an entry just logged */
-  justDone: unknown;
+  /** what was just held, with the way back */
+  done: Done | null;
+  onDone: (done: Done | null) => void;
 }
 
-/** The keys at the foot: log, tick off; and what was just logged with the way back. */
-export function AlongsideKeys({ where, justDone }: AlongsideKeysProps) {
-  const [gone, setGone] = useState<unknown>(null);
+/** The keys at the foot: log, photo, tick off, found, hours; and what was just held with the way back. */
+export function AlongsideKeys({ where, done, onDone }: AlongsideKeysProps) {
   const kept = useKeptDraft();
-  const open = useRead(['open tasks', where], (view) => countOpen(readTasks(view, where)));
+  const [isHours, setHours] = useState(false);
   return (
     <>
       <KeyRack>
-        {isLogged(justDone) && justDone !== gone && (
-          <LoggedUndo key={justDone.entryId} logged={justDone} onGone={() => setGone(justDone)} />
-        )}
+        {done && <DoneUndo key={done.done} done={done} onGone={() => onDone(null)} />}
         {kept && <p>Not logged yet: your words of {kept}.</p>}
-        <div className="grid grid-cols-[5fr_3fr] gap-3">
-          <Link to="/log" className={keyLook('main', 'great')}>
-            <Icon name="entry" size={32} />
-            {kept ? 'Go on' : 'Log it'}
-          </Link>
-          <Link to="/tasks" className={`${keyLook('plain')} !gap-3`}>
-            <Icon name="tick" />
-            <span>
-              Tick off
-              {open > 0 && <span className="block font-normal">{open} open</span>}
-            </span>
-          </Link>
-        </div>
+        <Link to="/log" className={keyLook('main', 'great')}>
+          <Icon name="entry" size={32} />
+          {kept ? 'Go on' : 'Log it'}
+        </Link>
+        <KeyRow>
+          <RackLink to="/photos" icon="photo" word="Photo" />
+          <RackLink to="/tasks" icon="tick" word="Tick off" />
+          <RackLink to="/found" icon="found" word="Found" />
+          <IconKey icon="hours" word="Hours" onClick={() => setHours(true)} />
+        </KeyRow>
       </KeyRack>
+      {isHours && (
+        <Suspense fallback={null}>
+          <OwnHoursSheet
+            where={where}
+            onClose={() => setHours(false)}
+            onDone={(next) => {
+              setHours(false);
+              onDone(next);
+            }}
+          />
+        </Suspense>
+      )}
     </>
+  );
+}
+
+function RackLink({ to, icon, word }: { to: string; icon: IconName; word: string }) {
+  return (
+    <Link to={to} className={keyLook('plain', 'stacked')}>
+      <Icon name={icon} />
+      <span>{word}</span>
+    </Link>
   );
 }
 
@@ -54,8 +72,4 @@ function useKeptDraft(): string | null {
     if (!draft || !isWorthKeeping(draft) || !draft.keptAt) return null;
     return view.find('entry', draft.entryId) ? null : momentWords(draft.keptAt, view.timeZone, view.today);
   });
-}
-
-function countOpen(groups: TaskGroup[]): number {
-  return groups.reduce((sum, group) => sum + group.open.length, 0);
 }

@@ -1,6 +1,7 @@
 import { Fragment } from 'react';
 import { Hours } from '#src/components/hours.tsx';
-import type { EndLine, HoursLine } from '#src/routes/alongside/read-entry-line.ts';
+import type { EndLine } from '#src/routes/alongside/read-ends.ts';
+import type { HoursLine } from '#src/routes/alongside/read-entry-line.ts';
 import type { SaidValue } from '#src/routes/alongside/read-value.ts';
 import { capital } from '#src/words/who.ts';
 

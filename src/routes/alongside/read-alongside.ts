@@ -1,8 +1,9 @@
-import type { EntryRow } from '#shared/entry/entry.ts';
 import { addDays, daysBetween, type Day } from '#shared/sync/day.ts';
 import type { View } from '#src/replica/view.ts';
-import { readEntry, type EntryLine } from '#src/routes/alongside/read-entry-line.ts';
+import { readBoatRows, type DayRows } from '#src/routes/alongside/read-boat-rows.ts';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
+import { readItems, type LineItem } from '#src/routes/alongside/read-line-items.ts';
+import { readOwnDay, type OwnDay } from '#src/routes/alongside/read-own-day.ts';
 import { counted, dayWords, isWeekStart, weekdayWords } from '#src/words/day-words.ts';
 import { listWords } from '#src/words/name-words.ts';
 
@@ -19,8 +20,8 @@ export interface DayOnLine {
   isToday: boolean;
   /** of what stands, in minutes */
   minutes: number;
-  entries: EntryLine[];
-  /** the days without an entry between this day and the next older one */
+  items: LineItem[];
+  /** the days without anything between this day and the next older one */
   gap: Gap | null;
 }
 
@@ -28,59 +29,61 @@ export interface AlongsideLine {
   boatName: string;
   stageName: string | null;
   days: DayOnLine[];
-  /** days with entries that are older than those shown */
+  /** what this person did on her today */
+  own: OwnDay;
+  /** days with something on them that are older than those shown */
   olderDays: number;
+  /** the newest day shown is not today, since an earlier one was asked for */
+  isEarlier: boolean;
 }
 
 const DAYS_NAMED_MAX = 3;
 
-/** A boat's days, newest first: today always, then the newest `daysMax` days that have entries. Null without the boat. */
-export function readAlongside(view: View, where: Where, daysMax: number): AlongsideLine | null {
+const NO_ROWS: DayRows = { entries: [], findings: [], sounds: [], photos: [], ticks: [] };
+
+/**
+ * A boat's days, newest first: today always, then the newest `daysMax` days that have something on them. With `upTo`,
+ * the days from there back, without today. Null without the boat.
+ */
+export function readAlongside(
+  view: View,
+  where: Where,
+  daysMax: number,
+  upTo: Day | null = null,
+): AlongsideLine | null {
   const boat = view.find('boat', where.boatId);
   if (!boat) return null;
-  const byDay = entriesByDay(view, where.boatId);
-  const days = [...byDay.keys()]
-    .filter((day) => day !== view.today)
+  const rows = readBoatRows(view, where.boatId);
+  const isEarlier = upTo !== null && upTo < view.today;
+  const known = [...rows.days.keys()].filter((day) => day !== view.today && (!isEarlier || day <= upTo));
+  const days = known.sort().reverse();
+  const shown = (isEarlier ? days.slice(0, daysMax) : [view.today, ...days.slice(0, daysMax)])
     .sort()
     .reverse();
-  const shown = [view.today, ...days.slice(0, daysMax)].sort().reverse();
   return {
     boatName: boat.name,
     stageName: where.stageId ? (view.find('stage', where.stageId)?.name ?? null) : null,
-    days: shown.map((day, index) => ({
-      day,
-      dayOfStay: dayOfStay(boat.arrivedOn, day),
-      date: dayWords(day, view.today),
-      isToday: day === view.today,
-      ...readDay(view, byDay.get(day) ?? [], where),
-      gap: readGap(day, shown[index + 1]),
-    })),
+    days: shown.map((day, index) => {
+      const dayRows = rows.days.get(day) ?? NO_ROWS;
+      return {
+        day,
+        dayOfStay: dayOfStay(boat.arrivedOn, day),
+        date: dayWords(day, view.today),
+        isToday: day === view.today,
+        minutes: minutesOf(dayRows),
+        items: readItems(view, rows, dayRows, where.stageId),
+        gap: readGap(day, shown[index + 1]),
+      };
+    }),
+    own: readOwnDay(view, rows),
     olderDays: Math.max(days.length - daysMax, 0),
+    isEarlier,
   };
 }
 
-function entriesByDay(view: View, boatId: string): Map<Day, EntryRow[]> {
-  const byDay = new Map<Day, EntryRow[]>();
-  for (const entry of view.all('entry')) {
-    if (entry.boatId !== boatId) continue;
-    const known = byDay.get(entry.workDate);
-    if (known) known.push(entry);
-    else byDay.set(entry.workDate, [entry]);
-  }
-  return byDay;
-}
-
-function readDay(view: View, rows: EntryRow[], where: Where) {
-  const standing = rows.filter((row) => !row.struck).flatMap((row) => row.hours);
-  return {
-    minutes: standing.reduce((sum, figure) => sum + figure.minutes, 0),
-    entries: [...rows].sort(byNewest).map((row) => readEntry(view, row, where.stageId)),
-  };
-}
-
-function byNewest(a: EntryRow, b: EntryRow): number {
-  if (a.writtenAt !== b.writtenAt) return a.writtenAt < b.writtenAt ? 1 : -1;
-  return a.id < b.id ? 1 : -1;
+function minutesOf({ entries }: DayRows): number {
+  const standing = entries.filter((row) => !row.struck).flatMap((row) => row.hours);
+  return standing.reduce((sum, figure) => sum + figure.minutes, 0);
 }
 
 /** The day of a boat's stay, counted from 1 on the day of her arrival. */

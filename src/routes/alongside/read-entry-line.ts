@@ -1,10 +1,10 @@
 import type { EntryRow } from '#shared/entry/entry.ts';
 import type { Hours } from '#shared/entry/hours.ts';
 import { STAGE_FIELD, statementsOf } from '#shared/sync/fields.ts';
-import type { LooseEnd } from '#shared/sync/loose-ends.ts';
 import type { Bung } from '#src/components/bung-mark.tsx';
 import type { View } from '#src/replica/view.ts';
-import { readValue, fieldWords, type SaidValue } from '#src/routes/alongside/read-value.ts';
+import { readEnds, type EndLine } from '#src/routes/alongside/read-ends.ts';
+import { markOf, struckWords } from '#src/routes/alongside/read-mark.ts';
 import { dayWords, momentWords, timeWords, weekdayWords } from '#src/words/day-words.ts';
 import { HOURS_KIND_WORDS } from '#src/words/hours-words.ts';
 import { boatWords } from '#src/words/where.ts';
@@ -26,14 +26,6 @@ export interface AdditionLine {
   text: string;
   isMine: boolean;
   takenBackBy: string | null;
-}
-
-export interface EndLine {
-  id: string;
-  kind: LooseEnd['kind'];
-  field: string | null;
-  about: string;
-  values: (SaidValue & { opId: string; who: string; at: string; stands: boolean })[];
 }
 
 /** An entry as a row of the line shows it. */
@@ -58,7 +50,7 @@ export interface EntryLine {
 
 /** An entry as this person's device knows it. `stageId` is the stage that is being looked at. */
 export function readEntry(view: View, row: EntryRow, stageId: string | null | undefined): EntryLine {
-  const ends = readEnds(view, row);
+  const ends = readEnds(view, 'entry', row);
   const isHeld = view.isHeld('entry', row.id);
   return {
     id: row.id,
@@ -76,12 +68,6 @@ export function readEntry(view: View, row: EntryRow, stageId: string | null | un
     struck: struckWords(view, row),
     ends,
   };
-}
-
-function markOf(row: EntryRow, ends: EndLine[], isHeld: boolean): Bung {
-  if (ends.length > 0) return 'loose';
-  if (row.struck) return 'struck';
-  return isHeld ? 'held' : 'sent';
 }
 
 function readHoursLine(view: View, { personId, minutes, kind, proposed }: Hours): HoursLine {
@@ -117,40 +103,4 @@ function movedFlag(view: View, row: EntryRow): string[] {
   const said = statementsOf(row, STAGE_FIELD).map(({ value }) => value as { boatId: string });
   const from = said.findLast(({ boatId }) => boatId !== row.boatId);
   return from ? [`moved here from ${boatWords(view, from.boatId)}`] : [];
-}
-
-function struckWords(view: View, { struck }: EntryRow): string | null {
-  if (!struck) return null;
-  return `Struck by ${whoWords(view, struck.by)} ${momentWords(struck.at, view.timeZone, view.today)}: ${struck.why}`;
-}
-
-function readEnds(view: View, row: EntryRow): EndLine[] {
-  return view
-    .all('looseEnd')
-    .filter((end) => end.entity === 'entry' && end.rowId === row.id)
-    .map((end) => ({
-      id: end.id,
-      kind: end.kind,
-      field: end.field ?? null,
-      about:
-        end.kind === 'field'
-          ? fieldWords(view, end.field!)
-          : 'Struck, and changed since by somebody who did not know',
-      values: end.values.map(({ value, personId, at, opId, stands }) => ({
-        ...readEndValue(view, row, end, value),
-        opId,
-        who: whoWords(view, personId),
-        at: momentWords(at, view.timeZone, view.today),
-        stands,
-      })),
-    }));
-}
-
-/** A strike's loose end carries the field beside each value, or the id of what was added. */
-function readEndValue(view: View, row: EntryRow, end: LooseEnd, value: unknown): SaidValue {
-  if (end.kind === 'field') return readValue(view, end.field!, value);
-  const said = value as { field?: string; value?: unknown; added?: string };
-  if (said.field !== undefined) return readValue(view, said.field, said.value);
-  const added = row.additions.find(({ id }) => id === said.added);
-  return { words: added?.text ?? 'something added' };
 }

@@ -1,10 +1,17 @@
 import type { HoursValue } from '#shared/entry/hours-field.ts';
+import type { Certainty, Extent, Known } from '#shared/finding/finding.ts';
+import type { PhotoSet } from '#shared/photo/photo.ts';
 import type { Place } from '#shared/place/place.ts';
 import { STAGE_FIELD, STRUCK_FIELD } from '#shared/sync/fields.ts';
 import type { Struck } from '#shared/sync/row.ts';
+import { findingWords } from '#shared/trade/finding-words.ts';
 import type { View } from '#src/replica/view.ts';
 import { dayWords } from '#src/words/day-words.ts';
+import { CERTAINTY_WORDS, extentWords, findingTitle, KNOWN_WORDS } from '#src/words/finding-words.ts';
 import { HOURS_KIND_WORDS } from '#src/words/hours-words.ts';
+import { PHOTO_SET_WORDS } from '#src/words/photo-words.ts';
+import { placeWords } from '#src/words/place-words.ts';
+import { unitsOf } from '#src/words/units.ts';
 import { whereWords } from '#src/words/where.ts';
 import { capital, whoWords } from '#src/words/who.ts';
 
@@ -16,22 +23,35 @@ export interface SaidValue {
 
 const HOURS_PREFIX = 'hours/';
 
+const FIELD_WORDS: Readonly<Record<string, string>> = {
+  [STAGE_FIELD]: 'Boat and stage',
+  [STRUCK_FIELD]: 'Struck or not',
+  text: 'The words',
+  workDate: 'The day',
+  place: 'The place',
+  kind: 'The kind',
+  known: 'The way it is known',
+  certainty: 'Suspected or proved',
+  seenExtent: 'The size seen',
+  fearedExtent: 'The size feared',
+  openToKnow: 'That only opening will tell',
+  count: 'The count',
+  about: 'The thing looked for',
+  caption: 'The words under it',
+  set: 'The set',
+  findingId: 'The finding it shows',
+};
+
 /** The person whose hours a field is, or null where it is another field. */
 export function personOfHours(field: string): string | null {
   return field.startsWith(HOURS_PREFIX) ? field.slice(HOURS_PREFIX.length) : null;
 }
 
-/** What a field of an entry is called: 'The words', "Rosa's hours". */
+/** What a field is called: 'The words', "Rosa's hours". */
 export function fieldWords(view: View, field: string): string {
   const personId = personOfHours(field);
-  if (personId !== null) {
-    return personId === view.me.personId ? 'Your hours' : `${capital(whoWords(view, personId))}'s hours`;
-  }
-  if (field === STAGE_FIELD) return 'Boat and stage';
-  if (field === 'text') return 'The words';
-  if (field === 'workDate') return 'The day';
-  if (field === 'place') return 'The place';
-  return field === STRUCK_FIELD ? 'Struck or not' : field;
+  if (personId === null) return FIELD_WORDS[field] ?? field;
+  return personId === view.me.personId ? 'Your hours' : `${capital(whoWords(view, personId))}'s hours`;
 }
 
 /** A field's value as people read it. */
@@ -40,23 +60,33 @@ export function readValue(view: View, field: string, value: unknown): SaidValue 
     const { minutes, kind } = value as HoursValue;
     return { minutes, words: kind === null ? '' : HOURS_KIND_WORDS[kind] };
   }
-  if (field === STAGE_FIELD) {
+  if (value === null && field !== STRUCK_FIELD && field !== 'place') return { words: 'nothing' };
+  const read = READ[field];
+  return { words: read ? read(view, value) : String(value) };
+}
+
+const READ: Readonly<Record<string, (view: View, value: unknown) => string>> = {
+  [STAGE_FIELD](view, value) {
     const { boatId, stageId } = value as { boatId: string; stageId: string | null };
-    return { words: whereWords(view, boatId, stageId) };
-  }
-  if (field === 'workDate') return { words: dayWords(value as string, view.today) };
-  if (field === STRUCK_FIELD) return { words: struckWords(value as Struck | null) };
-  if (field === 'place') return { words: placeWords(value as Place | null) };
-  return { words: String(value) };
-}
-
-function struckWords(struck: Struck | null): string {
-  return struck ? `struck: ${struck.why}` : 'restored';
-}
-
-function placeWords(place: Place | null): string {
-  if (!place) return 'no place';
-  const { side, number, toNumber, words } = place;
-  const numbers = toNumber === undefined ? number : `${number} to ${toNumber}`;
-  return [side, numbers, words].filter((part) => part !== undefined).join(', ');
-}
+    return whereWords(view, boatId, stageId);
+  },
+  [STRUCK_FIELD]: (_view, value) => (value ? `struck: ${(value as Struck).why}` : 'restored'),
+  workDate: (view, value) => dayWords(value as string, view.today),
+  place: (_view, value) => placeWords(value as Place | null) || 'no place',
+  kind: (_view, value) => findingWords(value as string),
+  about: (_view, value) => findingWords(value as string),
+  known: (_view, value) => KNOWN_WORDS[value as Known],
+  certainty: (_view, value) => CERTAINTY_WORDS[value as Certainty],
+  seenExtent: (view, value) => extentWords(value as Extent, unitsOf(view)) || 'nothing',
+  fearedExtent: (view, value) => extentWords(value as Extent, unitsOf(view)) || 'nothing',
+  openToKnow: (_view, value) => (value ? 'only opening will tell' : 'can be told without opening'),
+  set: (_view, value) => PHOTO_SET_WORDS[value as PhotoSet],
+  findingId(view, value) {
+    const finding = view.find('finding', value as string);
+    return finding ? findingTitle(finding) : 'a finding not known here';
+  },
+  count(_view, value) {
+    const { of, failed } = value as { of?: number; failed?: number };
+    return `${failed ?? 'some'} of ${of ?? 'several'}`;
+  },
+};

@@ -7,8 +7,8 @@ import {
   hoursOf,
   isWorthKeeping,
   readDraft,
-  tooLongWords,
 } from '#src/routes/alongside/log/entry-draft.ts';
+import { tooLongWords } from '#src/words/too-long.ts';
 
 const [ME, WES, KIT] = ['me', 'wes', 'kit'];
 const ENTRY_ID = '0193a000-0000-7000-8000-000000000009';

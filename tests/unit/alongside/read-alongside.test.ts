@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { readAlongside } from '#src/routes/alongside/read-alongside.ts';
+import { readAlongside, type DayOnLine } from '#src/routes/alongside/read-alongside.ts';
 import { readBoats, readWhere } from '#src/routes/alongside/read-boats.ts';
 import { entryBy, MONDAY, shopAtBench, type Bench } from '#tests/unit/alongside/bench.ts';
 import type { Hand } from '#tests/worlds/record.ts';
@@ -7,6 +7,10 @@ import type { Hand } from '#tests/worlds/record.ts';
 function lineOf(bench: Bench, hand: Hand, daysMax = 14) {
   const where = { boatId: bench.boatId, stageId: bench.strip };
   return readAlongside(bench.record.viewAs(hand), where, daysMax)!;
+}
+
+function entriesOf({ items }: DayOnLine) {
+  return items.filter((item) => item.item === 'entry');
 }
 
 describe("a boat's days", () => {
@@ -19,7 +23,7 @@ describe("a boat's days", () => {
       date: 'Mon 4 May',
       dayOfStay: 15,
       minutes: 0,
-      entries: [],
+      items: [],
     });
   });
 
@@ -73,13 +77,13 @@ describe("a boat's days", () => {
     expect(lineOf(bench, bench.rosa).days[0]!.minutes).toBe(120);
     await bench.record.say(bench.wes, 'entry.strike', { entryId, why: 'wrong boat', saw: [] });
     expect(lineOf(bench, bench.rosa).days[0]!.minutes).toBe(60);
-    expect(lineOf(bench, bench.rosa).days[0]!.entries).toHaveLength(2);
+    expect(entriesOf(lineOf(bench, bench.rosa).days[0]!)).toHaveLength(2);
   });
 
   test('show nothing of another boat', async () => {
     const bench = await shopAtBench();
     await entryBy(bench, bench.rosa, { boatId: bench.otherBoatId, stageId: null });
-    expect(lineOf(bench, bench.rosa).days[0]!.entries).toEqual([]);
+    expect(entriesOf(lineOf(bench, bench.rosa).days[0]!)).toEqual([]);
   });
 });
 
@@ -87,15 +91,15 @@ describe('an entry on the line', () => {
   test("is the author's, and one's own is yours", async () => {
     const bench = await shopAtBench();
     await entryBy(bench, bench.rosa);
-    expect(lineOf(bench, bench.rosa).days[0]!.entries[0]!.author).toBe('you');
-    expect(lineOf(bench, bench.wes).days[0]!.entries[0]!.author).toBe('Rosa');
+    expect(entriesOf(lineOf(bench, bench.rosa).days[0]!)[0]!.author).toBe('you');
+    expect(entriesOf(lineOf(bench, bench.wes).days[0]!)[0]!.author).toBe('Rosa');
   });
 
   test('names its stage only where it is another than the one looked at', async () => {
     const bench = await shopAtBench();
     await entryBy(bench, bench.rosa);
     await entryBy(bench, bench.rosa, { stageId: bench.varnish });
-    expect(lineOf(bench, bench.rosa).days[0]!.entries.map(({ stageName }) => stageName)).toEqual([
+    expect(entriesOf(lineOf(bench, bench.rosa).days[0]!).map(({ stageName }) => stageName)).toEqual([
       'Varnish',
       null,
     ]);
@@ -104,7 +108,7 @@ describe('an entry on the line', () => {
   test('says that it was written later, and by the weekday when', async () => {
     const bench = await shopAtBench();
     await entryBy(bench, bench.rosa, { workDate: '2026-05-01' });
-    const entry = lineOf(bench, bench.rosa).days[1]!.entries[0]!;
+    const entry = entriesOf(lineOf(bench, bench.rosa).days[1]!)[0]!;
     expect(entry.flags).toEqual(['written later, Mon 4 May']);
     expect(entry.time).toBe('Mon');
   });
@@ -114,14 +118,14 @@ describe('an entry on the line', () => {
     const entryId = await entryBy(bench, bench.rosa, { boatId: bench.otherBoatId, stageId: null });
     const set = { boatId: bench.boatId, stageId: bench.varnish };
     await bench.record.say(bench.rosa, 'entry.amend', { entryId, set, why: 'wrong boat' });
-    expect(lineOf(bench, bench.rosa).days[0]!.entries[0]!.flags).toEqual(['moved here from Amber Reach']);
+    expect(entriesOf(lineOf(bench, bench.rosa).days[0]!)[0]!.flags).toEqual(['moved here from Amber Reach']);
   });
 
   test('that was struck says by whom and why', async () => {
     const bench = await shopAtBench();
     const entryId = await entryBy(bench, bench.rosa);
     await bench.record.say(bench.rosa, 'entry.strike', { entryId, why: 'said twice', saw: [] });
-    const entry = lineOf(bench, bench.wes).days[0]!.entries[0]!;
+    const entry = entriesOf(lineOf(bench, bench.wes).days[0]!)[0]!;
     expect(entry.mark).not.toBe('sent');
     expect(entry.struck).toMatch(/^Struck by Rosa \d\d:\d\d: said twice$/);
   });
@@ -135,7 +139,7 @@ describe('an entry on the line', () => {
     const made = { [`hours/${bench.rosa.personId}`]: [madeBy(bench, entryId)] };
     await bench.record.say(bench.rosa, 'entry.amend', { entryId, ...hours(180) }, made);
     await bench.record.say(bench.orrin, 'entry.amend', { entryId, ...hours(150) }, made);
-    const entry = lineOf(bench, bench.wes).days[0]!.entries[0]!;
+    const entry = entriesOf(lineOf(bench, bench.wes).days[0]!)[0]!;
     expect(entry.mark).toBe('loose');
     expect(entry.ends).toHaveLength(1);
     expect(entry.ends[0]!.about).toBe("Rosa's hours");
@@ -149,7 +153,7 @@ describe('an entry on the line', () => {
     const bench = await shopAtBench();
     const hours = [{ personId: bench.rosa.personId, minutes: 60, kind: 'extra' }];
     const entryId = await entryBy(bench, bench.rosa, { hours });
-    const kindShown = () => lineOf(bench, bench.rosa).days[0]!.entries[0]!.hours[0]!;
+    const kindShown = () => entriesOf(lineOf(bench, bench.rosa).days[0]!)[0]!.hours[0]!;
     expect(kindShown()).toMatchObject({ kind: 'extra work', isProposed: true });
     await bench.record.say(bench.orrin, 'entry.amend', { entryId, set: { hours }, why: 'so it is' });
     expect(kindShown()).toMatchObject({ kind: 'extra work', isProposed: false });

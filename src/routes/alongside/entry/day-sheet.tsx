@@ -1,26 +1,23 @@
 import { useState } from 'react';
 import { addDays } from '#shared/sync/day.ts';
 import { DayChoice } from '#src/components/day-choice.tsx';
-import { useHold, useRead } from '#src/replica/hooks.tsx';
+import { useRead } from '#src/replica/hooks.tsx';
 import { AmendSheet } from '#src/routes/alongside/entry/amend-sheet.tsx';
 import type { ChangeProps } from '#src/routes/alongside/entry/change-sheets.tsx';
-import { whyOf } from '#src/routes/alongside/entry/why-of.ts';
+import { useAmend } from '#src/routes/alongside/entry/use-amend.ts';
 import { dayWords } from '#src/words/day-words.ts';
 
 /** Another day that an entry is about. */
-export function DaySheet({ page, onClose }: ChangeProps) {
-  const { id, workDate: standing } = page.row;
+export function DaySheet({ page, onClose, onDone }: ChangeProps) {
+  const { workDate: standing } = page.row;
   const today = useRead(['today'], (view) => view.today);
   const [workDate, setWorkDate] = useState(standing);
   const [why, setWhy] = useState('');
-  const hold = useHold();
+  const amend = useAmend(page, onDone, onClose);
 
   function confirm() {
     if (workDate === standing) return onClose();
-    hold.mutate(
-      { kind: 'entry.amend', data: { entryId: id, set: { workDate }, ...whyOf(why) } },
-      { onSuccess: onClose },
-    );
+    amend.hold({ workDate }, { workDate: standing }, why);
   }
 
   return (
@@ -30,7 +27,7 @@ export function DaySheet({ page, onClose }: ChangeProps) {
       why={why}
       onWhy={setWhy}
       onConfirm={confirm}
-      failure={hold.error?.message}
+      failure={amend.failure}
     >
       <DayChoice
         label="Which day was it?"

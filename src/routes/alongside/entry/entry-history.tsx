@@ -5,11 +5,17 @@ import { Said } from '#src/routes/alongside/entry-parts.tsx';
 import type { HistoryLine } from '#src/routes/alongside/entry/read-history.ts';
 import { capital } from '#src/words/who.ts';
 
-/** Everything that was said about an entry, on the ribband line: nothing earlier is lost. */
-export function EntryHistory({ history }: { history: HistoryLine[] }) {
+interface EntryHistoryProps {
+  history: HistoryLine[];
+  /** what it is the history of; an entry unless told */
+  of?: string;
+}
+
+/** Everything that was said about a row, on the ribband line: nothing earlier is lost. */
+export function EntryHistory({ history, of = 'entry' }: EntryHistoryProps) {
   return (
     <Section title="History">
-      <Ribband label="History of this entry, the newest first">
+      <Ribband label={`History of this ${of}, the newest first`}>
         <Planks>
           {history.map((line) => (
             <Plank key={line.key} mark={line.mark} time={line.time}>

@@ -1,4 +1,4 @@
-import { Key } from '#src/components/key.tsx';
+import { Key, KeyLink } from '#src/components/key.tsx';
 import type { Change } from '#src/routes/alongside/entry/change-sheets.tsx';
 import type { EntryActions, EntryPage } from '#src/routes/alongside/entry/read-entry-page.ts';
 
@@ -31,6 +31,16 @@ export function EntryKeys({ page, onChoose }: EntryKeysProps) {
             {word}
           </Key>
         ))}
+        {actions.addNotes && (
+          <>
+            <KeyLink to={`/photos?entry=${page.row.id}`} icon="photo">
+              Photo
+            </KeyLink>
+            <KeyLink to={`/found?entry=${page.row.id}`} icon="found">
+              Found
+            </KeyLink>
+          </>
+        )}
         {actions.strike && (
           <Key kind="danger" onClick={() => onChoose('strike')}>
             Strike it

@@ -2,14 +2,16 @@ import { useState } from 'react';
 import type { HoursKind } from '#shared/entry/hours.ts';
 import { QuarterHours } from '#src/components/quarter-hours.tsx';
 import { SelectField } from '#src/components/select-field.tsx';
-import { useHold, useRead, useReplica } from '#src/replica/hooks.tsx';
+import { useRead, useReplica } from '#src/replica/hooks.tsx';
 import { AmendSheet } from '#src/routes/alongside/entry/amend-sheet.tsx';
 import type { ChangeProps } from '#src/routes/alongside/entry/change-sheets.tsx';
+import { useAmend } from '#src/routes/alongside/entry/use-amend.ts';
 import {
   changedHours,
   readFigure,
   readFigures,
   readUnnamed,
+  standingHours,
   type Figure,
 } from '#src/routes/alongside/entry/read-hours-form.ts';
 import { HOURS_KIND_WORDS, HOURS_KINDS } from '#src/words/hours-words.ts';
@@ -20,7 +22,7 @@ const KIND_OPTIONS: { value: HoursKind | ''; label: string }[] = [
 ];
 
 /** Other hours in an entry, for those whose figures this person may change, with the reason. */
-export function HoursSheet({ page, onClose }: ChangeProps) {
+export function HoursSheet({ page, onClose, onDone }: ChangeProps) {
   const { row, actions } = page;
   const replica = useReplica();
   const [figures, setFigures] = useState<Figure[]>(() => readFigures(replica.view(), row, actions));
@@ -29,7 +31,7 @@ export function HoursSheet({ page, onClose }: ChangeProps) {
   );
   const [why, setWhy] = useState('');
   const [isAsked, setAsked] = useState(false);
-  const hold = useHold();
+  const amend = useAmend(page, onDone, onClose);
 
   function setFigure(personId: string, next: Partial<Figure>) {
     setFigures(figures.map((figure) => (figure.personId === personId ? { ...figure, ...next } : figure)));
@@ -39,10 +41,7 @@ export function HoursSheet({ page, onClose }: ChangeProps) {
     const hours = changedHours(row, figures);
     if (hours.length === 0) return onClose();
     if (why.trim() === '') return setAsked(true);
-    hold.mutate(
-      { kind: 'entry.amend', data: { entryId: row.id, set: { hours }, why: why.trim() } },
-      { onSuccess: onClose },
-    );
+    amend.hold({ hours }, { hours: standingHours(row, hours) }, why);
   }
 
   return (
@@ -54,7 +53,7 @@ export function HoursSheet({ page, onClose }: ChangeProps) {
       whyLabel="Why do they change?"
       whyProblem={isAsked && why.trim() === '' ? 'Write the reason in a few words.' : undefined}
       onConfirm={confirm}
-      failure={hold.error?.message}
+      failure={amend.failure}
     >
       {figures.map(({ personId, label, minutes, kind }) => (
         <div key={personId} className="grid gap-3">

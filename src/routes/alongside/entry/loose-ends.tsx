@@ -2,23 +2,28 @@ import { Key } from '#src/components/key.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { useHold } from '#src/replica/hooks.tsx';
 import { EndQuestion, Said } from '#src/routes/alongside/entry-parts.tsx';
-import type { EntryPage } from '#src/routes/alongside/entry/read-entry-page.ts';
-import { settlingOp } from '#src/routes/alongside/entry/settle.ts';
-import type { EndLine } from '#src/routes/alongside/read-entry-line.ts';
+import type { Settling } from '#src/routes/alongside/entry/settle.ts';
+import type { EndLine } from '#src/routes/alongside/read-ends.ts';
 import { capital } from '#src/words/who.ts';
 
-/** An entry's loose ends, each with the values and who said them; settled here by whoever may set the field. */
-export function LooseEnds({ page }: { page: EntryPage }) {
-  return page.line.ends.map((end) => <OneEnd key={end.id} end={end} page={page} />);
+interface LooseEndsProps {
+  ends: EndLine[];
+  /** the op that has one of an end's values stand; null where this person may not */
+  settle: (end: EndLine, opId: string) => Settling | null;
 }
 
-function OneEnd({ end, page }: { end: EndLine; page: EntryPage }) {
+/** A row's loose ends, each with the values and who said them; settled here by whoever may set the field. */
+export function LooseEnds({ ends, settle }: LooseEndsProps) {
+  return ends.map((end) => <OneEnd key={end.id} end={end} settle={settle} />);
+}
+
+function OneEnd({ end, settle }: Pick<LooseEndsProps, 'settle'> & { end: EndLine }) {
   const hold = useHold();
   return (
     <div className="grid gap-3">
       <EndQuestion end={end} />
       {end.values.map((value) => {
-        const op = settlingOp(page, end, value.opId);
+        const op = settle(end, value.opId);
         return (
           <div key={value.opId} className="grid gap-1">
             <p className="text-slate">

@@ -2,7 +2,9 @@ import type { EntryRow } from '#shared/entry/entry.ts';
 import { peopleInHours } from '#shared/entry/kinds.ts';
 import type { View } from '#src/replica/view.ts';
 import { mayAmend, mayDo, mayStrike } from '#src/routes/alongside/may-do.ts';
-import { readEntry, type EntryLine } from '#src/routes/alongside/read-entry-line.ts';
+import { readBoatRows } from '#src/routes/alongside/read-boat-rows.ts';
+import { readEntry } from '#src/routes/alongside/read-entry-line.ts';
+import { readEntryItem, type EntryItem } from '#src/routes/alongside/read-line-items.ts';
 import { readHistory, type HistoryLine } from '#src/routes/alongside/entry/read-history.ts';
 import { dayWords } from '#src/words/day-words.ts';
 import { whereWords } from '#src/words/where.ts';
@@ -17,13 +19,15 @@ export interface EntryActions {
   /** may name people who are not in the hours yet */
   hoursOfAnybody: boolean;
   addTo: boolean;
+  /** photographs, findings and what was found sound can come with it */
+  addNotes: boolean;
   strike: boolean;
   restore: boolean;
 }
 
 export interface EntryPage {
   row: EntryRow;
-  line: EntryLine;
+  line: EntryItem;
   where: string;
   day: string;
   history: HistoryLine[];
@@ -39,7 +43,7 @@ export function readEntryPage(view: View, entryId: string): EntryPage | null {
   const actions = readActions(view, row);
   return {
     row,
-    line: readEntry(view, row, row.stageId),
+    line: readEntryItem(view, readBoatRows(view, row.boatId), readEntry(view, row, row.stageId)),
     where: whereWords(view, row.boatId, row.stageId),
     day: dayWords(row.workDate, view.today),
     history: readHistory(view, row),
@@ -60,6 +64,7 @@ function readActions(view: View, row: EntryRow): EntryActions {
     hoursOf: standing ? hoursOf : [],
     hoursOfAnybody: standing && mayAmend(view, row, hoursFor('somebody')),
     addTo: standing && mayDo(view, 'entry.addTo', {}, row),
+    addNotes: standing && mayDo(view, 'photo.attach', {}, undefined),
     // struck again, by one who knows what came since, it is a loose end no more
     strike: strike && (standing || isStruckAndChanged(view, row)),
     restore: strike && !standing,

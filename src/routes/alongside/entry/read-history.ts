@@ -1,4 +1,7 @@
 import type { EntryRow } from '#shared/entry/entry.ts';
+import type { FindingRow } from '#shared/finding/finding.ts';
+import type { PhotoRow } from '#shared/photo/photo.ts';
+import type { SoundRow } from '#shared/sound/sound.ts';
 import { dayAt } from '#shared/sync/day.ts';
 import { liveStatements, saidFields, statementsOf, STRUCK_FIELD } from '#shared/sync/fields.ts';
 import type { Statement } from '#shared/sync/row.ts';
@@ -9,7 +12,10 @@ import { fieldWords, readValue, type SaidValue } from '#src/routes/alongside/rea
 import { dayWords, timeWords, weekdayWords } from '#src/words/day-words.ts';
 import { whoWords } from '#src/words/who.ts';
 
-/** One thing that somebody said about an entry. */
+/** The rows that have a page with their history. */
+export type HistoryRow = EntryRow | FindingRow | SoundRow | PhotoRow;
+
+/** One thing that somebody said about a row. */
 export interface HistoryLine {
   key: string;
   at: string;
@@ -28,8 +34,8 @@ export interface HistoryLine {
   why: string | null;
 }
 
-/** Everything that was said about an entry, the newest first: every earlier value, who said it, when and why. */
-export function readHistory(view: View, row: EntryRow): HistoryLine[] {
+/** Everything that was said about a row, the newest first: every earlier value, who said it, when and why. */
+export function readHistory(view: View, row: HistoryRow): HistoryLine[] {
   const heldOps = new Set(view.held.map(({ op }) => op.id));
   const lines = [
     madeLine(view, row),
@@ -54,26 +60,35 @@ function moment(view: View, at: string): Pick<HistoryLine, 'time' | 'when'> {
   return { time: weekdayWords(day), when: `${dayWords(day, view.today)} ${time}` };
 }
 
-function madeLine(view: View, row: EntryRow): Draft {
+function madeLine(view: View, row: HistoryRow): Draft {
   return {
     key: row.madeBy,
     opId: row.madeBy,
-    at: row.writtenAt,
     who: whoWords(view, row.makerId),
     mark: 'sent',
-    did: 'wrote it',
+    ...making(row),
     value: saidFields(row).includes('text') ? { words: firstWords(row) } : null,
     before: [],
     why: null,
   };
 }
 
-function firstWords(row: EntryRow): string {
-  return String(statementsOf(row, 'text')[0]?.value ?? row.text);
+function making(row: HistoryRow): { at: string; did: string } {
+  if ('writtenAt' in row) return { at: row.writtenAt, did: 'wrote it' };
+  return 'notedAt' in row ? { at: row.notedAt, did: 'noted it' } : { at: row.attachedAt, did: 'took it' };
 }
 
-function additionLines(view: View, row: EntryRow): Draft[] {
-  return row.additions.map((addition) => ({
+function firstWords(row: HistoryRow): string {
+  const standing = 'text' in row ? row.text : '';
+  return String(statementsOf(row, 'text')[0]?.value ?? standing ?? '');
+}
+
+function additionsOf(row: HistoryRow): EntryRow['additions'] {
+  return 'additions' in row ? row.additions : [];
+}
+
+function additionLines(view: View, row: HistoryRow): Draft[] {
+  return additionsOf(row).map((addition) => ({
     key: addition.id,
     opId: addition.opId,
     at: addition.at,
@@ -86,8 +101,8 @@ function additionLines(view: View, row: EntryRow): Draft[] {
   }));
 }
 
-function takenBackLines(view: View, row: EntryRow): Draft[] {
-  return row.additions.flatMap((addition) => {
+function takenBackLines(view: View, row: HistoryRow): Draft[] {
+  return additionsOf(row).flatMap((addition) => {
     if (!addition.takenBack) return [];
     const { by, at } = addition.takenBack;
     const opId = row.takeBacks?.find(({ itemId }) => itemId === addition.id)?.opId ?? '';
@@ -108,7 +123,7 @@ function takenBackLines(view: View, row: EntryRow): Draft[] {
   });
 }
 
-function statementLines(view: View, row: EntryRow): Draft[] {
+function statementLines(view: View, row: HistoryRow): Draft[] {
   return saidFields(row).flatMap((field) => {
     const said = statementsOf(row, field);
     const live = liveStatements(row, field);
@@ -136,9 +151,9 @@ function statementLine(view: View, statement: Statement, said: Statement[], live
   };
 }
 
+const OWN_NAMES = /^(The|Your|Boat|Suspected|That) ?/;
+
 function didWords(view: View, field: string): string {
   const words = fieldWords(view, field);
-  return words.startsWith('The ') || words.startsWith('Your ') || words.startsWith('Boat ')
-    ? words.charAt(0).toLowerCase() + words.slice(1)
-    : words;
+  return OWN_NAMES.test(words) ? words.charAt(0).toLowerCase() + words.slice(1) : words;
 }

@@ -42,6 +42,14 @@ export function changedHours(row: EntryRow, figures: Figure[]): HoursGiven {
     });
 }
 
+/** The figures of the same people as they stand, for the way back. */
+export function standingHours(row: EntryRow, changed: HoursGiven): HoursGiven {
+  return changed.map(({ personId }) => {
+    const standing = row.hours.find((each) => each.personId === personId);
+    return { personId, minutes: standing?.minutes ?? 0, kind: standing?.kind ?? null };
+  });
+}
+
 function rank(view: View, a: Figure, b: Figure): number {
   const isMe = (figure: Figure) => Number(figure.personId === view.me.personId);
   return isMe(b) - isMe(a) || a.label.localeCompare(b.label);

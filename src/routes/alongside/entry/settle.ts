@@ -3,11 +3,11 @@ import type { HoursValue } from '#shared/entry/hours-field.ts';
 import { differingStatements, STAGE_FIELD, STRUCK_FIELD } from '#shared/sync/fields.ts';
 import type { EntryPage } from '#src/routes/alongside/entry/read-entry-page.ts';
 import { personOfHours } from '#src/routes/alongside/read-value.ts';
-import type { EndLine } from '#src/routes/alongside/read-entry-line.ts';
+import type { EndLine } from '#src/routes/alongside/read-ends.ts';
 
-const WHY = 'settles what was said differently';
+export const SETTLED_WHY = 'settles what was said differently';
 
-interface Settling {
+export interface Settling {
   kind: string;
   data: object;
 }
@@ -23,12 +23,12 @@ export function settlingOp({ row, actions }: EntryPage, end: EndLine, opId: stri
   }
   const set = setOf(end.field, said.value);
   return isOffered(actions, end.field)
-    ? { kind: 'entry.amend', data: { entryId: row.id, set, why: WHY } }
+    ? { kind: 'entry.amend', data: { entryId: row.id, set, why: SETTLED_WHY } }
     : null;
 }
 
 function strikeOrRestore(entryId: string, isStrike: boolean): Settling {
-  return { kind: isStrike ? 'entry.strike' : 'entry.restore', data: { entryId, why: WHY } };
+  return { kind: isStrike ? 'entry.strike' : 'entry.restore', data: { entryId, why: SETTLED_WHY } };
 }
 
 function setOf(field: string, value: unknown): EntrySet {

@@ -1,27 +1,22 @@
 import { useState } from 'react';
 import { TextBox } from '#src/components/text-box.tsx';
-import { useHold } from '#src/replica/hooks.tsx';
 import { AmendSheet } from '#src/routes/alongside/entry/amend-sheet.tsx';
-import { whyOf } from '#src/routes/alongside/entry/why-of.ts';
+import { useAmend } from '#src/routes/alongside/entry/use-amend.ts';
 import type { ChangeProps } from '#src/routes/alongside/entry/change-sheets.tsx';
-import { tooLongWords } from '#src/routes/alongside/log/entry-draft.ts';
+import { tooLongWords } from '#src/words/too-long.ts';
 import { useDraft } from '#src/routes/alongside/use-draft.ts';
 
 /** Other words for an entry; what is typed is kept until it is done, and the earlier words stay in its history. */
-export function WordsSheet({ page, onClose }: ChangeProps) {
+export function WordsSheet({ page, onClose, onDone }: ChangeProps) {
   const { id, text: standing } = page.row;
   const { draft, change, clear } = useDraft(`words/${id}`, (kept) => readWords(kept) ?? standing);
   const [why, setWhy] = useState('');
-  const hold = useHold();
+  const amend = useAmend(page, onDone, () => void clear().then(onClose));
 
   function confirm() {
     if (tooLongWords(draft)) return;
     if (draft.trim() === standing.trim()) return void clear().then(onClose);
-    const set = { text: draft.trim() };
-    hold.mutate(
-      { kind: 'entry.amend', data: { entryId: id, set, ...whyOf(why) } },
-      { onSuccess: () => void clear().then(onClose) },
-    );
+    amend.hold({ text: draft.trim() }, { text: standing }, why);
   }
 
   return (
@@ -31,7 +26,7 @@ export function WordsSheet({ page, onClose }: ChangeProps) {
       why={why}
       onWhy={setWhy}
       onConfirm={confirm}
-      failure={hold.error?.message}
+      failure={amend.failure}
     >
       <TextBox
         label="The words"

@@ -2,8 +2,11 @@ import { z } from 'zod';
 import { hoursKindSchema, type HoursGiven } from '#shared/entry/hours.ts';
 import { daySchema, type Day } from '#shared/sync/day.ts';
 import { newIdSchema } from '#shared/sync/ids.ts';
-import { TEXT_UNITS_MAX } from '#shared/sync/op.ts';
+import { photoSetSchema } from '#shared/photo/photo.ts';
+import { placeSchema, type Place } from '#shared/place/place.ts';
+import { keptPictureSchema } from '#src/routes/alongside/photos/kept-picture.ts';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
+import { tooLongWords } from '#src/words/too-long.ts';
 
 export const DRAFT_KEY = 'log';
 
@@ -22,6 +25,12 @@ const draftSchema = z.object({
   /** who worked along; no minutes of their own means: as long as I did */
   along: z.array(z.object({ personId: z.string(), minutes: z.int().nullable() })).catch([]),
   ticked: z.array(z.object({ taskId: z.string(), markId: newIdSchema })).catch([]),
+  /** work that was not done, in place of the words; null for work that was */
+  notDone: z.object({ what: z.string(), why: z.string() }).nullable().catch(null),
+  pictures: z.array(keptPictureSchema).catch([]),
+  /** where the pictures were taken, and for which set */
+  place: placeSchema.catch({}),
+  set: photoSetSchema.nullable().catch(null),
   /** ISO time of the last change; null while nothing is on it */
   keptAt: z.string().nullable().catch(null),
 });
@@ -32,8 +41,8 @@ export function readDraft(kept: unknown): EntryDraft | undefined {
   return draftSchema.safeParse(kept).data;
 }
 
-/** An empty form at a place and day. */
-export function emptyDraft(where: Where, today: Day, entryId: string): EntryDraft {
+/** An empty form for a boat, stage and day; its pictures at the place that is carried on. */
+export function emptyDraft(where: Where, today: Day, entryId: string, place: Place = {}): EntryDraft {
   const { boatId, stageId } = where;
   return {
     boatId,
@@ -45,6 +54,10 @@ export function emptyDraft(where: Where, today: Day, entryId: string): EntryDraf
     kind: null,
     along: [],
     ticked: [],
+    notDone: null,
+    pictures: [],
+    place,
+    set: null,
     keptAt: null,
   };
 }
@@ -52,8 +65,22 @@ export function emptyDraft(where: Where, today: Day, entryId: string): EntryDraf
 /** Whether there is anything on it that somebody would miss. */
 export function isWorthKeeping(draft: EntryDraft): boolean {
   return (
-    draft.text.trim() !== '' || draft.minutes !== null || draft.along.length > 0 || draft.ticked.length > 0
+    entryText(draft) !== '' ||
+    draft.minutes !== null ||
+    [draft.along, draft.ticked, draft.pictures].some((list) => list.length > 0)
   );
+}
+
+/** The entry's words as they will stand: what was typed, or of work not done what and why. */
+export function entryText({ text, notDone }: Pick<EntryDraft, 'text' | 'notDone'>): string {
+  if (!notDone) return text.trim();
+  const [what, why] = [notDone.what.trim(), notDone.why.trim()];
+  if (what === '' && why === '') return '';
+  return [what && `Not done: ${ended(what)}`, why && `Why: ${ended(why)}`].filter(Boolean).join(' ');
+}
+
+function ended(words: string): string {
+  return /[.!?]$/.test(words) ? words : `${words}.`;
 }
 
 /** Everybody's figures, mine first; nobody without minutes. */
@@ -69,22 +96,17 @@ export function hoursOf(draft: EntryDraft, me: string): HoursGiven {
 /** What keeps the draft from being logged, in one sentence each, by field; empty where nothing does. */
 export function draftProblems(draft: EntryDraft, me: string): { text?: string; along?: string } {
   const problems: { text?: string; along?: string } = {};
-  const tooLong = tooLongWords(draft.text);
+  const tooLong = tooLongWords(entryText(draft));
   if (tooLong) problems.text = tooLong;
-  else if (draft.text.trim() === '' && hoursOf(draft, me).length === 0) {
+  else if (draft.notDone && (draft.notDone.what.trim() === '' || draft.notDone.why.trim() === '')) {
+    problems.text = 'Say what was not done, and why.';
+  } else if (entryText(draft) === '' && hoursOf(draft, me).length === 0) {
     problems.text = 'Say what you did, or give the hours.';
   }
   if (draft.along.some(({ minutes }) => (minutes ?? draft.minutes) === null)) {
     problems.along = 'Give your hours, or theirs.';
   }
   return problems;
-}
-
-/** That a text is longer than the record takes, by how much, and what to do; undefined where it fits. */
-export function tooLongWords(text: string): string | undefined {
-  const over = text.trim().length - TEXT_UNITS_MAX;
-  if (over <= 0) return undefined;
-  return `That is ${over} characters too many for one entry. Nothing is lost: cut the end out, log this, and put the rest into a second entry.`;
 }
 
 /** What a part of the form is given: the draft, and the way to change some of it. */

@@ -4,20 +4,25 @@ import { Key } from '#src/components/key.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { KeyRack, Page } from '#src/components/page.tsx';
 import { QuarterHours } from '#src/components/quarter-hours.tsx';
-import { TextBox } from '#src/components/text-box.tsx';
 import { Undo } from '#src/components/undo.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
 import { BoatSheet } from '#src/routes/alongside/boat-sheet.tsx';
 import { AlongFields } from '#src/routes/alongside/log/along-fields.tsx';
-import { draftProblems, isWorthKeeping, tooLongWords } from '#src/routes/alongside/log/entry-draft.ts';
-import type { Logged } from '#src/routes/alongside/log/logged-undo.tsx';
+import type { Done } from '#src/routes/alongside/done.ts';
+import { draftProblems, entryText, isWorthKeeping } from '#src/routes/alongside/log/entry-draft.ts';
 import { KindField } from '#src/routes/alongside/log/kind-field.tsx';
+import { readLastDay } from '#src/routes/alongside/log/read-last-day.ts';
 import { readLog } from '#src/routes/alongside/log/read-log.ts';
+import { SameKey } from '#src/routes/alongside/log/same-key.tsx';
 import { TickFields } from '#src/routes/alongside/log/tick-fields.tsx';
 import { useEntryForm, type LogFor } from '#src/routes/alongside/log/use-entry-form.ts';
+import { WordsFields } from '#src/routes/alongside/log/words-fields.tsx';
+import { PictureFields } from '#src/routes/alongside/photos/picture-fields.tsx';
+import { PicturePlace } from '#src/routes/alongside/photos/picture-place.tsx';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 import { DayChoice } from '#src/components/day-choice.tsx';
 import { dayWords, momentWords } from '#src/words/day-words.ts';
+import { tooLongWords } from '#src/words/too-long.ts';
 
 interface EntryFormProps {
   /** where the work was, unless a draft says otherwise */
@@ -25,7 +30,7 @@ interface EntryFormProps {
   /** whose day it is, where the form was opened for somebody else */
   logFor: LogFor | null;
   onMove: (where: Where) => void;
-  onLogged: (logged: Logged) => void;
+  onLogged: (done: Done) => void;
 }
 
 /** What was done, in how long, with whom: kept on the device at every keystroke until it is logged. */
@@ -35,8 +40,11 @@ export function EntryForm({ where, logFor, onMove, onLogged }: EntryFormProps) {
   const here = { boatId: draft.boatId, stageId: draft.stageId };
   const shown = useRead(['log', here], (view) => readLog(view, here));
   const { me, timeZone } = useRead(['me'], (view) => ({ me: view.me.personId, timeZone: view.timeZone }));
+  const last = useRead(['last day', draft.boatId], (view) => readLastDay(view, draft.boatId));
   const [isMoving, setMoving] = useState(false);
-  const problems = form.isAsked ? draftProblems(draft, me) : { text: tooLongWords(draft.text) };
+  const [firstTaskIds, setFirstTaskIds] = useState<string[]>([]);
+  const problems = form.isAsked ? draftProblems(draft, me) : { text: tooLongWords(entryText(draft)) };
+  const isFresh = !isWorthKeeping(draft) && !logFor;
 
   return (
     <Page
@@ -87,14 +95,16 @@ export function EntryForm({ where, logFor, onMove, onLogged }: EntryFormProps) {
             This device has no room to keep what you write. Log it before you leave this screen.
           </Notice>
         )}
-        <TextBox
-          label="What did you do?"
-          rows={5}
-          autoFocus
-          value={draft.text}
-          onChange={(text) => change({ text })}
-          problem={problems.text}
-        />
+        <WordsFields draft={draft} change={change} problem={problems.text} />
+        {isFresh && last && (
+          <SameKey
+            last={last}
+            onTake={() => {
+              change(last.take);
+              setFirstTaskIds(last.taskIds);
+            }}
+          />
+        )}
         <QuarterHours
           label="Your hours"
           minutes={draft.minutes}
@@ -110,7 +120,15 @@ export function EntryForm({ where, logFor, onMove, onLogged }: EntryFormProps) {
         />
         <AlongFields draft={draft} change={change} people={shown.people} problem={problems.along} />
         <KindField draft={draft} change={change} />
-        <TickFields draft={draft} change={change} shown={shown} newId={form.newId} />
+        <TickFields
+          draft={draft}
+          change={change}
+          shown={shown}
+          firstTaskIds={firstTaskIds}
+          newId={form.newId}
+        />
+        <PictureFields pictures={draft.pictures} onAdd={form.addPictures} onRemove={form.removePicture} />
+        {draft.pictures.length > 0 && <PicturePlace draft={draft} change={change} />}
         {isWorthKeeping(draft) && (
           <Key kind="quiet" onClick={form.empty}>
             Empty the form
@@ -122,8 +140,8 @@ export function EntryForm({ where, logFor, onMove, onLogged }: EntryFormProps) {
         where={here}
         onClose={() => setMoving(false)}
         onChoose={(chosen) => {
-          // ticks are of the boat that was left
-          change(chosen.boatId === draft.boatId ? chosen : { ...chosen, ticked: [] });
+          // ticks and places are of the boat that was left
+          change(chosen.boatId === draft.boatId ? chosen : { ...chosen, ticked: [], place: {} });
           onMove(chosen);
           setMoving(false);
         }}

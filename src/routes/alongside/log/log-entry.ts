@@ -1,27 +1,53 @@
 import { hoursText } from '#shared/measure/hours.ts';
-import type { Replica } from '#src/replica/replica.ts';
+import type { Holding, Replica } from '#src/replica/replica.ts';
 import type { View } from '#src/replica/view.ts';
-import { hoursOf, type EntryDraft } from '#src/routes/alongside/log/entry-draft.ts';
-import type { Logged } from '#src/routes/alongside/log/logged-undo.tsx';
+import { undoneAtOnce, type Done } from '#src/routes/alongside/done.ts';
+import { DRAFT_KEY, entryText, hoursOf, type EntryDraft } from '#src/routes/alongside/log/entry-draft.ts';
+import { holdTogether } from '#src/routes/alongside/photos/hold-together.ts';
+import { carryOn, plainPlace } from '#src/routes/alongside/place/carried.ts';
 import { counted } from '#src/words/day-words.ts';
 import { boatWords } from '#src/words/where.ts';
 
 /**
- * Makes a draft's ops durable: the entry, then its ticks. What an earlier try already made is not made again.
- * Throws a HoldError, with words, where something cannot be held; nothing of the draft is lost then.
+ * Makes a draft's ops durable as one: the entry, its ticks and its photographs. What an earlier try already made is not
+ * made again. Throws a HoldError, with words, where something cannot be held; nothing of the draft is lost then.
  */
-export async function logEntry(replica: Replica, draft: EntryDraft): Promise<Logged> {
-  const { entryId, boatId, stageId, workDate } = draft;
+export async function logEntry(replica: Replica, draft: EntryDraft): Promise<Done> {
+  const { entryId, boatId, stageId, workDate, pictures, set } = draft;
   const { me } = replica.view();
   const hours = hoursOf(draft, me.personId);
+  const holdings: Holding[] = untickedYet(replica.view(), draft).map(({ taskId, markId }) => ({
+    kind: 'task.mark',
+    data: { taskId, markId, workDate, entryId },
+  }));
   if (!replica.view().find('entry', entryId)) {
-    const text = draft.text.trim();
-    await replica.hold('entry.write', { entryId, boatId, stageId, workDate, text, spoken: false, hours });
+    const data = { entryId, boatId, stageId, workDate, text: entryText(draft), spoken: false, hours };
+    holdings.unshift({ kind: 'entry.write', data });
   }
-  for (const { taskId, markId } of untickedYet(replica.view(), draft)) {
-    await replica.hold('task.mark', { taskId, markId, workDate, entryId });
-  }
-  return { logged: 'entry', entryId, words: loggedWords(replica.view(), draft, hours), draft };
+  const place = plainPlace(draft.place);
+  await holdTogether(replica, holdings, pictures, {
+    boatId,
+    stageId,
+    entryId,
+    place,
+    ...(set ? { set } : {}),
+  });
+  if (pictures.length > 0) await carryOn(replica, { boatId, place, set });
+  return {
+    done: entryId,
+    words: loggedWords(replica.view(), draft, hours),
+    undo: [
+      ...draft.ticked.map(({ taskId, markId }) => ({
+        kind: 'task.unmark',
+        data: { taskId, markIds: [markId] },
+      })),
+      ...undoneAtOnce([
+        ...pictures.map(({ photoId }) => ({ entity: 'photo' as const, id: photoId })),
+        { entity: 'entry', id: entryId },
+      ]),
+    ],
+    draftBack: { key: DRAFT_KEY, value: anew(draft, () => replica.newId()) },
+  };
 }
 
 /** The ticks of a draft that are not in the record yet. */
@@ -32,11 +58,22 @@ export function untickedYet(view: View, { ticked }: EntryDraft): EntryDraft['tic
   });
 }
 
+/** The same draft under new ids, to be logged again. */
+function anew(draft: EntryDraft, newId: () => string): EntryDraft {
+  return {
+    ...draft,
+    entryId: newId(),
+    ticked: draft.ticked.map(({ taskId }) => ({ taskId, markId: newId() })),
+    pictures: draft.pictures.map((picture) => ({ ...picture, photoId: newId() })),
+  };
+}
+
 function loggedWords(view: View, draft: EntryDraft, hours: { minutes: number }[]): string {
   const minutes = hours.reduce((sum, figure) => sum + figure.minutes, 0);
   const parts = [
     minutes > 0 && `${hoursText(minutes)} h`,
     draft.ticked.length > 0 && counted(draft.ticked.length, 'task') + ' ticked',
+    draft.pictures.length > 0 && counted(draft.pictures.length, 'photo'),
   ].filter(Boolean);
   const what = parts.length > 0 ? `: ${parts.join(', ')}` : '';
   return `Logged on ${boatWords(view, draft.boatId)}${what}`;

@@ -28,7 +28,7 @@ export default function LogPage() {
       where={openedAt}
       logFor={logFor}
       onMove={choose}
-      onLogged={(logged) => void navigate(logFor ? `/day/${logFor.day}` : '/alongside', { state: logged })}
+      onLogged={(done) => void navigate(logFor ? `/day/${logFor.day}` : '/alongside', { state: done })}
     />
   );
 }

@@ -6,11 +6,13 @@ import type { TaskLine } from '#src/routes/alongside/tasks/read-tasks.ts';
 
 interface TickFieldsProps extends DraftFields {
   shown: Pick<LogForm, 'tasks' | 'otherTasks'>;
+  /** tasks that come before the others: those of the last day */
+  firstTaskIds?: string[];
   newId: () => string;
 }
 
 /** The tasks that were finished in the same go: those of this stage, and folded away those of the others. */
-export function TickFields({ draft, change, shown, newId }: TickFieldsProps) {
+export function TickFields({ draft, change, shown, firstTaskIds = [], newId }: TickFieldsProps) {
   const { ticked } = draft;
   const isTicked = (taskId: string) => ticked.some((each) => each.taskId === taskId);
 
@@ -30,14 +32,18 @@ export function TickFields({ draft, change, shown, newId }: TickFieldsProps) {
   );
 
   if (shown.tasks.length + shown.otherTasks.length === 0) return null;
-  const isOtherTicked = shown.otherTasks.some(({ id }) => isTicked(id));
+  const isFirst = ({ id }: TaskLine) => firstTaskIds.includes(id);
+  const others = shown.otherTasks.filter((task) => !isFirst(task));
+  const isOtherTicked = others.some(({ id }) => isTicked(id));
   return (
     <fieldset className="grid gap-3">
       <legend className="pb-1 text-[18px] font-semibold">Finished with it?</legend>
-      {shown.tasks.map((task) => key(task))}
-      {shown.otherTasks.length > 0 && (
-        <Fold title={`Tasks of her other stages (${shown.otherTasks.length})`} isOpenAtFirst={isOtherTicked}>
-          <div className="grid gap-3">{shown.otherTasks.map((task) => key(task, task.stageName))}</div>
+      {shown.tasks.filter(isFirst).map((task) => key(task))}
+      {shown.otherTasks.filter(isFirst).map((task) => key(task, task.stageName))}
+      {shown.tasks.filter((task) => !isFirst(task)).map((task) => key(task))}
+      {others.length > 0 && (
+        <Fold title={`Tasks of her other stages (${others.length})`} isOpenAtFirst={isOtherTicked}>
+          <div className="grid gap-3">{others.map((task) => key(task, task.stageName))}</div>
         </Fold>
       )}
     </fieldset>

@@ -2,6 +2,7 @@ import { useState } from 'react';
 import { useMutation } from '@tanstack/react-query';
 import type { Day } from '#shared/sync/day.ts';
 import { useReplica } from '#src/replica/hooks.tsx';
+import type { KeptPicture } from '#src/replica/photos/picture.ts';
 import type { Replica } from '#src/replica/replica.ts';
 import {
   DRAFT_KEY,
@@ -12,7 +13,8 @@ import {
   type EntryDraft,
 } from '#src/routes/alongside/log/entry-draft.ts';
 import { logEntry, untickedYet } from '#src/routes/alongside/log/log-entry.ts';
-import type { Logged } from '#src/routes/alongside/log/logged-undo.tsx';
+import type { Done } from '#src/routes/alongside/done.ts';
+import { readCarried } from '#src/routes/alongside/place/carried.ts';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 import { useDraft } from '#src/routes/alongside/use-draft.ts';
 
@@ -23,9 +25,9 @@ export interface LogFor {
 }
 
 /** The form's draft and what can be done with it. */
-export function useEntryForm(where: Where, logFor: LogFor | null, onLogged: (logged: Logged) => void) {
+export function useEntryForm(where: Where, logFor: LogFor | null, onLogged: (done: Done) => void) {
   const replica = useReplica();
-  const { draft, change, clear, isUnkept } = useDraft(draftKey(logFor), (kept) =>
+  const { draft, change, changeBy, clear, isUnkept } = useDraft(draftKey(logFor), (kept) =>
     openDraft(replica, where, logFor, kept),
   );
   const [restoredAt, setRestoredAt] = useState(draft.keptAt);
@@ -47,6 +49,8 @@ export function useEntryForm(where: Where, logFor: LogFor | null, onLogged: (log
     if (Object.keys(draftProblems(draft, replica.view().me.personId)).length === 0) logging.mutate();
   }
 
+  const keptNow = () => ({ keptAt: new Date(replica.view().nowMs).toISOString() });
+
   return {
     draft,
     isUnkept,
@@ -58,8 +62,16 @@ export function useEntryForm(where: Where, logFor: LogFor | null, onLogged: (log
     failure: logging.error?.message ?? null,
     emptied,
     newId: () => replica.newId(),
-    change(next: Partial<EntryDraft>) {
-      change({ ...draft, ...next, keptAt: new Date(replica.view().nowMs).toISOString() });
+    change: (next: Partial<EntryDraft>) => changeBy((kept) => ({ ...kept, ...next, ...keptNow() })),
+    addPictures: (pictures: KeptPicture[]) =>
+      changeBy((kept) => ({ ...kept, pictures: [...kept.pictures, ...pictures], ...keptNow() })),
+    removePicture(picture: KeptPicture) {
+      changeBy((kept) => ({
+        ...kept,
+        pictures: kept.pictures.filter(({ photoId }) => photoId !== picture.photoId),
+        ...keptNow(),
+      }));
+      void replica.dropKept([picture]).catch(() => undefined);
     },
     log,
     empty() {
@@ -82,7 +94,8 @@ function draftKey(logFor: LogFor | null): string {
 }
 
 function freshDraft(replica: Replica, where: Where, logFor: LogFor | null): EntryDraft {
-  const draft = emptyDraft(where, logFor?.day ?? replica.view().today, replica.newId());
+  const { place } = readCarried(replica, where.boatId);
+  const draft = emptyDraft(where, logFor?.day ?? replica.view().today, replica.newId(), place);
   return logFor ? { ...draft, along: [{ personId: logFor.personId, minutes: null }] } : draft;
 }
 

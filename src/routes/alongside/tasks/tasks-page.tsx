@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import { useSearchParams } from 'react-router-dom';
 import { BackBar } from '#src/components/back-bar.tsx';
 import { Empty } from '#src/components/empty.tsx';
 import { Fold } from '#src/components/fold.tsx';
@@ -9,7 +10,7 @@ import { Undo } from '#src/components/undo.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 import { AddTask } from '#src/routes/alongside/tasks/add-task.tsx';
-import { readTasks, type TaskGroup } from '#src/routes/alongside/tasks/read-tasks.ts';
+import { readTask, readTasks, type TaskGroup } from '#src/routes/alongside/tasks/read-tasks.ts';
 import { TaskRow } from '#src/routes/alongside/tasks/task-row.tsx';
 import { useTaskDoings, type TaskDoings } from '#src/routes/alongside/tasks/use-task-doings.ts';
 import { useWhere } from '#src/routes/alongside/use-where.ts';
@@ -31,6 +32,11 @@ function Tasks({ where }: { where: Where }) {
   const groups = useRead(['tasks', where], (view) => readTasks(view, where));
   const place = useRead(['place', where], (view) => whereWords(view, where.boatId, where.stageId));
   const doings = useTaskDoings();
+  const askedId = useSearchParams()[0].get('task');
+  const asked = useRead(['asked task', askedId], (view) => {
+    const task = askedId === null ? undefined : view.find('task', askedId);
+    return task ? readTask(view, task) : null;
+  });
   const [here, elsewhere] = [groups.filter(isHere), groups.filter((group) => !isHere(group))];
   function isHere(group: TaskGroup) {
     return group.stageId === where.stageId;
@@ -60,6 +66,13 @@ function Tasks({ where }: { where: Where }) {
       }
     >
       {doings.failure && <Notice tone="error">{doings.failure}</Notice>}
+      {asked && (
+        <Section title="The one you looked for">
+          <Planks>
+            <TaskRow task={asked} doings={doings} />
+          </Planks>
+        </Section>
+      )}
       {here.map((group) => (
         <Group key={group.stageId} group={group} doings={doings} />
       ))}
