@@ -110,8 +110,13 @@ function rowTitle(view: View, data: Data): string {
 function hoursWords(view: View, hours: unknown): string {
   if (!Array.isArray(hours)) return '';
   return (hours as { personId: string; minutes: number }[])
-    .map(({ personId, minutes }) => `${whoWords(view, personId)} ${hoursText(minutes)}\u00a0h`)
+    .map(({ personId, minutes }) => `${whoWords(view, personId)} ${unbroken(`${hoursText(minutes)} h`)}`)
     .join(', ');
+}
+
+// no line ends between '2' and '1/2'
+function unbroken(words: string): string {
+  return words.replaceAll(' ', '\u00a0');
 }
 
 const ROWS_WITH_BOAT: [field: string, entity: Extract<Entity, 'entry' | 'task' | 'stage'>][] = [

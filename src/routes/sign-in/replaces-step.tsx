@@ -45,7 +45,7 @@ export function ReplacesStep({ request, devices, onDone }: ReplacesStepProps) {
       <Choice
         label="It is in place of"
         options={[
-          { value: NONE, label: 'None: I use them both' },
+          { value: NONE, label: `None: I use them ${devices.length > 1 ? 'all' : 'both'}` },
           ...devices.map(({ id, label, heard }) => ({ value: id, label, note: heard })),
         ]}
         value={chosen}

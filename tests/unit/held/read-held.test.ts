@@ -50,7 +50,7 @@ describe('what a device holds', () => {
     const [line] = readHeld(heldView(bench, rosa, [opOf(bench, rosa, 'entry.write', written)]));
     expect(line).toMatchObject({
       what: 'Entry',
-      words: 'Took up the king plank · you 2 1/2\u00a0h',
+      words: 'Took up the king plank · you 2\u00a01/2\u00a0h',
       where: 'Penny Candle · Strip',
       age: '3 hours',
       whose: null,

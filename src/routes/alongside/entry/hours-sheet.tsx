@@ -64,7 +64,7 @@ export function HoursSheet({ page, onClose, onDone }: ChangeProps) {
             isShort
           />
           <SelectField
-            label="Kind"
+            label={`Kind of ${label.replace(/^Your/, 'your')}`}
             options={KIND_OPTIONS}
             value={kind ?? ''}
             onChange={(next) => setFigure(personId, { kind: next || null })}
