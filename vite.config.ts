@@ -1,10 +1,27 @@
 import tailwindcss from '@tailwindcss/vite';
 import react from '@vitejs/plugin-react';
-import { defineConfig } from 'vite';
+import { defineConfig, type Plugin } from 'vite';
 import { VitePWA } from 'vite-plugin-pwa';
+
+const JSON_SCHEMA_FILES = /zod\/v4\/core\/(to-json-schema|json-schema-processors)\.js$/;
+
+/** Leaves out zod's writing of JSON Schema, which the server alone does: every schema names it, so that the phone would load 5 KB of it first. */
+function withoutJsonSchema(): Plugin {
+  return {
+    name: 'without-json-schema',
+    transform(code, id) {
+      if (!JSON_SCHEMA_FILES.test(id)) return;
+      const named = [...code.matchAll(/^export (?:const|function) (\w+)/gm)].map(([, name]) => name);
+      const absent = "() => { throw new Error('JSON Schema is written by the server alone.'); }";
+      const exports = [...named.map((name) => `${name} = absent`), 'process = absent'];
+      return `const absent = ${absent};\nexport const ${exports.join(', ')};`;
+    },
+  };
+}
 
 export default defineConfig({
   plugins: [
+    withoutJsonSchema(),
     react(),
     tailwindcss(),
     VitePWA({

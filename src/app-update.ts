@@ -1,4 +1,4 @@
-import { Workbox } from 'workbox-window';
+import type { Workbox } from 'workbox-window';
 
 /** 'none': this is the newest known. 'waiting': a newer one is here. 'taken-over': another tab has let the newer one in. */
 export type UpdateState = 'none' | 'waiting' | 'taken-over';
@@ -16,23 +16,28 @@ export function followAppUpdates(): AppUpdate {
   let state: UpdateState = 'none';
   let isAsked = false;
   const listeners = new Set<() => void>();
-  const worker = import.meta.env.PROD && 'serviceWorker' in navigator ? new Workbox('/sw.js') : null;
+  let worker: Workbox | null = null;
 
   function become(next: UpdateState) {
     state = next;
     for (const listener of listeners) listener();
   }
 
-  worker?.addEventListener('waiting', () => become('waiting'));
-  // the first worker of all takes over too, and replaces none
-  let isControlled = worker !== null && navigator.serviceWorker.controller !== null;
-  worker?.addEventListener('controlling', () => {
-    if (isAsked) window.location.reload();
-    // another window let it in, and the older files are gone: this one runs on with what it has loaded
-    else if (isControlled) become('taken-over');
-    isControlled = true;
-  });
-  if (worker) keepFresh(worker);
+  function follow(found: Workbox) {
+    worker = found;
+    found.addEventListener('waiting', () => become('waiting'));
+    // the first worker of all takes over too, and replaces none
+    let isControlled = navigator.serviceWorker.controller !== null;
+    found.addEventListener('controlling', () => {
+      if (isAsked) window.location.reload();
+      // another window let it in, and the older files are gone: this one runs on with what it has loaded
+      else if (isControlled) become('taken-over');
+      isControlled = true;
+    });
+    keepFresh(found);
+  }
+
+  if (import.meta.env.PROD && 'serviceWorker' in navigator) void openWorker().then(follow, () => undefined);
 
   return {
     state: () => state,
@@ -46,6 +51,12 @@ export function followAppUpdates(): AppUpdate {
       worker.messageSkipWaiting();
     },
   };
+}
+
+// after the first screen, which needs none of it
+async function openWorker(): Promise<Workbox> {
+  const { Workbox } = await import('workbox-window');
+  return new Workbox('/sw.js');
 }
 
 // an installed app can stay open for weeks, and the browser itself looks only on a navigation
