@@ -3,6 +3,7 @@ import { BungMark } from '#src/components/bung-mark.tsx';
 import { Empty } from '#src/components/empty.tsx';
 import { Hours } from '#src/components/hours.tsx';
 import { Icon } from '#src/components/icons.tsx';
+import { counted } from '#src/words/day-words.ts';
 import { HOURS_KIND_SHORT_WORDS } from '#src/words/hours-words.ts';
 import { BATTEN_LOOK } from './batten-look.ts';
 import type { BoatOnSheet, BriefEntry, StageOnSheet } from './read-boats.ts';
@@ -50,6 +51,14 @@ function BoatBlock({ boat }: { boat: BoatOnSheet }) {
           <span className="min-w-0">{boat.ticks.join(' · ')}</span>
         </p>
       )}
+      {boat.found.map((title) => (
+        <p key={title} className="pl-[44px] font-semibold">
+          {title}
+        </p>
+      ))}
+      {boat.photoCount > 0 && (
+        <p className="pl-[44px] text-slate">{counted(boat.photoCount, 'photo')} by themselves</p>
+      )}
       {boat.finished.map((name) => (
         <p key={name} className="font-bold">
           {name}: finished
@@ -91,9 +100,20 @@ function BriefRow({ entry }: { entry: BriefEntry }) {
         to={`/entry/${entry.id}`}
         className={`min-w-0 flex-1 truncate py-[2px] hover:underline print:whitespace-normal ${entry.mark === 'struck' ? 'text-slate line-through' : ''}`}
       >
-        <People entry={entry} /> <span className="text-slate">·</span> {entry.text}
+        <People entry={entry} /> <span className="text-slate">·</span> <BriefNotes entry={entry} />
+        {entry.text}
       </Link>
     </li>
+  );
+}
+
+/** What was found stands before the words, which may be cut off. */
+function BriefNotes({ entry: { found, photoCount } }: { entry: BriefEntry }) {
+  return (
+    <>
+      {found.length > 0 && <strong>{found.join('; ')}. </strong>}
+      {photoCount > 0 && <span className="text-slate">{counted(photoCount, 'photo')}. </span>}
+    </>
   );
 }
 

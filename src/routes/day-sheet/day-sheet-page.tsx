@@ -1,8 +1,10 @@
-import { useEffect } from 'react';
+import { useEffect, useState } from 'react';
 import { Navigate, useNavigate, useParams, useSearchParams } from 'react-router-dom';
 import { daySchema, type Day } from '#shared/sync/day.ts';
-import { useRead } from '#src/replica/hooks.tsx';
+import { useMe, useRead } from '#src/replica/hooks.tsx';
+import { DeedBar } from '#src/shell/deed-bar.tsx';
 import { PlacePage } from '#src/shell/place-page.tsx';
+import { useDeeds } from '#src/shell/use-deeds.ts';
 import { BoatsList } from './boats-list.tsx';
 import { KindsBar } from './kinds-bar.tsx';
 import { LooseEnds } from './loose-ends.tsx';
@@ -12,6 +14,7 @@ import { readLooseEnds } from './read-loose-ends.ts';
 import { readSetAsides } from './read-set-aside.ts';
 import { SetAsides } from './set-asides.tsx';
 import { SheetHead } from './sheet-head.tsx';
+import { SplitSheet } from './split/split-sheet.tsx';
 
 /** One day of the shop, by person and by boat, with what a person must settle beside it. */
 export default function DaySheetPage() {
@@ -28,8 +31,11 @@ function DaySheet({ day }: { day: Day }) {
   const [search] = useSearchParams();
   const isByBoat = search.get('by') === 'boat';
   useArrowKeys(day);
+  const deeds = useDeeds();
+  const [splitId, setSplitId] = useState<string | null>(null);
+  const isForeman = useMe()?.roles.includes('foreman') ?? false;
   return (
-    <PlacePage title="Day sheet" width="wide">
+    <PlacePage title="Day sheet" width="wide" foot={<DeedBar deeds={deeds} />}>
       <div className="xl:grid xl:min-h-[calc(100dvh-64px)] xl:grid-cols-[minmax(0,1fr)_372px]">
         <div className="pb-6 md:px-6">
           <SheetHead
@@ -39,7 +45,7 @@ function DaySheet({ day }: { day: Day }) {
             setAsideCount={setAsides.length}
           />
           <div className={isByBoat ? 'hidden print:block' : ''}>
-            <PeopleList sheet={sheet} />
+            <PeopleList sheet={sheet} onSplit={isForeman ? setSplitId : null} />
             <KindsBar sheet={sheet} />
           </div>
           <div className={isByBoat ? '' : 'hidden print:block'}>
@@ -51,6 +57,7 @@ function DaySheet({ day }: { day: Day }) {
           <SetAsides lines={setAsides} />
         </div>
       </div>
+      {splitId && <SplitSheet entryId={splitId} deeds={deeds} onClose={() => setSplitId(null)} />}
     </PlacePage>
   );
 }

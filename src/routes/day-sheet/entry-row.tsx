@@ -2,15 +2,18 @@ import { Link } from 'react-router-dom';
 import { BungMark } from '#src/components/bung-mark.tsx';
 import { Hours } from '#src/components/hours.tsx';
 import { KindSelect } from './kind-select.tsx';
+import { Notes as FoundNotes } from './notes.tsx';
 import type { Correction, EntryLine, Figure } from './read-entry.ts';
 
 interface EntryRowProps {
   entry: EntryLine;
   personName: string;
+  /** Null where this person may not divide it. */
+  onSplit: ((entryId: string) => void) | null;
 }
 
 /** An entry under one person: its mark on the line, where, the words, and that person's hours. */
-export function EntryRow({ entry, personName }: EntryRowProps) {
+export function EntryRow({ entry, personName, onSplit }: EntryRowProps) {
   const { figure, struck } = entry;
   return (
     <li className="relative grid grid-cols-[minmax(0,1fr)] gap-x-4 py-[5px] pl-[44px] sm:grid-cols-[minmax(0,1fr)_auto]">
@@ -24,19 +27,23 @@ export function EntryRow({ entry, personName }: EntryRowProps) {
         >
           <span className="font-bold text-mahogany group-hover:underline">{entry.boatName}</span>
           <span className="text-slate"> · {entry.stageName}</span>
-          {entry.author && <span className="text-slate"> · by {entry.author}</span>}
+          {entry.author && <span className="text-slate"> · logged by {entry.author}</span>}
           <span className={`block ${struck ? 'text-slate line-through' : ''}`}>{entry.text}</span>
         </Link>
-        <Notes entry={entry} />
+        <FoundNotes notes={entry.notes} photos={entry.photos} />
+        <Remarks entry={entry} />
       </div>
-      {figure && (
-        <FigureCell entryId={entry.id} figure={figure} personName={personName} isStruck={struck !== null} />
-      )}
+      <div>
+        {figure && (
+          <FigureCell entryId={entry.id} figure={figure} personName={personName} isStruck={struck !== null} />
+        )}
+        {onSplit && !struck && <SplitKey entry={entry} onSplit={onSplit} />}
+      </div>
     </li>
   );
 }
 
-function Notes({ entry }: { entry: EntryLine }) {
+function Remarks({ entry }: { entry: EntryLine }) {
   const notes = [entry.struck, ...entry.flags].filter((words) => words !== null);
   return (
     <div className="text-[16px] leading-snug">
@@ -83,6 +90,19 @@ function LooseLine({ figure }: { figure: Figure | null }) {
         a loose end
       </a>
     </p>
+  );
+}
+
+function SplitKey({ entry, onSplit }: { entry: EntryLine; onSplit: (entryId: string) => void }) {
+  return (
+    <button
+      type="button"
+      aria-haspopup="dialog"
+      className="flex min-h-key items-center text-[16px] text-slate underline underline-offset-4 sm:ml-auto sm:min-h-9"
+      onClick={() => onSplit(entry.id)}
+    >
+      Split or move<span className="sr-only"> the entry on {entry.boatName}</span>
+    </button>
   );
 }
 

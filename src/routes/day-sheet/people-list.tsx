@@ -1,3 +1,5 @@
+import { Link } from 'react-router-dom';
+import { BungMark } from '#src/components/bung-mark.tsx';
 import { Hours } from '#src/components/hours.tsx';
 import { Icon } from '#src/components/icons.tsx';
 import { KeyLink } from '#src/components/key.tsx';
@@ -5,22 +7,30 @@ import { useMe } from '#src/replica/hooks.tsx';
 import { EntryRow } from './entry-row.tsx';
 import { BATTEN_LOOK, RUNS_ON } from './batten-look.ts';
 import type { DaySheet, PersonOnSheet, TickLine } from './read-day-sheet.ts';
+import { Notes } from './notes.tsx';
+import type { AloneOnSheet } from './read-notes.ts';
 import type { Heard } from './read-heard.ts';
 
+interface PeopleListProps {
+  sheet: DaySheet;
+  /** Null where this person may not divide entries. */
+  onSplit: ((entryId: string) => void) | null;
+}
+
 /** A day by person: who logged, then who has not. */
-export function PeopleList({ sheet }: { sheet: DaySheet }) {
+export function PeopleList({ sheet, onSplit }: PeopleListProps) {
   return (
     <section aria-label="By person">
       <ul className="grid grid-cols-[minmax(0,1fr)] gap-seam bg-line py-seam">
         {sheet.people.map((person) => (
-          <PersonBlock key={person.personId} person={person} sheet={sheet} />
+          <PersonBlock key={person.personId} person={person} sheet={sheet} onSplit={onSplit} />
         ))}
       </ul>
     </section>
   );
 }
 
-function PersonBlock({ person, sheet }: { person: PersonOnSheet; sheet: DaySheet }) {
+function PersonBlock({ person, sheet, onSplit }: PeopleListProps & { person: PersonOnSheet }) {
   return (
     <li className="grid grid-cols-[minmax(0,1fr)_auto] bg-plank px-4 pt-3 pb-2 lg:grid-cols-[152px_minmax(0,1fr)_64px] lg:px-5">
       <div className="min-w-0 pb-1">
@@ -31,7 +41,10 @@ function PersonBlock({ person, sheet }: { person: PersonOnSheet; sheet: DaySheet
       <div className="col-span-2 min-w-0 lg:col-span-1 lg:col-start-2 lg:row-start-1">
         <ul className={`${BATTEN_LOOK} ${RUNS_ON}`}>
           {person.entries.map((entry) => (
-            <EntryRow key={entry.id} entry={entry} personName={person.name} />
+            <EntryRow key={entry.id} entry={entry} personName={person.name} onSplit={onSplit} />
+          ))}
+          {person.alone.map((own) => (
+            <AloneRow key={own.boatId} own={own} />
           ))}
           {person.ticks.map((tick) => (
             <TickRow key={tick.key} tick={tick} />
@@ -45,6 +58,22 @@ function PersonBlock({ person, sheet }: { person: PersonOnSheet; sheet: DaySheet
           </p>
         ))}
       </div>
+    </li>
+  );
+}
+
+/** What somebody noted or photographed on a boat by itself. */
+function AloneRow({ own }: { own: AloneOnSheet }) {
+  const mark = own.notes.find((note) => note.mark !== 'sent')?.mark ?? 'sent';
+  return (
+    <li className="relative py-[5px] pl-[44px]">
+      <span className="absolute top-[6px] left-[1px] z-20">
+        <BungMark mark={mark} />
+      </span>
+      <Link to={`/work/${own.boatId}`} className="font-bold text-mahogany hover:underline">
+        {own.boatName}
+      </Link>
+      <Notes notes={own.notes} photos={own.photos} />
     </li>
   );
 }
@@ -76,6 +105,11 @@ function Total({ person }: { person: PersonOnSheet }) {
         </>
       ) : (
         <Hours minutes={person.minutes} unit="" />
+      )}
+      {person.minutes < person.usualMinutes && (
+        <span className="block text-[16px] leading-snug font-normal whitespace-nowrap text-slate">
+          of <Hours minutes={person.usualMinutes} />
+        </span>
       )}
     </p>
   );

@@ -8,6 +8,7 @@ import type { View } from '#src/replica/view.ts';
 import { stageWords } from '#src/words/where.ts';
 import { whoWords } from '#src/words/who.ts';
 import { markOf } from './read-entry.ts';
+import type { NoteOnSheet, NotesOfDay } from './read-notes.ts';
 
 export interface BriefEntry {
   id: string;
@@ -15,6 +16,9 @@ export interface BriefEntry {
   text: string;
   author: string;
   people: { personId: string; name: string; minutes: number }[];
+  /** 'Found: rot, floor 7': what came with it, and what was found sound */
+  found: string[];
+  photoCount: number;
 }
 
 export interface StageOnSheet {
@@ -36,15 +40,22 @@ export interface BoatOnSheet {
   ticks: string[];
   /** stages that were marked finished that day */
   finished: string[];
+  /** 'Found: rot, floor 7 (Wes)': noted by itself */
+  found: string[];
+  /** photographs that were taken by themselves */
+  photoCount: number;
+}
+
+/** What the day's cut by boat is made of. */
+interface OfDay {
+  entries: EntryRow[];
+  looseIds: ReadonlySet<string>;
+  notes: NotesOfDay;
 }
 
 /** A day's entries under their boats and stages; a boat stands here where something was logged, ticked or finished on her. */
-export function readBoats(
-  view: View,
-  day: Day,
-  entries: EntryRow[],
-  looseIds: ReadonlySet<string>,
-): BoatOnSheet[] {
+export function readBoats(view: View, day: Day, ofDay: OfDay): BoatOnSheet[] {
+  const { entries, notes } = ofDay;
   return view
     .all('boat')
     .map((boat): BoatOnSheet => {
@@ -54,16 +65,40 @@ export function readBoats(
         name: boat.name,
         dayOfStay: boat.arrivedOn && boat.arrivedOn <= day ? daysBetween(boat.arrivedOn, day) + 1 : null,
         minutes: totalMinutes(hoursLines(own)),
-        stages: readStages(view, own, looseIds),
+        stages: readStages(view, own, ofDay),
         ticks: ticksOn(view, boat.id, day),
         finished: finishedOn(view, boat.id, day),
+        ...aloneOn(view, boat.id, notes),
       };
     })
-    .filter((boat) => boat.stages.length + boat.ticks.length + boat.finished.length > 0)
+    .filter((boat) => hasSomething(boat))
     .sort((a, b) => b.minutes - a.minutes || a.name.localeCompare(b.name));
 }
 
-function readStages(view: View, entries: EntryRow[], looseIds: ReadonlySet<string>): StageOnSheet[] {
+function hasSomething({ stages, ticks, finished, found, photoCount }: BoatOnSheet): boolean {
+  return stages.length + ticks.length + finished.length + found.length + photoCount > 0;
+}
+
+function aloneOn(view: View, boatId: string, notes: NotesOfDay): Pick<BoatOnSheet, 'found' | 'photoCount'> {
+  const alone = view
+    .all('person')
+    .flatMap(({ id, name }) => notes.alone(id).map((own) => ({ ...own, name })))
+    .filter((own) => own.boatId === boatId);
+  return {
+    found: alone.flatMap((own) => standingTitles(own.notes).map((title) => `${title} (${own.name})`)),
+    photoCount: alone.reduce((count, own) => count + photosIn(own), 0),
+  };
+}
+
+function standingTitles(notes: NoteOnSheet[]): string[] {
+  return notes.filter(({ struck }) => !struck).map(({ title }) => title);
+}
+
+function photosIn({ notes, photos }: { notes: NoteOnSheet[]; photos: unknown[] }): number {
+  return notes.reduce((count, note) => count + note.photos.length, photos.length);
+}
+
+function readStages(view: View, entries: EntryRow[], ofDay: OfDay): StageOnSheet[] {
   const stageIds = [...new Set(entries.map((entry) => entry.stageId))];
   return stageIds.map((stageId) => {
     const own = entries.filter((entry) => entry.stageId === stageId);
@@ -73,7 +108,7 @@ function readStages(view: View, entries: EntryRow[], looseIds: ReadonlySet<strin
       name: stageWords(view, stageId),
       minutes: totalMinutes(lines),
       kinds: readKinds(lines),
-      entries: own.map((entry) => readBrief(view, entry, looseIds)),
+      entries: own.map((entry) => readBrief(view, entry, ofDay)),
     };
   });
 }
@@ -85,8 +120,11 @@ export function readKinds(lines: HoursLine[]): { kind: HoursKind | null; minutes
     .sort((a, b) => b.minutes - a.minutes);
 }
 
-function readBrief(view: View, entry: EntryRow, looseIds: ReadonlySet<string>): BriefEntry {
+function readBrief(view: View, entry: EntryRow, { looseIds, notes }: OfDay): BriefEntry {
+  const own = notes.ofEntry(entry.id);
   return {
+    found: standingTitles(own.notes),
+    photoCount: photosIn(own),
     id: entry.id,
     mark: markOf(view, entry, looseIds),
     text: entry.text,

@@ -9,7 +9,9 @@ import { listWords } from '#src/words/name-words.ts';
 import { boatWords } from '#src/words/where.ts';
 import { whoWords } from '#src/words/who.ts';
 import { readBoats, type BoatOnSheet } from './read-boats.ts';
-import { readEntryLine, type EntryLine } from './read-entry.ts';
+import { peopleOf, readEntryLine, type EntryLine } from './read-entry.ts';
+import { usualMinutes } from './read-missing.ts';
+import { readNotes, type AloneOnSheet, type NotesOfDay } from './read-notes.ts';
 import { readHeard, readNothing, type Heard, type Nothing } from './read-heard.ts';
 
 export interface TickLine {
@@ -25,7 +27,11 @@ export interface PersonOnSheet {
   name: string;
   isMe: boolean;
   minutes: number;
+  /** what is expected of them that day, in minutes; 0 where nothing is */
+  usualMinutes: number;
   entries: EntryLine[];
+  /** noted or photographed by itself */
+  alone: AloneOnSheet[];
   ticks: TickLine[];
   heard: Heard;
   /** set where nothing of this person's is about the day */
@@ -51,14 +57,15 @@ export function readDaySheet(view: View, day: Day): DaySheet {
     .filter((entry) => entry.workDate === day)
     .sort(byWriting);
   const looseIds = new Set(view.all('looseEnd').map((end) => end.rowId));
-  const people = readPeople(view, day, entries, looseIds);
+  const notes = readNotes(view, day, entries, looseIds);
+  const people = readPeople(view, day, entries, looseIds, notes);
   return {
     day,
     isToday: day === view.today,
     minutes: totalMinutes(hoursLines(entries)),
     loggedCount: people.filter((person) => !person.nothing).length,
     people,
-    boats: readBoats(view, day, entries, looseIds),
+    boats: readBoats(view, day, { entries, looseIds, notes }),
   };
 }
 
@@ -72,31 +79,32 @@ function readPeople(
   day: Day,
   entries: EntryRow[],
   looseIds: ReadonlySet<string>,
+  notes: NotesOfDay,
 ): PersonOnSheet[] {
   const ticks = ticksByPerson(view, day);
   const gaps = readGaps(view).filter((gap) => gap.fromDay <= day && day <= gap.toDay);
   const lines = hoursLines(entries);
-  const everybody = view
-    .all('person')
-    .map(({ id, name, roles, leftAt }): PersonOnSheet & { isExpected: boolean } => {
-      const own = entries.filter(
-        (entry) => entry.authorId === id || entry.hours.some((figure) => figure.personId === id),
-      );
-      const ticked = ticks.get(id) ?? [];
-      const hasNothing = own.length === 0 && ticked.length === 0;
-      return {
-        personId: id,
-        name,
-        isMe: id === view.me.personId,
-        minutes: totalMinutes(lines.filter((line) => line.personId === id)),
-        entries: own.map((entry) => readEntryLine(view, entry, id, looseIds)),
-        ticks: ticked,
-        heard: readHeard(view, id),
-        nothing: hasNothing ? readNothing(view, id, day) : null,
-        gaps: gaps.filter((gap) => gap.personIds.includes(id)).map((gap) => gap.words),
-        isExpected: roles.includes('crew') && leftAt === null,
-      };
-    });
+  const everybody = view.all('person').map((person): PersonOnSheet & { isExpected: boolean } => {
+    const { id, name, roles, leftAt } = person;
+    const own = entries.filter((entry) => peopleOf(entry).includes(id));
+    const alone = notes.alone(id);
+    const ticked = ticks.get(id) ?? [];
+    const hasNothing = own.length + ticked.length + alone.length === 0;
+    return {
+      personId: id,
+      name,
+      isMe: id === view.me.personId,
+      minutes: totalMinutes(lines.filter((line) => line.personId === id)),
+      usualMinutes: usualMinutes(view, person, day),
+      entries: own.map((entry) => readEntryLine(view, entry, id, looseIds, notes)),
+      alone,
+      ticks: ticked,
+      heard: readHeard(view, id),
+      nothing: hasNothing ? readNothing(view, id, day) : null,
+      gaps: gaps.filter((gap) => gap.personIds.includes(id)).map((gap) => gap.words),
+      isExpected: roles.includes('crew') && leftAt === null,
+    };
+  });
   return everybody
     .filter((person) => !person.nothing || person.isExpected)
     .sort((a, b) => Number(a.nothing !== null) - Number(b.nothing !== null) || a.name.localeCompare(b.name));

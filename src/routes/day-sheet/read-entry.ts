@@ -1,11 +1,13 @@
 import type { EntryRow } from '#shared/entry/entry.ts';
 import type { HoursValue } from '#shared/entry/hours-field.ts';
+import { peopleInHours } from '#shared/entry/kinds.ts';
 import type { HoursKind } from '#shared/entry/hours.ts';
 import { STAGE_FIELD, differingStatements, statementsOf } from '#shared/sync/fields.ts';
 import type { Statement } from '#shared/sync/row.ts';
 import { stampTime } from '#shared/sync/stamp.ts';
 import type { Bung } from '#src/components/bung-mark.tsx';
 import type { View } from '#src/replica/view.ts';
+import type { NoteOnSheet, NotesOfDay, PhotoOnSheet } from './read-notes.ts';
 import { dayWords, momentWords } from '#src/words/day-words.ts';
 import { boatWords, stageWords } from '#src/words/where.ts';
 import { whoWords } from '#src/words/who.ts';
@@ -45,6 +47,15 @@ export interface EntryLine {
   /** 'written later, Tue 8 Sep', 'moved from Brindle by Wes' */
   flags: string[];
   struck: string | null;
+  /** found, and found sound, with it */
+  notes: NoteOnSheet[];
+  photos: PhotoOnSheet[];
+}
+
+/** Under whom an entry stands: whoever has, or ever had, hours in it; where nobody has, its author. */
+export function peopleOf(entry: EntryRow): string[] {
+  const people = peopleInHours(entry);
+  return people.length > 0 ? people : [entry.authorId];
 }
 
 /** What an entry has come through, for its mark. */
@@ -59,8 +70,10 @@ export function readEntryLine(
   entry: EntryRow,
   personId: string,
   looseIds: ReadonlySet<string>,
+  notes: NotesOfDay,
 ): EntryLine {
   return {
+    ...notes.ofEntry(entry.id),
     id: entry.id,
     mark: markOf(view, entry, looseIds),
     boatName: boatWords(view, entry.boatId),

@@ -5,7 +5,7 @@ import type { Bung } from '#src/components/bung-mark.tsx';
 import type { View } from '#src/replica/view.ts';
 import { boatWords } from '#src/words/where.ts';
 import { readKinds } from '#src/routes/day-sheet/read-boats.ts';
-import { markOf } from '#src/routes/day-sheet/read-entry.ts';
+import { markOf, peopleOf } from '#src/routes/day-sheet/read-entry.ts';
 import { readMissing, usualMinutes, type MissingOfPerson } from '#src/routes/day-sheet/read-missing.ts';
 
 /** One person's day. */
@@ -91,14 +91,14 @@ function readPeople(view: View, days: Day[], lines: HoursLine[]): Week['people']
     .map(({ isExpected: _isExpected, ...row }) => row);
 }
 
-/** By person and day, for whoever wrote or is named in an entry that stands: its worst mark, null where all is sent. */
+/** By person and day, for whom an entry stands: its worst mark, null where all is sent. */
 function readMarks(view: View, days: Day[]): Map<string, WeekCell['mark']> {
   const looseIds = new Set(view.all('looseEnd').map((end) => end.rowId));
   const marks = new Map<string, WeekCell['mark']>();
   for (const entry of view.all('entry')) {
     const mark = markOf(view, entry, looseIds);
     if (!days.includes(entry.workDate) || mark === 'struck') continue;
-    for (const personId of new Set([entry.authorId, ...entry.hours.map((figure) => figure.personId)])) {
+    for (const personId of peopleOf(entry)) {
       const key = `${personId} ${entry.workDate}`;
       const own = mark === 'loose' || mark === 'held' ? mark : null;
       marks.set(key, marks.get(key) === 'loose' ? 'loose' : (own ?? marks.get(key) ?? null));
