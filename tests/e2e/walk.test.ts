@@ -14,6 +14,7 @@ const TASK = 'Steam two new ribs, 11 and 12';
 const PRIMER = 'First coat of primer frames 4 to 7';
 const ROSA_DAY = { words: 'Rib 11 went in soft as rope, Wes on the far end', hours: '3 1/2', along: ['Wes'] };
 const WES_DAY = { words: 'Cut and planed the blank for rib 12', hours: '2' };
+const ROSA = { name: 'Rosa', email: 'rosa@hornbeam.example' };
 const ALIVE_WITHIN_MS = 2000;
 const YEAR_MS = 365 * 24 * 60 * 60_000;
 const LATER_MS = 10_000;
@@ -31,7 +32,7 @@ beforeAll(async () => {
   port = await freePort();
   await startServer();
   [rosa, wes, laptop] = await Promise.all([
-    Phone.unpack({ name: 'Rosa', email: 'rosa@hornbeam.example', label: "Rosa's new phone" }, server.url),
+    Phone.unpack({ ...ROSA, label: "Rosa's new phone" }, server.url),
     Phone.unpack({ name: 'Wes', email: 'wes@hornbeam.example', label: "Wes's new phone" }, server.url),
     Laptop.unpack({ name: 'Orrin', email: 'orrin@hornbeam.example', label: 'Shop laptop' }, server.url),
   ]);
@@ -168,11 +169,12 @@ describe('the walk', () => {
     await Promise.all([rosa.opensEntry(PRIMER), wes.opensEntry(PRIMER)]);
     await rosa.device.picture('entry-with-a-loose-end', true);
     await wes.device.picture('entry-with-a-loose-end', true);
-    const isHeard = [rosa, wes].map((phone) =>
-      phone.page.getByText(/2 1\/2 h or 3 1\/2 h|3 1\/2 h or 2 1\/2 h/).waitFor({ state: 'detached' }),
-    );
+    const questions = [rosa, wes].map((phone) => phone.page.getByRole('button', { name: /^It is/ }).first());
+    await Promise.all(questions.map((question) => question.waitFor()));
+    const isSent = laptop.device.line.nextSent();
+    const delays = questions.map((question) => seenAfter(isSent, question.waitFor({ state: 'detached' })));
     await laptop.settles(end, '2 1/2 h of Rosa');
-    await Promise.all(isHeard);
+    for (const delayMs of await Promise.all(delays)) expect(delayMs).toBeLessThan(ALIVE_WITHIN_MS);
     await rosa.device.picture('entry-settled', true);
     await laptop.device.picture('day-sheet-settled', true);
     expect(endsOf(await readRecord(server.url), PRIMER)).toEqual([]);
@@ -205,5 +207,55 @@ describe('the walk', () => {
       { value: expect.objectContaining({ minutes: 180 }) as unknown, stands: false },
     ]);
     expect(newSetAsides(record)).toBe(0);
+  });
+
+  test('5: a newer version comes in when the person says so, and what is held stays', async () => {
+    await wes.page.goto('/alongside');
+    await wes.device.findsNewerApp();
+    await wes.device.losesSignal();
+    await wes.logs({ words: 'Sharpened all the plane irons', hours: '1 1/4' });
+    await wes.device.picture('newer-app');
+    await wes.device.changesToNewerApp();
+    await wes.entry('Sharpened all the plane irons').waitFor();
+    await wes.says('1 held on this phone');
+    await wes.device.findsSignal();
+    await wes.says(/^All sent/);
+    expect(entriesOf(await readRecord(server.url), 'Sharpened all the plane irons')).toHaveLength(1);
+  });
+
+  test('6: a phone that came in place of a lost one names what is missing, and the foreman sees it', async () => {
+    await rosa.device.losesSignal();
+    await rosa.logs({ words: 'This one goes overboard with the phone', hours: '1' });
+    await rosa.device.putAway();
+    rosa = await Phone.unpack({ ...ROSA, label: "Rosa's third phone" }, server.url);
+    await rosa.device.signsIn("Rosa's new phone");
+    await rosa.says(/^Your old device, Rosa's new phone, was last heard .* is not here\.$/);
+    await rosa.entry(ROSA_DAY.words).waitFor();
+    await rosa.device.picture('in-place-of-a-lost-one');
+    await laptop
+      .person('Rosa')
+      .getByText(/Rosa's new phone/)
+      .waitFor();
+    await laptop.device.picture('day-sheet-with-a-gap', true);
+  });
+
+  test('7: what a phone that was shut out still sends does not count until the foreman lets it', async () => {
+    const words = 'Swept the steam box out';
+    await wes.device.losesSignal();
+    await wes.logs({ words, hours: '1/2' });
+    await laptop.shutsOut("Wes's new phone");
+    await laptop.device.picture('devices', true);
+    const isSent = wes.device.line.nextSent();
+    await wes.device.findsSignal();
+    await isSent;
+    await wes.device.picture('shut-out');
+    await wes.page.goto('/held');
+    await wes.says(/shut out/);
+    await wes.device.picture('shut-out-held', true);
+    expect(entriesOf(await readRecord(server.url), words)).toEqual([]);
+    await laptop.admits(words, 'Wes told me so');
+    await laptop.person('Wes').getByText(words).waitFor();
+    await laptop.device.picture('day-sheet-admitted', true);
+    expect(entriesOf(await readRecord(server.url), words)).toHaveLength(1);
   });
 });

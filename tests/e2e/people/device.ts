@@ -78,6 +78,19 @@ export class Device {
     await this.start(path);
   }
 
+  /** Lets the newer version of the app be found as it is when a person comes back to the window. */
+  async findsNewerApp(): Promise<void> {
+    this.line.bringNewerApp();
+    await this.page.evaluate(() => document.dispatchEvent(new Event('visibilitychange')));
+    await this.page.getByText(/^A newer version of Ribband is on this device/).waitFor();
+  }
+
+  async changesToNewerApp(): Promise<void> {
+    const isLoadedAgain = this.page.waitForEvent('load');
+    await this.page.getByRole('button', { name: 'Change to it now' }).click();
+    await isLoadedAgain;
+  }
+
   async losesSignal(): Promise<void> {
     await this.setOffline(true);
   }
@@ -86,7 +99,8 @@ export class Device {
     await this.setOffline(false);
   }
 
-  async signsIn(): Promise<void> {
+  /** Signs in for the first time on this device, which came in place of another if told. */
+  async signsIn(inPlaceOf = 'None'): Promise<void> {
     const { page, owner } = this;
     await page.goto('/');
     await page.getByLabel('E-mail').fill(owner.email);
@@ -95,6 +109,7 @@ export class Device {
     await this.picture('sign-in');
     await page.getByRole('button', { name: 'Sign in' }).click();
     await page.getByRole('heading', { name: /in place of another/ }).waitFor();
+    await page.getByRole('group', { name: 'It is in place of' }).getByText(inPlaceOf).click();
     await this.picture('in-place-of-another');
     await page.getByRole('button', { name: 'Go on' }).click();
     await page.waitForFunction(() => navigator.serviceWorker.controller?.state === 'activated');

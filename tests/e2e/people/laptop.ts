@@ -39,4 +39,21 @@ export class Laptop {
     await end.getByRole('button', { name: `take ${value}` }).click();
     await end.waitFor({ state: 'detached' });
   }
+
+  async shutsOut(label: string): Promise<void> {
+    await this.page.getByRole('link', { name: 'Devices' }).click();
+    await this.page.getByRole('button', { name: `Shut out ${label}` }).click();
+    await this.page.getByRole('button', { name: 'Shut it out' }).click();
+    await this.page.getByRole('dialog').waitFor({ state: 'detached' });
+  }
+
+  /** Lets what was set aside count. */
+  async admits(words: string, why: string): Promise<void> {
+    await this.page.getByRole('link', { name: 'Day sheet' }).click();
+    const setAside = this.page.getByRole('region', { name: 'Set aside' }).getByRole('listitem');
+    await setAside.filter({ hasText: words }).getByRole('button', { name: 'Admit' }).click();
+    await this.page.getByLabel('Why does it count?').fill(why);
+    await this.device.picture('admit');
+    await this.page.getByRole('button', { name: 'Admit it' }).click();
+  }
 }
