@@ -32,6 +32,8 @@ export function composeSyncState(standing: Standing): SyncState {
     clockAheadMs: clockAheadMs(device.state.offsetMs),
     storage,
     ...('words' in attempt ? { words: attempt.words } : {}),
+    // a device that is shut out is told so by what becomes of its ops, and by nothing else
+    ...(device.sent.at(-1)?.reason === 'device-revoked' ? { isShutOut: true } : {}),
     ...(replaced ? { replacedDevice: replaced } : {}),
   };
 }

@@ -19,6 +19,8 @@ export interface SyncState {
   /** whether the browser has promised to keep what is held */
   storage: 'persistent' | 'best-effort' | 'unknown';
   words?: string;
+  /** the foreman has shut this device out: it hears nothing more, and what it sends is set aside */
+  isShutOut?: true;
   /** the device in whose place this one came: what it held and never sent is missing */
   replacedDevice?: { label: string; lastHeardAt: string | null };
 }

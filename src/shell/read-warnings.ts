@@ -2,7 +2,7 @@ import type { SyncState } from '#src/replica/sync-state.ts';
 import { momentWords, spanWords } from '#src/words/day-words.ts';
 
 export interface Warning {
-  kind: 'clock' | 'storage' | 'gap';
+  kind: 'clock' | 'storage' | 'gap' | 'shut-out';
   words: string;
 }
 
@@ -17,7 +17,18 @@ const OLD_MS = 24 * 60 * 60_000;
 
 /** What is wrong with this device, each in one sentence with what to do. */
 export function readWarnings(sync: SyncState, here: Here): Warning[] {
-  return [...clockWarning(sync, here), ...storageWarning(sync, here), ...gapWarning(sync, here)];
+  return [
+    ...shutOutWarning(sync, here),
+    ...clockWarning(sync, here),
+    ...storageWarning(sync, here),
+    ...gapWarning(sync, here),
+  ];
+}
+
+function shutOutWarning({ isShutOut }: SyncState, { device }: Here): Warning[] {
+  if (!isShutOut) return [];
+  const words = `The foreman has shut this ${device} out. It hears nothing new, and what you log on it counts only once the foreman lets it. Ask the foreman.`;
+  return [{ kind: 'shut-out', words }];
 }
 
 function clockWarning({ clockAheadMs }: SyncState, { device }: Here): Warning[] {

@@ -72,8 +72,13 @@ export function opWords(view: View, raw: unknown): OpInWords {
     what: WHAT[op.kind] ?? `Something this version does not know (${op.kind})`,
     words: carriedWords(view, op),
     where: opWhere(view, op.data),
-    entryId: typeof op.data['entryId'] === 'string' ? op.data['entryId'] : null,
+    entryId: entryIn(view, op.data),
   };
+}
+
+// what was set aside has made no entry that could be opened
+function entryIn(view: View, { entryId }: Data): string | null {
+  return typeof entryId === 'string' && view.find('entry', entryId) ? entryId : null;
 }
 
 function carriedWords(view: View, op: Op): string {

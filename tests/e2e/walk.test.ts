@@ -248,9 +248,10 @@ describe('the walk', () => {
     const isSent = wes.device.line.nextSent();
     await wes.device.findsSignal();
     await isSent;
+    await wes.says(/^The foreman has shut this phone out/);
     await wes.device.picture('shut-out');
     await wes.page.goto('/held');
-    await wes.says(/shut out/);
+    await wes.says(/^Set aside .* shut out before it was sent/);
     await wes.device.picture('shut-out-held', true);
     expect(entriesOf(await readRecord(server.url), words)).toEqual([]);
     await laptop.admits(words, 'Wes told me so');

@@ -30,7 +30,7 @@ export function SetAsides({ lines }: { lines: SetAsideOnSheet[] }) {
       <Why
         isOpen={asked !== null}
         onClose={() => setAsked(null)}
-        title={`${isAdmit ? 'Let it count' : 'Dismiss it'}: ${asked?.line.what ?? ''}`}
+        title={`${isAdmit ? 'Let it count' : 'Dismiss it'}: ${asked?.line.words || asked?.line.what}`}
         question={isAdmit ? 'Why does it count?' : 'Why does it not count?'}
         confirm={isAdmit ? 'Admit it' : 'Dismiss it'}
         onConfirm={(why) => {

@@ -118,6 +118,6 @@ export function readSent(view: View, sent: SentItem[]): SentLine[] {
 function becameWords(view: View, { outcome, reason, answeredAt }: SentItem): string {
   const at = momentWords(answeredAt, view.timeZone, view.today);
   if (outcome === 'kept') return `Kept ${at}`;
-  if (outcome === 'loose-end') return `Kept ${at}. Somebody else had said otherwise, so it is a loose end.`;
+  if (outcome === 'loose-end') return `Kept ${at}. Somebody else had said otherwise: it became a loose end.`;
   return `Set aside ${at}. ${reason ? REASON_WORDS[reason] : ''}`.trim();
 }

@@ -14,9 +14,11 @@ export interface ShopRecord {
   setAsides: unknown[];
 }
 
+// one computer, however often it asks
+const deviceId = v7();
+
 /** Pulls the whole record from the server, as the office would on a new computer. */
 export async function readRecord(serverUrl: string): Promise<ShopRecord> {
-  const deviceId = v7();
   const device = { id: deviceId, label: 'Office, spare' };
   const credentials = { email: 'imelda@hornbeam.example', password: DEMO_PASSWORD };
   const session = sessionAnswerSchema.parse(

@@ -84,6 +84,11 @@ describe('what is wrong with a device', () => {
     expect(kinds({ ...held, storage: 'persistent', oldestHeldAt: '2026-05-03T08:00:00Z' })).toEqual([]);
   });
 
+  test('is that the foreman has shut the device out', () => {
+    const [warning] = readWarnings({ ...state, isShutOut: true }, here);
+    expect(warning!.words).toMatch(/^The foreman has shut this phone out/);
+  });
+
   test('is the gap that a replaced device left', () => {
     const replacedDevice = { label: "Rosa's old phone", lastHeardAt: '2026-04-29T06:50:00.000Z' };
     const [warning] = readWarnings({ ...state, replacedDevice }, here);
@@ -94,7 +99,12 @@ describe('what is wrong with a device', () => {
 describe('the places', () => {
   test('are those of all roles that a person has', () => {
     expect(placesFor(['crew']).map(({ to }) => to)).toEqual(['/alongside', '/work', '/plan']);
-    expect(placesFor(['crew', 'owner']).map(({ to }) => to)).toEqual(['/alongside', '/work', '/plan', '/own-boats']);
+    expect(placesFor(['crew', 'owner']).map(({ to }) => to)).toEqual([
+      '/alongside',
+      '/work',
+      '/plan',
+      '/own-boats',
+    ]);
   });
 
   test('begin where the person works', () => {
