@@ -44,7 +44,7 @@ function Ways({ onEarlier, onToday }: { onEarlier: () => void; onToday: (() => v
   return (
     <div className="relative z-20 grid auto-cols-fr grid-flow-col gap-3 bg-primer p-3">
       {onToday && <Key onClick={onToday}>Today</Key>}
-      <Key icon="days" className="!px-2" onClick={onEarlier}>
+      <Key {...(onToday ? {} : { icon: 'days' as const })} className="!px-2" onClick={onEarlier}>
         {onToday ? 'Other day' : 'Earlier days'}
       </Key>
       <KeyLink to="/search" icon="search" className="!px-2">

@@ -1,4 +1,5 @@
 import { Fragment } from 'react';
+import { Fractions } from '#src/components/fractions.tsx';
 import { Hours } from '#src/components/hours.tsx';
 import type { EndLine } from '#src/routes/alongside/read-ends.ts';
 import type { HoursLine } from '#src/routes/alongside/read-entry-line.ts';
@@ -41,7 +42,7 @@ function kindWords({ kind, isProposed }: HoursLine): string {
 
 /** A value as somebody said it: drawn hours, or words. */
 export function Said({ value }: { value: SaidValue }) {
-  if (value.minutes === undefined) return <>{value.words}</>;
+  if (value.minutes === undefined) return <Fractions text={value.words} />;
   return (
     <>
       <Hours minutes={value.minutes} />

@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import { BUNG_WORDS } from '#src/components/bung-mark.tsx';
+import { Fractions } from '#src/components/fractions.tsx';
 import { Plank } from '#src/components/plank.tsx';
 import { EndQuestion } from '#src/routes/alongside/entry-parts.tsx';
 import { PhotoStrip } from '#src/routes/alongside/photo-strip.tsx';
@@ -45,7 +46,7 @@ export function NoteParts({ note, author, isInside = false }: NotePartsProps) {
       </Link>
       <p className="text-slate">
         {note.author !== author && <span className="font-semibold">{capital(note.author)} · </span>}
-        {facts.join(' · ')}
+        <Fractions text={facts.join(' · ')} />
       </p>
       {words.trim() !== '' && <p className="line-clamp-4 whitespace-pre-line">{words}</p>}
       <PhotoStrip photos={note.photos} />

@@ -2,6 +2,7 @@ import type { PhotoRow } from '#shared/photo/photo.ts';
 import type { View } from '#src/replica/view.ts';
 import { PHOTO_SET_WORDS } from '#src/words/photo-words.ts';
 import { placeWords } from '#src/words/place-words.ts';
+import { capital } from '#src/words/who.ts';
 
 /** A photograph as a strip shows it. */
 export interface PhotoLine {
@@ -56,7 +57,15 @@ function push(map: Map<string, PhotoRow[]>, key: string, photo: PhotoRow): void 
 /** A photograph for a strip or the viewer. */
 export function readPhoto(view: View, row: PhotoRow): PhotoLine {
   const { id, sha256, width, height, arrived } = row;
-  return { id, sha256, width, height, arrived, words: photoTitle(row), isHeld: view.isHeld('photo', id) };
+  return {
+    id,
+    sha256,
+    width,
+    height,
+    arrived,
+    words: capital(photoTitle(row)),
+    isHeld: view.isHeld('photo', id),
+  };
 }
 
 /** 'Deck beam 4 port, before closing: the scarf'; 'Photograph' where nothing of it is said. */

@@ -90,7 +90,7 @@ export function FoundForm({ where, entryId, onMove, onLogged }: FoundFormProps) 
         onSubmit={(event) => event.preventDefault()}
       >
         <Choice
-          label="What is it?"
+          label="A finding, or sound?"
           options={WHICH}
           value={isSound ? 'sound' : 'finding'}
           onChange={(which) => change({ isSound: which === 'sound' })}

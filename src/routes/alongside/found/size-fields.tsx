@@ -1,5 +1,6 @@
 import { lazy, Suspense, useState } from 'react';
 import type { Extent } from '#shared/finding/finding.ts';
+import { Fractions } from '#src/components/fractions.tsx';
 import { Key } from '#src/components/key.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
 import { isSized } from '#src/routes/alongside/found/found-draft.ts';
@@ -22,7 +23,7 @@ export function SizeFields({ seen, feared, onChange }: SizeFieldsProps) {
     <Key className="!justify-between" onClick={() => setOpen(which)}>
       <span>{word}</span>
       <span className="text-right font-normal">
-        {isSized(extent) ? extentWords(extent, units) : 'not measured'}
+        {isSized(extent) ? <Fractions text={extentWords(extent, units)} /> : 'not measured'}
       </span>
     </Key>
   );

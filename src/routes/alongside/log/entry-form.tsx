@@ -110,6 +110,8 @@ export function EntryForm({ where, logFor, onMove, onLogged }: EntryFormProps) {
           minutes={draft.minutes}
           onChange={(minutes) => change({ minutes })}
         />
+        <PictureFields pictures={draft.pictures} onAdd={form.addPictures} onRemove={form.removePicture} />
+        {draft.pictures.length > 0 && <PicturePlace draft={draft} change={change} />}
         <DayChoice
           label="Which day was it?"
           today={shown.today}
@@ -127,8 +129,6 @@ export function EntryForm({ where, logFor, onMove, onLogged }: EntryFormProps) {
           firstTaskIds={firstTaskIds}
           newId={form.newId}
         />
-        <PictureFields pictures={draft.pictures} onAdd={form.addPictures} onRemove={form.removePicture} />
-        {draft.pictures.length > 0 && <PicturePlace draft={draft} change={change} />}
         {isWorthKeeping(draft) && (
           <Key kind="quiet" onClick={form.empty}>
             Empty the form

@@ -3,6 +3,7 @@ import { Link, useParams } from 'react-router-dom';
 import { BackBar } from '#src/components/back-bar.tsx';
 import { BUNG_WORDS, BungMark } from '#src/components/bung-mark.tsx';
 import { Empty } from '#src/components/empty.tsx';
+import { Fractions } from '#src/components/fractions.tsx';
 import { Key, KeyLink } from '#src/components/key.tsx';
 import { KeyRack, Page } from '#src/components/page.tsx';
 import { Why } from '#src/components/why.tsx';
@@ -75,7 +76,7 @@ function Body({ page }: { page: NotePage }) {
       </p>
       {page.facts.map((fact) => (
         <p key={fact} className="font-semibold">
-          {fact}
+          <Fractions text={fact} />
         </p>
       ))}
       {page.words.trim() !== '' && (

@@ -1,3 +1,4 @@
+import type { PhotoRow } from '#shared/photo/photo.ts';
 import type { Place } from '#shared/place/place.ts';
 import type { Row } from '#shared/sync/row.ts';
 import { dayAt } from '#shared/sync/day.ts';
@@ -7,7 +8,7 @@ import { PARTS } from '#shared/trade/parts.ts';
 import type { View } from '#src/replica/view.ts';
 import { photoTitle } from '#src/routes/alongside/read-photos.ts';
 import { isFound, wordsOf } from '#src/routes/alongside/search/search-words.ts';
-import { dayWords } from '#src/words/day-words.ts';
+import { counted, dayWords } from '#src/words/day-words.ts';
 import { CERTAINTY_WORDS, findingTitle, KNOWN_WORDS, soundTitle } from '#src/words/finding-words.ts';
 import { openingWords } from '#src/words/name-words.ts';
 import { PHOTO_SET_WORDS } from '#src/words/photo-words.ts';
@@ -139,19 +140,7 @@ function entriesOf(view: View): Entry[] {
         who: who(row.authorId),
       }),
     })),
-    ...view.all('photo').map((row) => ({
-      entity: 'photo' as const,
-      row,
-      at: row.attachedAt,
-      text: () =>
-        ['photo', row.caption ?? '', placeText(row.place), row.set ? PHOTO_SET_WORDS[row.set] : ''].join(' '),
-      hit: () => ({
-        what: 'Photo',
-        title: capital(photoTitle(row)),
-        to: `/photo/${row.id}`,
-        who: who(row.authorId),
-      }),
-    })),
+    ...photoEntries(view),
     ...view.all('task').map((row) => ({
       entity: 'task' as const,
       row,
@@ -178,6 +167,42 @@ function entriesOf(view: View): Entry[] {
       hit: () => ({ what: 'Boat', title: boatTitle(row.name, row.names), to: '/alongside' }),
     })),
   ];
+}
+
+/** Photographs of one pick, with the same words, are one thing to be found. */
+function photoEntries(view: View): Entry[] {
+  const picks = new Map<string, PhotoRow[]>();
+  for (const row of view.all('photo')) {
+    const { boatId, authorId, attachedOn, entryId, findingId, place, set, caption, struck } = row;
+    const key = JSON.stringify([
+      boatId,
+      authorId,
+      attachedOn,
+      entryId,
+      findingId,
+      place,
+      set,
+      caption,
+      struck !== null,
+    ]);
+    picks.set(key, [...(picks.get(key) ?? []), row]);
+  }
+  return [...picks.values()].map((rows) => {
+    const row = rows[0]!;
+    return {
+      entity: 'photo' as const,
+      row,
+      at: row.attachedAt,
+      text: () =>
+        ['photo', row.caption ?? '', placeText(row.place), row.set ? PHOTO_SET_WORDS[row.set] : ''].join(' '),
+      hit: () => ({
+        what: rows.length === 1 ? 'Photo' : counted(rows.length, 'photo'),
+        title: capital(photoTitle(row)),
+        to: `/photo/${row.id}`,
+        who: whoWords(view, row.authorId),
+      }),
+    };
+  });
 }
 
 function boatTitle(name: string, names: { name: string }[] | null | undefined): string {
