@@ -1,4 +1,5 @@
 import { type KeyboardEvent, type ReactNode, type RefObject, useLayoutEffect, useRef } from 'react';
+import type { IconName } from '#src/components/icons.tsx';
 import { IconKey } from '#src/components/key.tsx';
 import { BlobImage } from '#src/components/photo/blob-image.tsx';
 import { pictureWords } from '#src/components/photo/picture-words.ts';
@@ -72,39 +73,42 @@ export function PhotoViewer({ photos, shownId, onShow, onClose, children }: Phot
       <Whole key={photo.sha256} photo={photo} zoom={zoom} roomRef={roomRef} />
       <div className="mx-auto grid w-full max-w-[820px] auto-cols-fr grid-flow-col gap-3 p-3 pb-[calc(12px+env(safe-area-inset-bottom))]">
         {photos.length > 1 && (
-          <IconKey
-            icon="back"
-            word="Previous"
-            kind="onDeep"
-            disabled={index === 0}
-            onClick={() => show(index - 1)}
-          />
+          <ViewKey icon="back" word="Previous" isAtEnd={index === 0} onPress={() => show(index - 1)} />
         )}
-        <IconKey
-          icon="minus"
-          word="Smaller"
-          kind="onDeep"
-          disabled={zoom.times === 1}
-          onClick={zoom.smaller}
-        />
-        <IconKey
-          icon="plus"
-          word="Larger"
-          kind="onDeep"
-          disabled={zoom.times === ZOOM_MAX}
-          onClick={zoom.larger}
-        />
+        <ViewKey icon="minus" word="Smaller" isAtEnd={zoom.times === 1} onPress={zoom.smaller} />
+        <ViewKey icon="plus" word="Larger" isAtEnd={zoom.times === ZOOM_MAX} onPress={zoom.larger} />
         {photos.length > 1 && (
-          <IconKey
+          <ViewKey
             icon="forward"
             word="Next"
-            kind="onDeep"
-            disabled={index === photos.length - 1}
-            onClick={() => show(index + 1)}
+            isAtEnd={index === photos.length - 1}
+            onPress={() => show(index + 1)}
           />
         )}
       </div>
     </dialog>
+  );
+}
+
+interface ViewKeyProps {
+  icon: IconName;
+  word: string;
+  /** It goes no further this way. */
+  isAtEnd: boolean;
+  onPress: () => void;
+}
+
+// never `disabled`: the key that was pressed last would lose the focus, and the keyboard with it
+function ViewKey({ icon, word, isAtEnd, onPress }: ViewKeyProps) {
+  return (
+    <IconKey
+      icon={icon}
+      word={word}
+      kind="onDeep"
+      aria-disabled={isAtEnd}
+      className="aria-disabled:border-dashed"
+      onClick={() => !isAtEnd && onPress()}
+    />
   );
 }
 
