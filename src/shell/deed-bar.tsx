@@ -4,7 +4,7 @@ import type { Deeds } from '#src/shell/use-deeds.ts';
 
 /** What was just done, at the foot of the screen, with the way back for eight seconds. */
 export function DeedBar({ deeds: { last, undo, forget } }: { deeds: Deeds }) {
-  if (!last) return null;
+  if (!last || last.back.length === 0) return null;
   return (
     <KeyRack>
       <div className="-m-3">

@@ -8,7 +8,7 @@ export interface Deed {
   /** 'Rosa: 2 tasks for Wed 9 Dec' */
   words: string;
   holdings: Holding[];
-  /** the ops that undo it */
+  /** the ops that undo it; empty where this person may not */
   back: Holding[];
 }
 

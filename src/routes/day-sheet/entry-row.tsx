@@ -33,7 +33,7 @@ export function EntryRow({ entry, personName, onSplit }: EntryRowProps) {
         <FoundNotes notes={entry.notes} photos={entry.photos} />
         <Remarks entry={entry} />
       </div>
-      <div>
+      <div className="flex items-center justify-between gap-3 py-1 sm:w-[164px] sm:flex-col sm:items-end sm:justify-start sm:gap-0 sm:py-0">
         {figure && (
           <FigureCell entryId={entry.id} figure={figure} personName={personName} isStruck={struck !== null} />
         )}
@@ -98,7 +98,7 @@ function SplitKey({ entry, onSplit }: { entry: EntryLine; onSplit: (entryId: str
     <button
       type="button"
       aria-haspopup="dialog"
-      className="flex min-h-key items-center text-[16px] text-slate underline underline-offset-4 sm:ml-auto sm:min-h-9"
+      className="flex min-h-key items-center text-[16px] text-slate underline underline-offset-4 order-first mr-auto sm:order-none sm:mr-0 sm:min-h-9"
       onClick={() => onSplit(entry.id)}
     >
       Split or move<span className="sr-only"> the entry on {entry.boatName}</span>
@@ -117,9 +117,9 @@ function FigureCell({ entryId, figure, personName, isStruck }: FigureCellProps) 
   const isKindless = isStruck || figure.minutes === 0;
   const hours = <Hours minutes={figure.minutes} />;
   return (
-    <div className="flex items-center justify-between gap-3 py-1 sm:block sm:w-[164px] sm:py-0 sm:text-right">
+    <>
       <p className={isKindless ? 'text-slate' : ''}>{isStruck ? <s>{hours}</s> : hours}</p>
       {!isKindless && <KindSelect entryId={entryId} figure={figure} personName={personName} />}
-    </div>
+    </>
   );
 }

@@ -18,6 +18,7 @@ export interface MissingOfPerson {
   personId: string;
   name: string;
   days: MissingDay[];
+  /** of the days that are over */
   missingMinutes: number;
 }
 
@@ -44,7 +45,7 @@ export function readMissing(view: View, days: readonly Day[]): MissingOfPerson[]
         lines.filter(({ personId }) => personId === person.id),
       ),
     )
-    .filter(({ missingMinutes }) => missingMinutes > 0)
+    .filter(({ days: short }) => short.length > 0)
     .sort((a, b) => b.missingMinutes - a.missingMinutes || a.name.localeCompare(b.name));
 }
 
@@ -62,6 +63,8 @@ function missingOf(view: View, person: PersonRow, days: readonly Day[], own: Hou
     personId: person.id,
     name: person.name,
     days: missing,
-    missingMinutes: missing.reduce((sum, day) => sum + day.missingMinutes, 0),
+    missingMinutes: missing
+      .filter(({ day }) => day < view.today)
+      .reduce((sum, day) => sum + day.missingMinutes, 0),
   };
 }

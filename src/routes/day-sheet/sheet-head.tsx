@@ -1,11 +1,9 @@
 import { useState } from 'react';
 import { Link, useNavigate, useSearchParams } from 'react-router-dom';
-import { daySchema } from '#shared/sync/day.ts';
 import { Hours } from '#src/components/hours.tsx';
 import { Key, KeyLink } from '#src/components/key.tsx';
+import { OtherDay } from '#src/components/other-day.tsx';
 import { keyLook } from '#src/components/key-look.ts';
-import { Sheet } from '#src/components/sheet.tsx';
-import { TextField } from '#src/components/text-field.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
 import { counted, longDayWords } from '#src/words/day-words.ts';
 import { AsLastHeard } from './as-last-heard.tsx';
@@ -51,6 +49,7 @@ const DAY_KEY = '!px-2 whitespace-nowrap sm:!px-4';
 
 function DayKeys({ sheet }: { sheet: DaySheet }) {
   const [isAsking, setAsking] = useState(false);
+  const navigate = useNavigate();
   const [search] = useSearchParams();
   const suffix = search.size > 0 ? `?${search}` : '';
   const { previous, next, previousWords, nextWords } = readNeighbours(sheet.day);
@@ -73,7 +72,13 @@ function DayKeys({ sheet }: { sheet: DaySheet }) {
         <span className="sm:hidden">Other</span>
         <span className="hidden sm:inline">Another day</span>
       </Key>
-      {isAsking && <OtherDay sheet={sheet} onClose={() => setAsking(false)} />}
+      {isAsking && (
+        <OtherDay
+          day={sheet.day}
+          onShow={(day) => void navigate(`/day/${day}`)}
+          onClose={() => setAsking(false)}
+        />
+      )}
     </div>
   );
 }
@@ -81,38 +86,6 @@ function DayKeys({ sheet }: { sheet: DaySheet }) {
 /** 'Mon 4' of 'Mon 4 May'. */
 function shortDay(words: string): string {
   return words.split(' ').slice(0, 2).join(' ');
-}
-
-function OtherDay({ sheet, onClose }: { sheet: DaySheet; onClose: () => void }) {
-  const [day, setDay] = useState(sheet.day);
-  const navigate = useNavigate();
-  const isDay = daySchema.safeParse(day).success;
-  const show = () => {
-    if (!isDay) return;
-    onClose();
-    void navigate(`/day/${day}`);
-  };
-  return (
-    <Sheet
-      isOpen
-      onClose={onClose}
-      title="Another day"
-      foot={
-        <Key kind="main" onClick={show} disabled={!isDay}>
-          Show this day
-        </Key>
-      }
-    >
-      <form
-        onSubmit={(event) => {
-          event.preventDefault();
-          show();
-        }}
-      >
-        <TextField label="Which day" type="date" value={day} onChange={setDay} />
-      </form>
-    </Sheet>
-  );
 }
 
 function CutChoice({ isByBoat }: { isByBoat: boolean }) {

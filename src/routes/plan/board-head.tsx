@@ -1,7 +1,9 @@
+import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { addDays, type Day } from '#shared/sync/day.ts';
 import { isWorkDay, nextWorkDay } from '#shared/task/plan.ts';
-import { KeyLink } from '#src/components/key.tsx';
+import { Key, KeyLink } from '#src/components/key.tsx';
+import { OtherDay } from '#src/components/other-day.tsx';
 import { counted, dayWords, longDayWords } from '#src/words/day-words.ts';
 import type { Board } from './read-board.ts';
 
@@ -30,10 +32,11 @@ function nearWords(day: Day, today: Day): string {
 
 function DayKeys({ day, today }: { day: Day; today: Day }) {
   const navigate = useNavigate();
+  const [isAsking, setAsking] = useState(false);
   const [before, after] = [workDayBefore(day), nextWorkDay(day)];
   const short = (one: Day) => dayWords(one, day).split(' ').slice(0, 2).join(' ');
   return (
-    <div data-keys className="flex w-full flex-wrap items-end gap-3 sm:w-auto">
+    <div data-keys className="flex w-full flex-wrap gap-3 sm:w-auto">
       <KeyLink to={`/plan/${before}`} className="flex-1 whitespace-nowrap">
         <span className="sr-only">The working day before, </span>
         {before === today ? 'Today' : short(before)}
@@ -42,15 +45,16 @@ function DayKeys({ day, today }: { day: Day; today: Day }) {
         <span className="sr-only">The working day after, </span>
         {after === today ? 'Today' : short(after)}
       </KeyLink>
-      <input
-        type="date"
-        aria-label="Another day"
-        className="h-key flex-1 rounded-key border-2 border-bilge bg-plank px-3 text-[18px] text-bilge"
-        value={day}
-        onChange={(event) => {
-          if (event.target.value) void navigate(`/plan/${event.target.value}`);
-        }}
-      />
+      <Key className="flex-1 whitespace-nowrap" onClick={() => setAsking(true)}>
+        Another day
+      </Key>
+      {isAsking && (
+        <OtherDay
+          day={day}
+          onShow={(other) => void navigate(`/plan/${other}`)}
+          onClose={() => setAsking(false)}
+        />
+      )}
     </div>
   );
 }

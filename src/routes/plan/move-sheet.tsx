@@ -53,7 +53,9 @@ export function MoveSheet({ board, person, line, deeds, onClose }: MoveSheetProp
         <legend className="pb-2 font-semibold">To another day</legend>
         {line.row.plannedFor !== day && <Key onClick={toDay(day)}>{dayWords(day, today)}</Key>}
         {next !== day && <Key onClick={toDay(next)}>{dayWords(next, today)}</Key>}
-        <TextField label="Other" type="date" value={other} onChange={setOther} />
+      </fieldset>
+      <div className="grid grid-cols-2 gap-3">
+        <TextField label="Some other day" type="date" value={other} onChange={setOther} />
         <Key
           disabled={!daySchema.safeParse(other).success}
           onClick={toDay(other || day)}
@@ -61,9 +63,11 @@ export function MoveSheet({ board, person, line, deeds, onClose }: MoveSheetProp
         >
           To that day
         </Key>
-      </fieldset>
+      </div>
       <div className="grid grid-cols-2 gap-3">
-        <Key onClick={press('taken off', takeOff(line.row, person.personId))}>Take it off {person.name}</Key>
+        <Key onClick={press('taken off', takeOff(line.row, person.personId))}>
+          Off {person.name}&rsquo;s day
+        </Key>
         <KeyLink to={`/work/${line.row.boatId}`}>Her order of work</KeyLink>
       </div>
     </Sheet>

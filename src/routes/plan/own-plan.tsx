@@ -70,18 +70,13 @@ function Task({ line, note }: { line: PlannedLine; note: string | null }) {
   return (
     <Link to={`/work/${row.boatId}`} className="group block leading-snug">
       <span className="font-bold text-mahogany">{boatName}</span>
-      <span className="text-slate">
-        {' · '}
-        {stageName}
-        {share !== null && (
-          <>
-            {' · '}
-            <Hours minutes={share} />
-          </>
-        )}
-      </span>
+      <span className="text-slate"> · {stageName}</span>
       <span className={`block group-hover:underline ${row.done ? '' : 'font-semibold'}`}>{row.title}</span>
-      {notes.length > 0 && <span className="block text-slate">{notes.join(' · ')}</span>}
+      <span className="block text-slate">
+        {share !== null && <Hours minutes={share} />}
+        {share !== null && notes.length > 0 && ' · '}
+        {notes.join(' · ')}
+      </span>
     </Link>
   );
 }

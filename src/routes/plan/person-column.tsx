@@ -26,7 +26,7 @@ export function PersonColumn({ board, person, deeds }: PersonColumnProps) {
   const close = () => setOpen(null);
   const openLine = board.mayPlan ? ({ row }: PlannedLine) => setOpen({ taskId: row.id }) : null;
   return (
-    <li className="flex min-w-0 flex-col bg-plank px-4 pt-3 pb-4">
+    <li className="flex min-w-0 flex-col bg-plank px-4 pt-3 pb-4 outline-3 outline-line">
       <ColumnHead person={person} />
       <ul className="my-2">
         {person.tasks.map((line) => (
@@ -64,7 +64,7 @@ function ColumnHead({ person: { name, minutes, withoutEstimate, tasks } }: { per
           style={{ width: `${Math.min(minutes / SHOP_DAY_MINUTES, 1) * 100}%` }}
         />
       </div>
-      <p className="min-h-[1.4em] text-[16px] text-slate">
+      <p className="text-[16px] text-slate md:min-h-[1.4em]">
         {over > 0 && (
           <strong className="text-bilge">
             <Hours minutes={over} /> too many
@@ -106,7 +106,7 @@ function PlannedRow({ line, onOpen }: PlannedRowProps) {
 }
 
 function PlannedWords({ line }: { line: PlannedLine }) {
-  const { row, boatName, share, along, state, waitsFor, isHeld } = line;
+  const { row, boatName, share, longerMinutes, along, state, waitsFor, isHeld } = line;
   const notes = [state, along, waitsFor && `comes ${waitsFor}`].filter(Boolean);
   return (
     <>
@@ -117,10 +117,15 @@ function PlannedWords({ line }: { line: PlannedLine }) {
         </span>
         <span className="block font-semibold text-mahogany">{boatName}</span>
         {notes.length > 0 && <span className="block text-[16px] text-slate">{notes.join(' · ')}</span>}
+        {longerMinutes !== null && (
+          <span className="block text-[16px] text-slate">
+            estimated <Hours minutes={longerMinutes} /> in all
+          </span>
+        )}
       </span>
       <span className="flex items-start gap-1 whitespace-nowrap text-slate">
         {isHeld && <BungMark mark="held" size={22} />}
-        {share === null ? <span title="without an estimate">?</span> : <Hours minutes={share} />}
+        {share === null ? 'no est.' : <Hours minutes={share} />}
       </span>
     </>
   );

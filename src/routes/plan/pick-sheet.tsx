@@ -1,8 +1,8 @@
 import { useState } from 'react';
-import { Choice } from '#src/components/choice.tsx';
 import { CheckKey } from '#src/components/check-key.tsx';
 import { Hours } from '#src/components/hours.tsx';
 import { Key } from '#src/components/key.tsx';
+import { SelectField } from '#src/components/select-field.tsx';
 import { Sheet } from '#src/components/sheet.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
 import type { Deeds } from '#src/shell/use-deeds.ts';
@@ -54,13 +54,13 @@ export function PickSheet({ board: { day, today }, person, deeds, onClose }: Pic
         <p className="text-slate">No boat has an open task. Add some in the order of work.</p>
       )}
       {boats.length > 1 && (
-        <Choice
+        <SelectField
           label="Boat"
-          value={boatId}
+          value={boatId!}
           onChange={setChosen}
           options={boats.map(({ id, name: label, openCount }) => ({
             value: id,
-            label: `${label} · ${openCount}`,
+            label: `${label}, ${openCount} open`,
           }))}
         />
       )}

@@ -37,7 +37,7 @@ function PlanBoard({ day }: { day: Day }) {
         {board.people.length === 0 ? (
           <p className="px-4 text-slate md:px-0">Nobody of the crew is here yet.</p>
         ) : (
-          <ul className="grid grid-cols-[minmax(0,1fr)] gap-seam bg-line py-seam md:grid-cols-[repeat(auto-fit,minmax(232px,1fr))] md:px-seam">
+          <ul className="grid grid-cols-[minmax(0,1fr)] gap-seam py-seam md:grid-cols-[repeat(auto-fit,minmax(232px,1fr))] md:px-seam">
             {board.people.map((person) => (
               <PersonColumn key={person.personId} board={board} person={person} deeds={deeds} />
             ))}

@@ -1,4 +1,4 @@
-import type { Day } from '#shared/sync/day.ts';
+import { addDays, type Day } from '#shared/sync/day.ts';
 import { nextWorkDay, readLeftOver, readPlanFor } from '#shared/task/plan.ts';
 import type { View } from '#src/replica/view.ts';
 import { readPlanned, type PlannedLine } from './read-planned.ts';
@@ -9,7 +9,7 @@ export interface PersonOnBoard {
   minutes: number;
   withoutEstimate: number;
   tasks: PlannedLine[];
-  /** planned for a day before this one, and not done */
+  /** planned for today or before, for a day before this one, and not done */
   leftOver: PlannedLine[];
 }
 
@@ -41,13 +41,17 @@ export function readBoard(view: View, day: Day): Board {
 
 function onBoard(view: View, { id, name }: { id: string; name: string }, day: Day): PersonOnBoard {
   const { tasks, minutes, withoutEstimate } = readPlanFor(view, id, day);
+  // what is planned for a day that has not come is not left over from it
+  const isToCome = day > view.today;
   return {
     personId: id,
     name,
     minutes,
     withoutEstimate,
     tasks: tasks.map((task) => readPlanned(view, task, id)),
-    leftOver: readLeftOver(view, id, day).map((task) => readPlanned(view, task, id)),
+    leftOver: readLeftOver(view, id, isToCome ? addDays(view.today, 1) : day).map((task) =>
+      readPlanned(view, task, id),
+    ),
   };
 }
 

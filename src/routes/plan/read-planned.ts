@@ -15,6 +15,8 @@ export interface PlannedLine {
   stageName: string;
   /** minutes of this person's day; null without an estimate */
   share: number | null;
+  /** the whole estimate, where it is longer than what the people's day can take; else null */
+  longerMinutes: number | null;
   /** 'with Wes'; null where it is theirs alone */
   along: string | null;
   /** 'done by Rosa', 'started by Wes'; null where neither */
@@ -27,18 +29,25 @@ export interface PlannedLine {
 }
 
 export function readPlanned(view: View, row: TaskRow, personId: string | null): PlannedLine {
+  const share = dayShare(row);
   const others = (row.assigneeIds ?? []).filter((id) => id !== personId);
   return {
     row,
     boatName: boatWords(view, row.boatId),
     stageName: stageWords(view, row.stageId),
-    share: dayShare(row),
+    share,
+    longerMinutes: isLonger(row, share) ? row.estimateMinutes! : null,
     along: others.length > 0 ? `with ${listWords(others.map((id) => whoWords(view, id)))}` : null,
     state: stateWords(view, row),
     waitsFor: row.done ? null : waitsFor(view, row.stageId),
     plannedFor: row.plannedFor ? nearDayOf(view, row.plannedFor) : null,
     isHeld: view.isHeld('task', row.id),
   };
+}
+
+function isLonger({ estimateMinutes, assigneeIds }: TaskRow, share: number | null): boolean {
+  const people = Math.max(assigneeIds?.length ?? 0, 1);
+  return share !== null && Math.round(estimateMinutes! / people) > share;
 }
 
 function nearDayOf(view: View, day: Day): string {

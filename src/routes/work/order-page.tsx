@@ -151,7 +151,9 @@ function OpenSheet({ order, open, deeds, onClose }: OpenSheetProps) {
   if (!stage) return null;
   if (open.sheet === 'stage') return <StageSheet order={order} stage={stage} onClose={onClose} />;
   if (open.sheet === 'new-task')
-    return <TaskForm order={order} stageId={open.stageId} task={null} onClose={onClose} />;
+    return (
+      <TaskForm order={order} stageId={open.stageId} task={null} deeds={deeds.deeds} onClose={onClose} />
+    );
   if (open.sheet === 'finish') {
     const finish = () => {
       deeds.finish(stage);

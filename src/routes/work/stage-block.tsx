@@ -34,7 +34,8 @@ export function StageBlock({ stage, keys, onOpen }: StageBlockProps) {
   const tasks = (
     <>
       <Tasks tasks={open} onOpen={onOpen} />
-      {done.length > 0 && (
+      {state === 'finished' && <Tasks tasks={done} onOpen={onOpen} />}
+      {state !== 'finished' && done.length > 0 && (
         <Fold title={`${done.length} done`}>
           <Tasks tasks={done} onOpen={onOpen} />
         </Fold>
@@ -45,14 +46,19 @@ export function StageBlock({ stage, keys, onOpen }: StageBlockProps) {
   return (
     <li className="bg-plank px-4 py-3 md:px-6">
       <StageHead stage={stage} />
-      {isFolded ? <Fold title={taskCount(stage)}>{tasks}</Fold> : tasks}
+      {isFolded && hasInside(stage, keys) && <Fold title={taskCount(stage)}>{tasks}</Fold>}
+      {!isFolded && tasks}
     </li>
   );
 }
 
+function hasInside({ open, done }: StageOfOrder, keys: StageKeys): boolean {
+  return open.length + done.length > 0 || Object.values(keys).some((key) => key !== null);
+}
+
 function taskCount({ open, done }: StageOfOrder): string {
   const count = open.length + done.length;
-  if (count === 0) return 'No tasks';
+  if (count === 0) return 'No tasks in it';
   return `${done.length} of ${count} ${count === 1 ? 'task' : 'tasks'} done`;
 }
 
@@ -115,8 +121,8 @@ function Keys({ name, keys: { onAdd, onChange, onFinish, onReopen } }: { name: s
       </Key>
     ),
     onChange && (
-      <Key key="change" kind="quiet" onClick={onChange}>
-        Change{of}
+      <Key key="change" onClick={onChange}>
+        Change stage{of}
       </Key>
     ),
   ].filter(Boolean);

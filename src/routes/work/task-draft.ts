@@ -68,6 +68,12 @@ export function changesOf(task: TaskRow, draft: TaskDraft): Record<string, unkno
   return { ...title, ...Object.fromEntries(changed), ...move };
 }
 
+/** What puts back what a change of a task sets. */
+export function backTo(task: TaskRow, set: Record<string, unknown>): Record<string, unknown> {
+  const standing = task as unknown as Record<string, unknown>;
+  return Object.fromEntries(Object.keys(set).map((field) => [field, standing[field] ?? null]));
+}
+
 function valuesOf(draft: TaskDraft, known: Place | null | undefined) {
   return {
     estimateMinutes: readEstimate(draft.estimate),

@@ -10,16 +10,19 @@ import { Sheet } from '#src/components/sheet.tsx';
 import { TextField } from '#src/components/text-field.tsx';
 import { Why } from '#src/components/why.tsx';
 import { useHold, useRead, useReplica } from '#src/replica/hooks.tsx';
+import type { Deed, Deeds } from '#src/shell/use-deeds.ts';
 import { dayWords } from '#src/words/day-words.ts';
+import { openingWords } from '#src/words/name-words.ts';
 import { SIDE_WORDS } from '#src/words/place-words.ts';
 import type { OrderOfWork } from './read-order.ts';
-import { changesOf, draftOf, fieldsOf, problemsOf, type Side, type TaskDraft } from './task-draft.ts';
+import { backTo, changesOf, draftOf, fieldsOf, problemsOf, type Side, type TaskDraft } from './task-draft.ts';
 
 interface TaskFormProps {
   order: OrderOfWork;
   stageId: string;
   /** null: a new task */
   task: TaskRow | null;
+  deeds: Deeds;
   onClose: () => void;
 }
 
@@ -30,25 +33,21 @@ interface FieldsProps {
 }
 
 /** Adds a task, or changes all that is known of one. */
-export function TaskForm({ order, stageId, task, onClose }: TaskFormProps) {
+export function TaskForm({ order, stageId, task, deeds, onClose }: TaskFormProps) {
   const replica = useReplica();
-  const { mutateAsync: hold, error, isPending } = useHold();
+  const { mutateAsync: hold, error } = useHold();
+  const failure = deeds.failure ?? error?.message;
   const [draft, setDraft] = useState(() => draftOf(task, stageId));
   const [isAsked, setAsked] = useState(false);
   const [isStriking, setStriking] = useState(false);
   const change = (part: Partial<TaskDraft>) => setDraft({ ...draft, ...part });
 
-  async function save() {
+  function save() {
     setAsked(true);
     if (Object.keys(problemsOf(draft)).length > 0) return;
-    if (!task) {
-      const data = { taskId: replica.newId(), boatId: order.boat.id, ...fieldsOf(draft) };
-      await hold({ kind: 'task.add', data });
-    } else {
-      const set = changesOf(task, draft);
-      if (Object.keys(set).length > 0) await hold({ kind: 'task.amend', data: { taskId: task.id, set } });
-    }
-    onClose();
+    const deed = task ? amending(task, draft) : adding(order, draft, replica.newId());
+    if (deed) deeds.doIt(deed, onClose);
+    else onClose();
   }
 
   const fields: FieldsProps = { draft, change, problems: isAsked ? problemsOf(draft) : {} };
@@ -58,12 +57,12 @@ export function TaskForm({ order, stageId, task, onClose }: TaskFormProps) {
       onClose={onClose}
       title={task ? 'Task' : 'A new task'}
       foot={
-        <Key kind="main" disabled={isPending} onClick={() => void save()}>
+        <Key kind="main" disabled={deeds.isPending} onClick={save}>
           {task ? 'Change' : 'Add it'}
         </Key>
       }
     >
-      {error && <Notice tone="error">{error.message}</Notice>}
+      {failure && <Notice tone="error">{failure}</Notice>}
       <TextField
         label="What is to be done"
         value={draft.title}
@@ -96,6 +95,29 @@ export function TaskForm({ order, stageId, task, onClose }: TaskFormProps) {
       />
     </Sheet>
   );
+}
+
+/** Null where nothing was changed. */
+function amending(task: TaskRow, draft: TaskDraft): Deed | null {
+  const set = changesOf(task, draft);
+  if (Object.keys(set).length === 0) return null;
+  const amend = (fields: object) => [{ kind: 'task.amend', data: { taskId: task.id, set: fields } }];
+  return {
+    words: `Changed: ${openingWords(task.title, 44)}`,
+    holdings: amend(set),
+    back: amend(backTo(task, set)),
+  };
+}
+
+function adding({ boat, mayChange }: OrderOfWork, draft: TaskDraft, taskId: string): Deed {
+  const data = { taskId, boatId: boat.id, ...fieldsOf(draft) };
+  const strike = { kind: 'task.strike', data: { taskId, why: 'undone at once' } };
+  return {
+    words: `Added: ${openingWords(draft.title, 44)}`,
+    holdings: [{ kind: 'task.add', data }],
+    // the crew strike no tasks
+    back: mayChange ? [strike] : [],
+  };
 }
 
 function PlaceFields({ draft, change, problems }: FieldsProps) {

@@ -20,7 +20,10 @@ interface TaskSheetProps {
 /** A task opened: its cautions first, what is known of it, and the keys; the foreman changes it from here. */
 export function TaskSheet({ order, stage, task, deeds, onClose }: TaskSheetProps) {
   const [isChanging, setChanging] = useState(false);
-  if (isChanging) return <TaskForm order={order} stageId={stage.row.id} task={task.row} onClose={onClose} />;
+  if (isChanging)
+    return (
+      <TaskForm order={order} stageId={stage.row.id} task={task.row} deeds={deeds.deeds} onClose={onClose} />
+    );
   const { row, words, assigned, planned, where } = task;
   const facts = [words, assigned, planned, where].filter(Boolean);
   return (

@@ -75,6 +75,24 @@ test('what was not done is left over on every later board until somebody ticks i
   expect(leftOver()).toEqual([]);
 });
 
+test('what is planned for a day that has not come is not left over from it', async () => {
+  const { rosa, add, board } = await shop();
+  await add('Reef the seams', { assigneeIds: [rosa.personId], plannedFor: TUESDAY });
+  expect(board(FRIDAY).people[0]).toMatchObject({ tasks: [], leftOver: [] });
+});
+
+test('a task that is longer than a day fills it, and the whole estimate is told', async () => {
+  const { rosa, add, board } = await shop();
+  const assigneeIds = [rosa.personId];
+  await add('Refasten the bottom', { assigneeIds, plannedFor: TUESDAY, estimateMinutes: 1200 });
+  await add('Sweep', { assigneeIds, plannedFor: TUESDAY, estimateMinutes: 30 });
+  const lines = board().people[0]!.tasks.map(({ share, longerMinutes }) => [share, longerMinutes]);
+  expect(lines).toEqual([
+    [480, 1200],
+    [30, null],
+  ]);
+});
+
 test('a task of two counts once on the board, and half of its estimate in each day', async () => {
   const { rosa, wes, add, board } = await shop();
   const assigneeIds = [rosa.personId, wes.personId];

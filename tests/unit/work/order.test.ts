@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { readOrder } from '#src/routes/work/read-order.ts';
 import { readWork } from '#src/routes/work/read-work.ts';
-import { changesOf, draftOf, fieldsOf, problemsOf } from '#src/routes/work/task-draft.ts';
+import { backTo, changesOf, draftOf, fieldsOf, problemsOf } from '#src/routes/work/task-draft.ts';
 import type { TaskRow } from '#shared/task/task.ts';
 import { TestRecord, type Hand } from '#tests/worlds/record.ts';
 
@@ -157,6 +157,16 @@ describe('the form of a task', () => {
       place: { partId: 'stringer', side: 'port', number: 6, toNumber: 9 },
     });
     expect(changesOf(row, { ...draft, stageId: 't' })).toEqual({ boatId: 'b', stageId: 't' });
+  });
+
+  test('is taken back to what stood before', () => {
+    const set = changesOf(row, {
+      ...draftOf(row, 's'),
+      title: 'Scarf it',
+      plannedFor: MONDAY,
+      side: 'centre',
+    });
+    expect(backTo(row, set)).toEqual({ title: 'Scarf', plannedFor: null, place: row.place });
   });
 
   test('gives a new task what was given and nothing else', () => {

@@ -58,7 +58,7 @@ function Split({ entry, deeds, onClose }: Omit<SplitSheetProps, 'entryId'> & { e
         )
       }
     >
-      <KeyLink to={`/entry/${row.id}`}>Only move it, or change its day: its own page</KeyLink>
+      <KeyLink to={`/entry/${row.id}`}>Only move it: on its own page</KeyLink>
       {entry.isLoose ? (
         <Notice tone="warn">
           Something in it was said in two ways. Settle that loose end first, then split it.

@@ -1,7 +1,7 @@
 import { Link } from 'react-router-dom';
 import { SHOP_DAY_MINUTES } from '#shared/task/plan.ts';
 import { Hours } from '#src/components/hours.tsx';
-import { dayWords } from '#src/words/day-words.ts';
+import { weekdayWords } from '#src/words/day-words.ts';
 import type { MissingDay } from '#src/routes/day-sheet/read-missing.ts';
 import type { Week } from './read-week.ts';
 
@@ -10,7 +10,10 @@ export function MissingHours({ week: { missing, today } }: { week: Week }) {
   return (
     <section aria-label="Hours missing" className="pt-4">
       <h2 className="px-4 pb-3 text-[24px] leading-tight font-bold md:px-0">
-        Hours missing <span className="font-normal text-slate">{missing.length}</span>
+        Hours missing{' '}
+        <span className="font-normal text-slate">
+          {missing.filter(({ missingMinutes }) => missingMinutes > 0).length}
+        </span>
       </h2>
       {missing.length === 0 && (
         <p className="px-4 text-slate md:px-0">Nobody&rsquo;s. Every working day has its 8 h.</p>
@@ -29,9 +32,11 @@ export function MissingHours({ week: { missing, today } }: { week: Week }) {
                 </li>
               ))}
             </ul>
-            <p className="font-semibold">
-              <Hours minutes={missingMinutes} /> missing
-            </p>
+            {missingMinutes > 0 && (
+              <p className="font-semibold">
+                <Hours minutes={missingMinutes} /> missing
+              </p>
+            )}
           </li>
         ))}
       </ul>
@@ -46,10 +51,10 @@ function MissingLink({ missing: { day, minutes, isSure }, today }: { missing: Mi
       className="inline-flex min-h-key items-center gap-1 underline underline-offset-4 md:min-h-10"
     >
       <span className="whitespace-nowrap">
-        {dayWords(day, today)}: <Hours minutes={minutes} unit="" /> of{' '}
+        {day === today ? 'Today' : weekdayWords(day)}: <Hours minutes={minutes} unit="" /> of{' '}
         <Hours minutes={SHOP_DAY_MINUTES} unit="" />
         {day === today && ' so far'}
-        {!isSure && ', not heard since'}
+        {!isSure && ', may not be all'}
       </span>
     </Link>
   );

@@ -8,7 +8,7 @@ import type { Week, WeekCell } from './read-week.ts';
 
 // on a phone the sums stand under the names, where seven days leave no room for an eighth column
 const NAME_CELL =
-  'w-[86px] bg-plank px-1 py-2 pl-4 text-left align-middle leading-tight md:w-[190px] md:pl-4';
+  'w-[92px] bg-plank py-2 pr-1 pl-3 text-left align-middle leading-tight hyphens-auto md:w-[190px] md:pl-4';
 const SUM_CELL = 'hidden bg-plank px-3 text-right text-[22px] font-bold md:table-cell';
 
 /** People by days: a tap on a cell opens that day. */
@@ -112,7 +112,7 @@ function WeekTable({ week, caption, children }: { week: Week; caption: string; c
 
 function NameAndSum({ name, minutes }: { name: string; minutes: number }) {
   return (
-    <span className="block min-w-0 font-bold break-words">
+    <span className="block min-w-0 font-bold [overflow-wrap:anywhere]">
       {name}
       <span className="block font-normal text-slate md:hidden">
         <span className="sr-only">, all week: </span>
