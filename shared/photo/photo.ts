@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { placeSchema } from '../place/place.ts';
 import { idSchema, newIdSchema } from '../sync/ids.ts';
+import { TEXT_UNITS_MAX } from '../sync/op.ts';
 import type { Row } from '../sync/row.ts';
 
 /** The name of a picture's or recording's bytes: the SHA-256 of what the phone sent. */
@@ -9,7 +10,7 @@ export const sha256Schema = z.string().regex(/^[0-9a-f]{64}$/, 'a SHA-256 in low
 export const photoSetSchema = z.enum(['arrival', 'before', 'after', 'before-closing', 'mark']);
 export type PhotoSet = z.infer<typeof photoSetSchema>;
 
-const captionSchema = z.string().max(2000);
+const captionSchema = z.string().max(TEXT_UNITS_MAX);
 const SIDE_PX_MAX = 100_000;
 
 export const photoAttachSchema = z.strictObject({

@@ -1,11 +1,11 @@
 import { z } from 'zod';
 import { idSchema } from '../sync/ids.ts';
-import type { Reason } from '../sync/op.ts';
+import { TEXT_UNITS_MAX, type Reason } from '../sync/op.ts';
 import type { Ref, Row } from '../sync/row.ts';
 
 export const decideSchema = z.strictObject({
   setAsideId: idSchema,
-  why: z.string().trim().max(2000).optional(),
+  why: z.string().trim().max(TEXT_UNITS_MAX).optional(),
 });
 
 export interface Decision {

@@ -1,7 +1,7 @@
 import type { z } from 'zod';
 import { itemsOf } from './items.ts';
 import type { AnyOpKind, Author, RowLookup } from './op-kind.ts';
-import type { Op, Reason } from './op.ts';
+import { hasUnknownField, type Op, type Reason } from './op.ts';
 import { opKinds } from './registry.ts';
 import type { Facts, Ref, Row } from './row.ts';
 
@@ -13,16 +13,16 @@ export interface Understood {
   names: Ref[];
 }
 
-function hasUnknownField(issues: z.core.$ZodIssue[]): boolean {
+function hasUnknownKey(issues: z.core.$ZodIssue[]): boolean {
   return issues.some((issue) => issue.code === 'unrecognized_keys');
 }
 
 /** Reads an op's data by its kind; the reason where that cannot be done. */
 export function understand(op: Op): Understood | Reason {
   const kind = opKinds.get(op.kind);
-  if (!kind || op.v !== kind.v) return 'not-understood';
+  if (!kind || op.v !== kind.v || hasUnknownField(op)) return 'not-understood';
   const parsed = kind.data.safeParse(op.data);
-  if (!parsed.success) return hasUnknownField(parsed.error.issues) ? 'not-understood' : 'malformed';
+  if (!parsed.success) return hasUnknownKey(parsed.error.issues) ? 'not-understood' : 'malformed';
   const data: unknown = parsed.data;
   const changes: Ref = { entity: kind.entity, id: kind.rowId(data) };
   return { kind, op: { ...op, data }, changes, names: kind.names?.(data) ?? [] };

@@ -8,7 +8,7 @@ export const TEXT_UNITS_MAX = 20_000;
 /** The values that a change replaces: for each field the ops that set them. */
 export const overSchema = z.record(z.string().max(100), z.array(idSchema).max(1000));
 
-export const opSchema = z.strictObject({
+const opShape = {
   id: newIdSchema,
   v: z.int().min(1).default(1),
   kind: z.string().max(100),
@@ -16,10 +16,18 @@ export const opSchema = z.strictObject({
   personId: idSchema,
   over: overSchema.default({}),
   data: z.record(z.string(), z.unknown()),
-});
+};
+
+/** Reads the fields of an op that are known here and leaves others in it: see `hasUnknownField`. */
+export const opSchema = z.looseObject(opShape);
 
 /** What a person did, as sent: small, named, immutable. */
-export type Op<Data = Record<string, unknown>> = Omit<z.infer<typeof opSchema>, 'data'> & { data: Data };
+export type Op<Data = Record<string, unknown>> = Omit<z.infer<z.ZodObject<typeof opShape>>, 'data'> & { data: Data };
+
+/** Whether an op says something beside its data that only a newer version understands. */
+export function hasUnknownField(op: Op<unknown>): boolean {
+  return Object.keys(op).some((field) => !Object.hasOwn(opShape, field));
+}
 
 export const reasonSchema = z.enum([
   'malformed',

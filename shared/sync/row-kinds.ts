@@ -2,10 +2,11 @@ import { z } from 'zod';
 import { stateFields } from './fields.ts';
 import { idSchema } from './ids.ts';
 import type { AnyOpKind, Author, OpKind, RowLookup } from './op-kind.ts';
+import { TEXT_UNITS_MAX } from './op.ts';
 import type { RecordEntity, Ref, Row } from './row.ts';
 import { restoreRow, strikeRow } from './strike.ts';
 
-const whySchema = z.string().trim().min(1).max(2000);
+const whySchema = z.string().trim().min(1).max(TEXT_UNITS_MAX);
 
 interface RowKindsOf<R extends Row, Set extends object> {
   entity: Exclude<RecordEntity, 'setAside'>;

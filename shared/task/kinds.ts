@@ -17,8 +17,17 @@ import {
   type TaskSet,
 } from './task.ts';
 
-function namedRefs(set: { boatId?: string; stageId?: string; assigneeIds?: string[] | null }): Ref[] {
-  return [...movedRefs(set), ...(set.assigneeIds ?? []).map((id) => ({ entity: 'person' as const, id }))];
+interface Naming {
+  boatId?: string;
+  stageId?: string;
+  assigneeIds?: string[] | null;
+  findingId?: string;
+}
+
+function namedRefs(data: Naming): Ref[] {
+  const people = (data.assigneeIds ?? []).map((id): Ref => ({ entity: 'person', id }));
+  const finding: Ref[] = data.findingId ? [{ entity: 'finding', id: data.findingId }] : [];
+  return [...movedRefs(data), ...people, ...finding];
 }
 
 /** Crew take back their own, and what is not here yet on trust that it is; the foreman anybody's. */

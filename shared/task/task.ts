@@ -3,6 +3,7 @@ import { placeSchema } from '../place/place.ts';
 import type { Mark } from '../stage/stage.ts';
 import { daySchema } from '../sync/day.ts';
 import { idSchema, newIdSchema } from '../sync/ids.ts';
+import { TEXT_UNITS_MAX } from '../sync/op.ts';
 import type { Item, Row } from '../sync/row.ts';
 
 const titleSchema = z.string().trim().min(1).max(500);
@@ -41,7 +42,7 @@ export const taskStartSchema = z.strictObject({ taskId: idSchema, startId: newId
 export const taskStopSchema = z.strictObject({
   taskId: idSchema,
   startIds: z.array(idSchema).min(1).max(100),
-  why: z.string().trim().max(2000).optional(),
+  why: z.string().trim().max(TEXT_UNITS_MAX).optional(),
 });
 export const taskMarkSchema = z.strictObject({
   taskId: idSchema,

@@ -120,6 +120,11 @@ test('what is still not understood is not sent round again at each start', async
   expect(await countRows(server.database, shop.shopId)).toEqual(before);
 });
 
+test('a field that a newer phone says beside the data waits for a newer server as well', async () => {
+  const op = { ...entryBy(crew, yard), mood: 'good' };
+  expect(await crew.send(op)).toMatchObject([{ id: op.id, outcome: 'set-aside', reason: 'not-understood' }]);
+});
+
 test('what an older server did not understand counts once a newer one starts', async () => {
   const op = entryBy(crew, yard);
   // as an older server would have left it

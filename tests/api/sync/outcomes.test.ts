@@ -130,6 +130,28 @@ test('what waits for a row counts once that row is there, and the repeat still g
   expect(await crew.send(addition)).toEqual(first);
 });
 
+test('a reason or a caption may be as long as any text', async () => {
+  const [why, entry, photoId] = ['so '.repeat(6_000), entryBy(crew, yard), v7()];
+  const { entryId } = entry.data;
+  const outcomes = await crew.send(
+    entry,
+    crew.op('entry.strike', { entryId, why, saw: [entry.id] }, { over: { struck: [entry.id] } }),
+    crew.op('photo.attach', { photoId, sha256: 'a'.repeat(64), boatId: yard.boatId, caption: why, width: 4, height: 3, bytes: 12 }),
+  );
+  expect(outcomes.map(({ outcome }) => outcome)).toEqual(['kept', 'kept', 'kept']);
+});
+
+test('a task made for a finding waits for that finding', async () => {
+  const { boatId, stageId } = yard;
+  const findingId = v7();
+  const task = crew.op('task.add', { taskId: v7(), boatId, stageId, title: 'New beam', findingId });
+  expect(await crew.send(task)).toMatchObject([{ outcome: 'set-aside', reason: 'no-such-row' }]);
+  const noted = { findingId, boatId, kind: 'rot', place: { number: 3 }, known: 'probed', certainty: 'proved', text: 'Beam 3 is soft.' };
+  await crew.send(crew.op('finding.note', noted));
+  const { rows } = await crew.pullAll();
+  expect(rows.find(({ id }) => id === task.data.taskId)!.row).toMatchObject({ title: 'New beam', findingId });
+});
+
 test('a year 0 is no day, to the law as to the database', async () => {
   const [outcome] = await crew.send(entryBy(crew, yard, { workDate: '0000-01-01' }));
   expect(outcome).toMatchObject({ outcome: 'set-aside', reason: 'malformed' });

@@ -97,9 +97,9 @@ describe('names that every object has', () => {
     },
   );
 
-  it('as an op’s own fields leave it unread', async () => {
+  it('as an op’s own fields are fields that are not known', async () => {
     const raw = JSON.stringify(changes('two ribs')).replace('{', '{"constructor":1,');
-    expect(await sent([JSON.parse(raw)])).toEqual(['malformed']);
+    expect(await sent([JSON.parse(raw)])).toEqual(['not-understood']);
   });
 });
 

@@ -42,7 +42,6 @@ describe('what cannot be read as an op is malformed, and what stands beside it g
     ['an id in capitals', (op) => ({ ...op, id: (op.id as string).toUpperCase().replace('7000', '700A') })],
     ['no id', ({ id: _id, ...op }) => op],
     ['a stamp that is none', (op) => ({ ...op, at: 'this morning' })],
-    ['a field that no op has', (op) => ({ ...op, mood: 'good' })],
     ['no data', ({ data: _data, ...op }) => op],
     ['an over that is a list', (op) => ({ ...op, over: [] })],
     ['a version 0', (op) => ({ ...op, v: 0 })],
@@ -108,6 +107,7 @@ describe('what is not known here is not understood', () => {
     ['a kind', { kind: 'entry.sing' }],
     ['a kind named like what every object has', { kind: 'constructor' }],
     ['a later version', { v: 2 }],
+    ['a field beside its data', { mood: 'good' }],
   ])('%s', async (_name, change) => {
     const { shop, phone, write } = await shopWithPhone();
     expect(await phone.sendsOnly([{ ...write(), ...change }])).toMatchObject([{ reason: 'not-understood' }]);
