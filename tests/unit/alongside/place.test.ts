@@ -15,7 +15,11 @@ describe('a part', () => {
     ['cov', 'covering_board'],
     ['deck pl', 'deck_plank'],
   ])('is found by %o', (asked, id) => {
-    expect(searchParts(asked).slice(0, 3).map((each) => each.id)).toContain(id);
+    expect(
+      searchParts(asked)
+        .slice(0, 3)
+        .map((each) => each.id),
+    ).toContain(id);
   });
 
   test('that nobody has is not found, and nothing asked shows all', () => {

@@ -94,7 +94,10 @@ describe("the day's line", () => {
     await bench.record.say(bench.rosa, 'finding.strike', { findingId, why: 'wrong boat', saw: [] });
     const { items } = lineOf(bench, bench.wes).days[0]!;
     expect(items).toHaveLength(1);
-    expect(items[0]).toMatchObject({ item: 'note', struck: expect.stringMatching(/^Struck by Rosa .*: wrong boat$/) });
+    expect(items[0]).toMatchObject({
+      item: 'note',
+      struck: expect.stringMatching(/^Struck by Rosa .*: wrong boat$/),
+    });
   });
 
   test('shows a tick whose entry was moved to another boat on its own', async () => {

@@ -64,13 +64,22 @@ describe('the search', () => {
     const set = { names: [{ name: 'Wild Plover' }] };
     await bench.record.say(bench.orrin, 'boat.amend', { boatId: bench.otherBoatId, set });
     const [hit] = readSearch(bench.record.viewAs(bench.rosa), 'plover', null, 50).hits;
-    expect(hit).toMatchObject({ title: 'Amber Reach, once Wild Plover', to: '/alongside', where: { boatId: bench.otherBoatId } });
+    expect(hit).toMatchObject({
+      title: 'Amber Reach, once Wild Plover',
+      to: '/alongside',
+      where: { boatId: bench.otherBoatId },
+    });
   });
 
   test('finds tasks and the words under photos, several photos of one pick as one', async () => {
     const bench = await shopAtBench();
     const { record, boatId, strip, orrin } = bench;
-    await record.say(orrin, 'task.add', { taskId: record.newId(), boatId, stageId: strip, title: 'Bag the chock screws' });
+    await record.say(orrin, 'task.add', {
+      taskId: record.newId(),
+      boatId,
+      stageId: strip,
+      title: 'Bag the chock screws',
+    });
     for (const sha of ['a', 'b']) {
       await record.say(orrin, 'photo.attach', {
         photoId: record.newId(),

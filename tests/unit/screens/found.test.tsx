@@ -70,7 +70,9 @@ describe('a finding', () => {
     await waitFor(() => expect(crew.replica.draft.read('found')).toMatchObject({ text: 'light through it' }));
     await crew.dieAndStart();
     crew.show('/found');
-    expect((await screen.findByRole('button', { name: 'Open seam' })).getAttribute('aria-pressed')).toBe('true');
+    expect((await screen.findByRole('button', { name: 'Open seam' })).getAttribute('aria-pressed')).toBe(
+      'true',
+    );
     await press('Log the finding');
     await waitFor(() => expect(photos()).toHaveLength(1));
     expect(findings()).toMatchObject([{ kind: 'open_seam', text: 'light through it' }]);
@@ -106,7 +108,7 @@ describe('a finding', () => {
     );
   });
 
-  test("carries its part, side and number on to the next one and to the next photo, on the same boat", async () => {
+  test('carries its part, side and number on to the next one and to the next photo, on the same boat', async () => {
     crew.show('/found');
     await press('Rot');
     await choosePart('beam', 'Deck beam');
@@ -189,7 +191,15 @@ describe("a finding's page", () => {
 test('photos of an entry are shown with it, and one is put right on its own page', async () => {
   const { replica, boatId, stageId } = crew;
   const entryId = replica.newId();
-  const written = { entryId, boatId, stageId, workDate: '2026-06-01', text: 'Took the sole up', spoken: false, hours: [] };
+  const written = {
+    entryId,
+    boatId,
+    stageId,
+    workDate: '2026-06-01',
+    text: 'Took the sole up',
+    spoken: false,
+    hours: [],
+  };
   await replica.hold('entry.write', written);
   crew.show(`/entry/${entryId}`);
   await user.click(await screen.findByRole('link', { name: 'Photo' }));

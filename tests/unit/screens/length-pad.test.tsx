@@ -45,5 +45,8 @@ test('millimetres are figures alone, and never more than the record takes', asyn
 test('a fraction in a text is drawn, and nothing else of it', () => {
   const { container } = render(<Fractions text="11 3/4 in long, frames 3/4 of the way, 1/16 in deep" />);
   expect(container.textContent).toBe('11 3/4 in long, frames 3/4 of the way, 1/16 in deep');
-  expect([...container.querySelectorAll('.frac')].map(({ textContent }) => textContent)).toEqual(['3/4', '1/16']);
+  expect([...container.querySelectorAll('.frac')].map(({ textContent }) => textContent)).toEqual([
+    '3/4',
+    '1/16',
+  ]);
 });
