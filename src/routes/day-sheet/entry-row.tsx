@@ -1,6 +1,7 @@
 import { Link } from 'react-router-dom';
 import { BungMark } from '#src/components/bung-mark.tsx';
 import { Hours } from '#src/components/hours.tsx';
+import { deviceWord } from '#src/shell/device-words.ts';
 import { KindSelect } from './kind-select.tsx';
 import { Notes as FoundNotes } from './notes.tsx';
 import type { Correction, EntryLine, Figure } from './read-entry.ts';
@@ -60,7 +61,7 @@ function Remarks({ entry }: { entry: EntryLine }) {
       {entry.figure?.corrections.map((correction) => (
         <CorrectionLine key={`${correction.when} ${correction.afterMinutes}`} correction={correction} />
       ))}
-      {entry.mark === 'held' && <p className="text-slate">held on this device</p>}
+      {entry.mark === 'held' && <p className="text-slate">held on this {deviceWord()}</p>}
       {entry.mark === 'loose' && <LooseLine figure={entry.figure} />}
     </div>
   );

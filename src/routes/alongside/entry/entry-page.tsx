@@ -17,6 +17,7 @@ import { settlingOp } from '#src/routes/alongside/entry/settle.ts';
 import { NoteParts } from '#src/routes/alongside/note-plank.tsx';
 import { PhotoStrip } from '#src/routes/alongside/photo-strip.tsx';
 import { useJustDone } from '#src/routes/alongside/use-just-done.ts';
+import { deviceWord } from '#src/shell/device-words.ts';
 import { RecordBar } from '#src/shell/record-bar.tsx';
 import { listWords } from '#src/words/name-words.ts';
 import { capital } from '#src/words/who.ts';
@@ -107,6 +108,7 @@ function Body({ page }: { page: EntryPage }) {
 }
 
 function stateWords({ mark, isHeld }: EntryPage['line']): string {
-  const words = capital(BUNG_WORDS[mark]);
-  return isHeld && mark !== 'held' ? `${words}, ${BUNG_WORDS.held}` : words;
+  const held = `held on this ${deviceWord()}`;
+  if (mark === 'held') return capital(held);
+  return capital(isHeld ? `${BUNG_WORDS[mark]}, ${held}` : BUNG_WORDS[mark]);
 }
