@@ -3,7 +3,7 @@ import { Fractions } from '#src/components/fractions.tsx';
 import { Hours } from '#src/components/hours.tsx';
 import type { EndLine } from '#src/routes/alongside/read-ends.ts';
 import type { HoursLine } from '#src/routes/alongside/read-entry-line.ts';
-import type { SaidValue } from '#src/routes/alongside/read-value.ts';
+import type { SaidValue } from '#src/words/said-words.ts';
 import { capital } from '#src/words/who.ts';
 
 interface HoursByPersonProps {

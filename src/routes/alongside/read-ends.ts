@@ -3,7 +3,7 @@ import type { EntryRow } from '#shared/entry/entry.ts';
 import type { LooseEnd } from '#shared/sync/loose-ends.ts';
 import type { Row } from '#shared/sync/row.ts';
 import type { View } from '#src/replica/view.ts';
-import { fieldWords, readValue, type SaidValue } from '#src/routes/alongside/read-value.ts';
+import { fieldWords, readValue, type SaidValue } from '#src/words/said-words.ts';
 import { momentWords } from '#src/words/day-words.ts';
 import { whoWords } from '#src/words/who.ts';
 

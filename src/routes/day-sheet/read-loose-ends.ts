@@ -1,15 +1,17 @@
 import type { HoursValue } from '#shared/entry/hours-field.ts';
 import type { Day } from '#shared/sync/day.ts';
+import { STRUCK_FIELD } from '#shared/sync/fields.ts';
 import { itemsOf } from '#shared/sync/items.ts';
 import type { LooseEnd } from '#shared/sync/loose-ends.ts';
 import type { Row } from '#shared/sync/row.ts';
+import { mayDo } from '#src/replica/may-do.ts';
 import type { View } from '#src/replica/view.ts';
 import { dayWords, momentWords } from '#src/words/day-words.ts';
 import { openingWords } from '#src/words/name-words.ts';
+import { fieldWords, readValue, saidWords } from '#src/words/said-words.ts';
 import { boatWords } from '#src/words/where.ts';
 import { whoWords } from '#src/words/who.ts';
-import { fieldWords, valueWords } from './read-said.ts';
-import { mayMake, restore, strike, takeValue, type Settlement } from './settle.ts';
+import { restore, strike, takeValue, type Settlement } from './settle.ts';
 
 export interface EndValue {
   opId: string;
@@ -54,7 +56,8 @@ function readEnd(view: View, end: LooseEnd): EndOnSheet {
   const row = view.find(end.entity, end.rowId) as Row;
   const workDate = (row as Row & { workDate?: Day }).workDate ?? null;
   const isField = end.kind === 'field';
-  const allowed = (settlement: Settlement) => (mayMake(view, settlement, row) ? settlement : null);
+  const allowed = (settlement: Settlement) =>
+    mayDo(view, settlement.kind, settlement.data, row) ? settlement : null;
   return {
     id: end.id,
     about: isField ? fieldWords(view, end.field!) : 'Struck, and changed by somebody who did not know',
@@ -101,4 +104,9 @@ function inField(view: View, field: string, value: unknown): Pick<EndValue, 'wor
     words: valueWords(view, field, value),
     hours: field.startsWith('hours/') ? (value as HoursValue) : null,
   };
+}
+
+function valueWords(view: View, field: string, value: unknown): string {
+  if (field === STRUCK_FIELD && value === null) return 'keep it';
+  return saidWords(readValue(view, field, value));
 }

@@ -1,9 +1,6 @@
 import type { HoursValue } from '#shared/entry/hours-field.ts';
 import { STAGE_FIELD, STRUCK_FIELD } from '#shared/sync/fields.ts';
-import { opKinds } from '#shared/sync/registry.ts';
 import type { LooseEnd } from '#shared/sync/loose-ends.ts';
-import type { Row } from '#shared/sync/row.ts';
-import type { View } from '#src/replica/view.ts';
 
 /** An op to be held, once its reason is known where it asks for one. */
 export interface Settlement {
@@ -41,10 +38,4 @@ function setOf(field: string, value: unknown): Record<string, unknown> {
   }
   if (field === STAGE_FIELD) return { ...(value as object) };
   return { [field]: value };
-}
-
-/** Whether this person's op would count, by the rule that the server judges it by. */
-export function mayMake(view: View, { kind, data }: Settlement, row: Row | undefined): boolean {
-  const { personId, roles } = view.me;
-  return opKinds.get(kind)?.mayMake({ personId, roles }, data, row) ?? false;
 }

@@ -165,7 +165,7 @@ describe('other fields', () => {
       made,
     );
     const [end] = shop.ends();
-    expect(end!.values.map(({ words }) => words)).toEqual(['Mallow', 'Brindle']);
+    expect(end!.values.map(({ words }) => words)).toEqual(['Mallow · no stage', 'Brindle · no stage']);
     await press(shop, end!.values[1]!.take!);
     expect(shop.ends()).toEqual([]);
     expect(shop.record.store.row('entry', shop.entryId)).toMatchObject({ boatId: boatB });

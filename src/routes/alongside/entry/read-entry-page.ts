@@ -1,7 +1,7 @@
 import type { EntryRow } from '#shared/entry/entry.ts';
 import { peopleInHours } from '#shared/entry/kinds.ts';
 import type { View } from '#src/replica/view.ts';
-import { mayAmend, mayDo, mayStrike } from '#src/routes/alongside/may-do.ts';
+import { mayAmend, mayDo, mayStrike } from '#src/replica/may-do.ts';
 import { readBoatRows } from '#src/routes/alongside/read-boat-rows.ts';
 import { readEntry } from '#src/routes/alongside/read-entry-line.ts';
 import { readEntryItem, type EntryItem } from '#src/routes/alongside/read-line-items.ts';

@@ -8,7 +8,7 @@ import type { Statement } from '#shared/sync/row.ts';
 import { stampTime } from '#shared/sync/stamp.ts';
 import type { Bung } from '#src/components/bung-mark.tsx';
 import type { View } from '#src/replica/view.ts';
-import { fieldWords, readValue, type SaidValue } from '#src/routes/alongside/read-value.ts';
+import { fieldWords, readValue, type SaidValue } from '#src/words/said-words.ts';
 import { dayWords, timeWords, weekdayWords } from '#src/words/day-words.ts';
 import { whoWords } from '#src/words/who.ts';
 

@@ -2,7 +2,7 @@ import type { EntrySet } from '#shared/entry/entry.ts';
 import type { HoursValue } from '#shared/entry/hours-field.ts';
 import { differingStatements, STAGE_FIELD, STRUCK_FIELD } from '#shared/sync/fields.ts';
 import type { EntryPage } from '#src/routes/alongside/entry/read-entry-page.ts';
-import { personOfHours } from '#src/routes/alongside/read-value.ts';
+import { personOfHours } from '#src/words/said-words.ts';
 import type { EndLine } from '#src/routes/alongside/read-ends.ts';
 
 export const SETTLED_WHY = 'settles what was said differently';

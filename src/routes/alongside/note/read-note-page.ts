@@ -8,7 +8,7 @@ import type { Bung } from '#src/components/bung-mark.tsx';
 import type { View } from '#src/replica/view.ts';
 import { readHistory, type HistoryLine } from '#src/routes/alongside/entry/read-history.ts';
 import { SETTLED_WHY, type Settling } from '#src/routes/alongside/entry/settle.ts';
-import { mayDo, mayStrike } from '#src/routes/alongside/may-do.ts';
+import { mayDo, mayStrike } from '#src/replica/may-do.ts';
 import type { NoteEntity, NoteRow } from '#src/routes/alongside/note/note-values.ts';
 import { readEnds, type EndLine } from '#src/routes/alongside/read-ends.ts';
 import { markOf, struckWords } from '#src/routes/alongside/read-mark.ts';

@@ -2,7 +2,7 @@ import type { TaskRow } from '#shared/task/task.ts';
 import { standingItems } from '#shared/sync/items.ts';
 import type { View } from '#src/replica/view.ts';
 import { stagesOf, type Where } from '#src/routes/alongside/read-boats.ts';
-import { mayDo } from '#src/routes/alongside/may-do.ts';
+import { mayDo } from '#src/replica/may-do.ts';
 import { momentWords, nearDayWords } from '#src/words/day-words.ts';
 import { listWords } from '#src/words/name-words.ts';
 import { whoWords } from '#src/words/who.ts';

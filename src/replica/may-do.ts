@@ -1,7 +1,7 @@
 import type { EntryRow } from '#shared/entry/entry.ts';
 import type { RecordEntity, Row } from '#shared/sync/row.ts';
 import { opKinds } from '#shared/sync/registry.ts';
-import type { View } from '#src/replica/view.ts';
+import type { View } from './view.ts';
 
 /** Whether this person's op of a kind would count, by the very rule that the server judges it by. */
 export function mayDo(view: View, kind: string, data: object, row: Row | undefined): boolean {

@@ -1,5 +1,8 @@
+import type { BoatRow } from '#shared/boat/boat.ts';
 import type { HoursValue } from '#shared/entry/hours-field.ts';
 import type { Certainty, Extent, Known } from '#shared/finding/finding.ts';
+import { hoursText } from '#shared/measure/hours.ts';
+import { boatLengthText } from '#shared/measure/length.ts';
 import type { PhotoSet } from '#shared/photo/photo.ts';
 import type { Place } from '#shared/place/place.ts';
 import { STAGE_FIELD, STRUCK_FIELD } from '#shared/sync/fields.ts';
@@ -9,10 +12,11 @@ import type { View } from '#src/replica/view.ts';
 import { dayWords } from '#src/words/day-words.ts';
 import { CERTAINTY_WORDS, extentWords, findingTitle, KNOWN_WORDS } from '#src/words/finding-words.ts';
 import { HOURS_KIND_WORDS } from '#src/words/hours-words.ts';
+import { listWords } from '#src/words/name-words.ts';
 import { PHOTO_SET_WORDS } from '#src/words/photo-words.ts';
 import { placeWords } from '#src/words/place-words.ts';
 import { unitsOf } from '#src/words/units.ts';
-import { whereWords } from '#src/words/where.ts';
+import { stageWords, whereWords } from '#src/words/where.ts';
 import { capital, whoWords } from '#src/words/who.ts';
 
 /** A value that somebody said about a field, for the eye: hours are drawn, everything else is words. */
@@ -40,6 +44,23 @@ const FIELD_WORDS: Readonly<Record<string, string>> = {
   caption: 'The words under it',
   set: 'The set',
   findingId: 'The finding it shows',
+  title: 'What the task is',
+  estimateMinutes: 'The estimate',
+  assigneeIds: 'Who it is for',
+  plannedFor: 'The day it is planned for',
+  name: 'The name',
+  order: 'The place in the order',
+  after: 'What comes before it',
+  arrivedOn: 'The day she came',
+  type: 'What she is',
+  hullNumber: 'Her number',
+  lengthMm: 'Her length',
+  beamMm: 'Her beam',
+  lies: 'Which way she lies',
+  numbering: 'How she is counted',
+  builder: 'Her builder',
+  builtYear: 'The year she was built',
+  names: 'Her names',
 };
 
 /** The person whose hours a field is, or null where it is another field. */
@@ -60,9 +81,21 @@ export function readValue(view: View, field: string, value: unknown): SaidValue 
     const { minutes, kind } = value as HoursValue;
     return { minutes, words: kind === null ? '' : HOURS_KIND_WORDS[kind] };
   }
-  if (value === null && field !== STRUCK_FIELD && field !== 'place') return { words: 'nothing' };
+  if ((value === null || value === '') && field !== STRUCK_FIELD && field !== 'place')
+    return { words: 'nothing' };
   const read = READ[field];
   return { words: read ? read(view, value) : String(value) };
+}
+
+/** A value in words alone, its hours too: '2 1/2 h, extra work'. */
+export function saidWords({ minutes, words }: SaidValue): string {
+  if (minutes === undefined) return words;
+  if (minutes === 0) return 'no hours';
+  return [`${hoursText(minutes)} h`, words].filter(Boolean).join(', ');
+}
+
+function dayRead(view: View, value: unknown): string {
+  return dayWords(value as string, view.today);
 }
 
 const READ: Readonly<Record<string, (view: View, value: unknown) => string>> = {
@@ -71,7 +104,19 @@ const READ: Readonly<Record<string, (view: View, value: unknown) => string>> = {
     return whereWords(view, boatId, stageId);
   },
   [STRUCK_FIELD]: (_view, value) => (value ? `struck: ${(value as Struck).why}` : 'restored'),
-  workDate: (view, value) => dayWords(value as string, view.today),
+  workDate: dayRead,
+  plannedFor: dayRead,
+  arrivedOn: dayRead,
+  estimateMinutes: (_view, value) => `${hoursText(value as number)} h`,
+  assigneeIds: (view, value) => listWords((value as string[]).map((id) => whoWords(view, id))) || 'nobody',
+  after: (view, value) => listWords((value as string[]).map((id) => stageWords(view, id))) || 'nothing',
+  lengthMm: (view, value) => boatLengthText(value as number, unitsOf(view)),
+  beamMm: (view, value) => boatLengthText(value as number, unitsOf(view)),
+  names: (_view, value) => listWords((value as { name: string }[]).map(({ name }) => name)),
+  lies(view, value) {
+    const { way, since } = value as NonNullable<BoatRow['lies']>;
+    return `${way === 'upright' ? 'upright' : 'upside down'} since ${dayWords(since, view.today)}`;
+  },
   place: (_view, value) => placeWords(value as Place | null) || 'no place',
   kind: (_view, value) => findingWords(value as string),
   about: (_view, value) => findingWords(value as string),
