@@ -5,8 +5,8 @@ import type { Answer, Operation } from './operation.ts';
 
 type Json = Record<string, unknown>;
 
-/** OpenAPI 3.1 made from the very schemas that validate requests. */
-export function openApiDocument(operations: readonly Operation[]): Json {
+/** OpenAPI 3.1 made from the very schemas that validate requests; `named` are those of parts of bodies that no body's own schema describes. */
+export function openApiDocument(operations: readonly Operation[], named: Record<string, z.ZodType> = {}): Json {
   const paths: Record<string, Json> = {};
   for (const operation of operations) {
     const at = operation.path.replace(/:(\w+)/g, '{$1}');
@@ -17,10 +17,14 @@ export function openApiDocument(operations: readonly Operation[]): Json {
     info: { title: 'Ribband', version },
     paths,
     components: {
-      schemas: { Problem: jsonSchema(problemSchema, 'output') },
+      schemas: { Problem: jsonSchema(problemSchema, 'output'), ...inputSchemas(named) },
       securitySchemes: { bearer: { type: 'http', scheme: 'bearer', bearerFormat: 'JWT' } },
     },
   };
+}
+
+function inputSchemas(named: Record<string, z.ZodType>): Json {
+  return Object.fromEntries(Object.entries(named).map(([name, schema]) => [name, jsonSchema(schema, 'input')]));
 }
 
 function describe(operation: Operation): Json {
@@ -32,12 +36,27 @@ function describe(operation: Operation): Json {
     parameters: [...pathParameters(operation.path), ...queryParameters(operation.query)],
     ...(body ? { requestBody: requestBody(body, operation.bodyType) } : {}),
     responses: Object.fromEntries(
-      Object.entries(operation.responses).map(([status, answer]) => [
+      Object.entries({ ...refusals(operation), ...operation.responses }).map(([status, answer]) => [
         status,
         response(Number(status), answer),
       ]),
     ),
   };
+}
+
+const BODY_REFUSALS: Operation['responses'] = {
+  400: { description: 'The body is not as its schema says: `issues` names each bad field' },
+  413: { description: 'The body is too large' },
+};
+const SESSION_REFUSALS: Operation['responses'] = {
+  401: { description: 'No access token that holds' },
+  403: { description: 'Not for this role or this device' },
+};
+
+// what can happen at any such operation, so that none has to say it
+function refusals({ roles, body }: Operation): Operation['responses'] {
+  const away = { 503: { description: 'The database is away' } };
+  return { ...(body ? BODY_REFUSALS : {}), ...(roles === 'anyone' ? {} : SESSION_REFUSALS), ...away };
 }
 
 function pathParameters(path: string): Json[] {

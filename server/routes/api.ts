@@ -1,6 +1,8 @@
 import { Router } from 'express';
+import { z } from 'zod';
 import { notFound } from '#server/middleware/problem.ts';
 import { openApiDocument } from '#server/openapi/document.ts';
+import { opSchemas } from '#server/openapi/op-schemas.ts';
 import type { Operation } from '#server/openapi/operation.ts';
 import type { Parts } from '#server/parts.ts';
 import { boatOperations, boatRoutes } from './boats.ts';
@@ -26,13 +28,21 @@ const modules: { routes: (parts: Parts) => Router; operations: Operation[] }[] =
   { routes: eventRoutes, operations: eventOperations },
 ];
 
-export const apiOperations: Operation[] = modules.flatMap((module) => module.operations);
+const documentOperation: Operation = {
+  method: 'get',
+  path: '/api/openapi.json',
+  summary: 'This document',
+  roles: 'anyone',
+  responses: { 200: { description: 'OpenAPI 3.1', schema: z.object({ openapi: z.string() }) } },
+};
+
+export const apiOperations: Operation[] = [...modules.flatMap((module) => module.operations), documentOperation];
 
 /** The API, to be mounted at /api; an unknown path below it is a problem, never the app's page. */
 export function apiRoutes(parts: Parts): Router {
   const router = Router();
   for (const { routes } of modules) router.use(routes(parts));
-  const document = openApiDocument(apiOperations);
+  const document = openApiDocument(apiOperations, opSchemas);
   router.get('/openapi.json', (_request, response) => {
     response.set('Cache-Control', 'no-cache').json(document);
   });

@@ -13,7 +13,7 @@ export const SYNC_BODY_BYTES_MAX = 1024 * 1024;
 export const syncRequestSchema = z.strictObject({
   deviceId: idSchema,
   cursor: z.string().max(1000).nullable(),
-  ops: z.array(z.unknown()),
+  ops: z.array(z.unknown().describe('an Op; what is none is set aside')).max(OPS_PER_REQUEST_MAX),
   limit: z.int().min(1).max(ROWS_PER_ANSWER_MAX).optional(),
   held: heldSchema.optional(),
   appVersion: z.string().max(100).refine(isKeepableText, 'holds a character that cannot be kept').optional(),

@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { version } from '#server/version.ts';
+import { opKinds } from '#shared/sync/registry.ts';
 import { startServer } from '#tests/worlds/server.ts';
 import type { TestServer } from '#tests/worlds/server.ts';
 
@@ -29,6 +30,15 @@ test('the contract is served as OpenAPI 3.1', async () => {
   };
   expect(document.openapi).toBe('3.1.0');
   expect(document.paths).toHaveProperty(['/api/health', 'get', 'responses', '503']);
+  expect(document.paths).toHaveProperty(['/api/openapi.json', 'get']);
+});
+
+test('it describes each kind of op by the schema that reads it', async () => {
+  const { components } = (await (await fetch(`${server.url}/api/openapi.json`)).json()) as {
+    components: { schemas: Record<string, { required: string[] }> };
+  };
+  expect(Object.keys(components.schemas)).toEqual(expect.arrayContaining(['Op', ...opKinds.keys()]));
+  expect(components.schemas['entry.write']!.required).toEqual(['entryId', 'boatId', 'workDate', 'text', 'spoken', 'hours']);
 });
 
 test('a server without its database names the part that is away', async () => {

@@ -40,3 +40,11 @@ test('a refusal without a schema of its own is a problem', () => {
     { $ref: '#/components/schemas/Problem' },
   );
 });
+
+test('what any operation may answer is said of each: a bad body, no token, another role, a database that is away', () => {
+  const { body: _body, ...bodiless } = operation;
+  const { paths } = openApiDocument([operation, { ...bodiless, method: 'get', roles: 'anyone' }]);
+  const { post, get } = (paths as Record<string, Record<string, { responses: object }>>)['/api/boats/{id}/owners']!;
+  expect(Object.keys(post!.responses)).toEqual(['204', '400', '401', '403', '413', '503']);
+  expect(Object.keys(get!.responses)).toEqual(['204', '403', '503']);
+});
