@@ -90,7 +90,10 @@ export class Syncer {
     // A restored server has lost ops. All that are kept go again, not only those since the time it names: other devices
     // may have sent since the restore, and a repeat changes nothing. This comes before the rows are kept, else a kill
     // between the two would leave the server without them for ever.
-    if (gathering.isReplayAsked) await device.sendAgain();
+    if (gathering.isReplayAsked) {
+      await person.pictures.offerAgain();
+      await device.sendAgain();
+    }
     const isKept = await person.apply(gathering.pulled(last.serverTime, before.pulls));
     // another tab was faster: what it pulled is read, and the batch goes again
     if (!isKept) return { outcome: 'done', sent: 0, rows: 0 };

@@ -1,6 +1,7 @@
 import { type KeyboardEvent, type ReactNode, type RefObject, useLayoutEffect, useRef } from 'react';
 import type { IconName } from '#src/components/icons.tsx';
-import { IconKey } from '#src/components/key.tsx';
+import { IconKey, Key } from '#src/components/key.tsx';
+import { KeyRow } from '#src/components/page.tsx';
 import { BlobImage } from '#src/components/photo/blob-image.tsx';
 import { pictureWords } from '#src/components/photo/picture-words.ts';
 import { ZOOM_MAX, useZoom, type Zoom } from '#src/components/photo/use-zoom.ts';
@@ -68,23 +69,29 @@ export function PhotoViewer({ photos, shownId, onShow, onClose, children }: Phot
           )}
           {children}
         </div>
-        <IconKey icon="close" word="Close" kind="onDeep" isBare onClick={onClose} />
+        <IconKey icon="close" word="Close" kind="onDeep" isBare className="max-md:hidden" onClick={onClose} />
       </div>
       <Whole key={photo.sha256} photo={photo} zoom={zoom} roomRef={roomRef} />
-      <div className="mx-auto grid w-full max-w-[820px] auto-cols-fr grid-flow-col gap-3 p-3 pb-[calc(12px+env(safe-area-inset-bottom))]">
-        {photos.length > 1 && (
-          <ViewKey icon="back" word="Previous" isAtEnd={index === 0} onPress={() => show(index - 1)} />
-        )}
-        <ViewKey icon="minus" word="Smaller" isAtEnd={zoom.times === 1} onPress={zoom.smaller} />
-        <ViewKey icon="plus" word="Larger" isAtEnd={zoom.times === ZOOM_MAX} onPress={zoom.larger} />
-        {photos.length > 1 && (
-          <ViewKey
-            icon="forward"
-            word="Next"
-            isAtEnd={index === photos.length - 1}
-            onPress={() => show(index + 1)}
-          />
-        )}
+      <div className="mx-auto grid w-full max-w-[820px] gap-3 p-3 pb-[calc(12px+env(safe-area-inset-bottom))]">
+        <KeyRow>
+          {photos.length > 1 && (
+            <ViewKey icon="back" word="Previous" isAtEnd={index === 0} onPress={() => show(index - 1)} />
+          )}
+          <ViewKey icon="minus" word="Smaller" isAtEnd={zoom.times === 1} onPress={zoom.smaller} />
+          <ViewKey icon="plus" word="Larger" isAtEnd={zoom.times === ZOOM_MAX} onPress={zoom.larger} />
+          {photos.length > 1 && (
+            <ViewKey
+              icon="forward"
+              word="Next"
+              isAtEnd={index === photos.length - 1}
+              onPress={() => show(index + 1)}
+            />
+          )}
+        </KeyRow>
+        {/* within the thumb's reach, where the hand that holds the phone is the only one free */}
+        <Key kind="onDeep" className="md:hidden" onClick={onClose}>
+          Close
+        </Key>
       </div>
     </dialog>
   );

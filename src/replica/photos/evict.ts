@@ -11,6 +11,8 @@ interface Large {
   key: string;
   bytes: number;
   since: string;
+  /** what the file was called, where it was taken in here */
+  name?: string;
 }
 
 /** Lets go of large pictures that are in no queue, the oldest first, until they take no more than `bytesMax`; answers the bytes freed. */
@@ -47,7 +49,17 @@ export function dropBytes({ bytes, sizes }: PictureStores, sha256: string): void
   }
 }
 
-async function evictable({ queue, sizes }: PictureStores): Promise<Large[]> {
+/** The pictures that went to the server from here and are still here. */
+export async function sentWhole(
+  queue: IDBObjectStore,
+  sizes: IDBObjectStore,
+): Promise<{ sha256: string; name: string; since: string }[]> {
+  return (await evictable({ queue, sizes }))
+    .filter(({ key }) => key.endsWith('/full'))
+    .map(({ key, name = 'photo', since }) => ({ sha256: sha256Of(key), name, since }));
+}
+
+async function evictable({ queue, sizes }: Pick<PictureStores, 'queue' | 'sizes'>): Promise<Large[]> {
   const [queued, keys, values] = await Promise.all([
     keysOf(queue),
     keysOf(sizes),

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { openRecord, openRecords, type SealedDatabase } from '../sealed-records.ts';
 import { Turns } from '../turns.ts';
-import { dropBytes, evict, evictAll, type PictureStores } from './evict.ts';
+import { dropBytes, evict, evictAll, sentWhole, type PictureStores } from './evict.ts';
 import type { HeldPicture, PictureSize, PreparedPicture } from './picture.ts';
 
 /** Pictures made here that the server does not have whole, by the SHA-256; sealed. */
@@ -82,7 +82,7 @@ export class PictureStore {
         queue.put(record, sha256);
         bytes.put(thumb, `${sha256}/thumb`);
         bytes.put(full, `${sha256}/full`);
-        sizes.put({ bytes: picture.full.size, since }, `${sha256}/full`);
+        sizes.put({ bytes: picture.full.size, since, name }, `${sha256}/full`);
       });
       this.queue = oldestFirst([...this.queue, [sha256, queued]]);
     });
@@ -133,6 +133,22 @@ export class PictureStore {
    */
   trim(bytesMax: number): Promise<number> {
     return this.write((stores) => evict(stores, bytesMax));
+  }
+
+  /** Has what was sent from here, and is still here, offered to the server again: it may have lost it. */
+  offerAgain(): Promise<void> {
+    return this.turns.take(async () => {
+      const sent = await this.write(({ queue, sizes }) => sentWhole(queue, sizes));
+      const again = sent.map(({ sha256, name, since }): [string, Queued] => [
+        sha256,
+        // which photos it was for no longer matters: they are the record's
+        { ...NEW, name, since, attachedFor: [sha256], isInDoubt: true },
+      ]);
+      await this.save(
+        again.map(([sha256]) => sha256),
+        new Map(oldestFirst([...this.queue, ...again])),
+      );
+    });
   }
 
   /** Lets go of all that the server has. */

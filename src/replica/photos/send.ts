@@ -105,7 +105,7 @@ async function put({ world, store, fetch }: Sending, { sha256, size }: Step, byt
   }
   if (!response.ok) return { outcome: 'failed', words: await wordsOf(response) };
   if (!isServers(response)) return { outcome: 'failed', words: NOT_OURS };
-  await store.note(sha256, { arrived: size, isInDoubt: false });
+  await store.note(sha256, size === 'full' ? { arrived: 'full', isInDoubt: false } : { arrived: 'thumb' });
   return null;
 }
 

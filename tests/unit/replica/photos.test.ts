@@ -69,7 +69,7 @@ describe('attaching photos', () => {
     phone.network = OFFLINE;
     const { attached, failed } = await replica.attachPhotos(files('a.jpg'), {
       boatId: shop.boatId,
-      caption: 'x'.repeat(3000),
+      caption: 'x'.repeat(30_000),
     });
     expect({ attached, names: failed.map(({ name }) => name) }).toEqual({ attached: [], names: ['a.jpg'] });
     expect(replica.heldPictures()).toEqual([]);
@@ -295,6 +295,29 @@ describe('sending pictures', () => {
     await Promise.all([replica.sendNow(), other.replica.sendNow()]);
     expect(shop.server.pictures.asked).toHaveLength(4);
     expect(other.replica.syncState().heldPhotos).toBe(0);
+  });
+
+  test('a restored server that has lost pictures is given them again, and those that it has not do not go twice', async () => {
+    const { shop, replica, about } = await openPhone();
+    await replica.attachPhotos(files('a.jpg'), about);
+    await replica.sendNow();
+    const backup = shop.server.backUp();
+    await replica.attachPhotos(files('b.jpg'), about);
+    await replica.sendNow();
+    const [a, b] = [await shaOf('a.jpg'), await shaOf('b.jpg')];
+    shop.server.restore(backup);
+    for (const size of ['thumb', 'full']) shop.server.pictures.kept.delete(`${b}/${size}`);
+    shop.server.pictures.asked.length = 0;
+    await replica.sendNow();
+    expect([...shop.server.pictures.kept.keys()].sort()).toEqual(
+      [`${a}/thumb`, `${a}/full`, `${b}/thumb`, `${b}/full`].sort(),
+    );
+    expect(shop.server.pictures.asked.filter((asked) => asked.endsWith('/full'))).toEqual([
+      `HEAD ${a}/full`,
+      `HEAD ${b}/full`,
+      `PUT ${b}/full`,
+    ]);
+    expect(replica.syncState()).toMatchObject({ heldOps: 0, heldPhotos: 0 });
   });
 
   test('what a device holds of pictures is told to the server', async () => {
