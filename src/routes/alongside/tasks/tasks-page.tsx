@@ -6,8 +6,8 @@ import { Fold } from '#src/components/fold.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { KeyRack, Page, Section } from '#src/components/page.tsx';
 import { Planks } from '#src/components/ribband.tsx';
-import { Undo } from '#src/components/undo.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
+import { DoneUndo } from '#src/routes/alongside/done-undo.tsx';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 import { AddTask } from '#src/routes/alongside/tasks/add-task.tsx';
 import { readTask, readTasks, type TaskGroup } from '#src/routes/alongside/tasks/read-tasks.ts';
@@ -51,15 +51,10 @@ function Tasks({ where }: { where: Where }) {
         </>
       }
       foot={
-        doings.undo && (
+        doings.done && (
           <KeyRack>
-            <div className="-m-3">
-              <Undo
-                key={doings.undo.markId}
-                words={doings.undo.words}
-                onUndo={doings.undo.onUndo}
-                onGone={doings.undo.onGone}
-              />
+            <div className="-mb-3">
+              <DoneUndo key={doings.done.done} done={doings.done} onGone={doings.onGone} />
             </div>
           </KeyRack>
         )

@@ -1,55 +1,69 @@
 import { useState } from 'react';
 import { useHold, useReplica } from '#src/replica/hooks.tsx';
+import type { Holding } from '#src/replica/replica.ts';
+import type { Done } from '#src/routes/alongside/done.ts';
 import type { TaskLine } from '#src/routes/alongside/tasks/read-tasks.ts';
 import { openingWords } from '#src/words/name-words.ts';
 
 const TITLE_LENGTH_MAX = 40;
 
-interface UndoTick {
-  markId: string;
-  words: string;
-  onUndo: () => void;
-  onGone: () => void;
-}
-
-/** What can be done with a task, and the way back from the last tick while it stands. */
+/** What can be done with a task, and the way back from the last doing while it stands. */
 export interface TaskDoings {
   tick: (task: TaskLine) => void;
   untick: (task: TaskLine) => void;
   start: (task: TaskLine) => void;
   stop: (task: TaskLine) => void;
-  undo: UndoTick | null;
+  done: Done | null;
+  onGone: () => void;
   failure: string | null;
 }
 
 export function useTaskDoings(): TaskDoings {
   const replica = useReplica();
   const hold = useHold();
-  const [ticked, setTicked] = useState<{ taskId: string; markId: string; title: string } | null>(null);
-  const take = (kind: string, data: object) => hold.mutate({ kind, data });
+  const [done, setDone] = useState<Done | null>(null);
 
-  function undoOf({ taskId, markId, title }: NonNullable<typeof ticked>): UndoTick {
-    return {
-      markId,
-      words: `Ticked off: ${openingWords(title, TITLE_LENGTH_MAX)}`,
-      onUndo() {
-        setTicked(null);
-        take('task.unmark', { taskId, markIds: [markId] });
-      },
-      onGone: () => setTicked(null),
-    };
+  function take(what: string, { title }: TaskLine, deed: Holding, back: Holding) {
+    // the way back from what was done before is none from this
+    setDone(null);
+    hold.mutate(deed, {
+      onSuccess: (op) =>
+        setDone({ done: op.id, words: `${what}: ${openingWords(title, TITLE_LENGTH_MAX)}`, undo: [back] }),
+    });
   }
 
+  const mark = (taskId: string, markId: string): Holding => ({
+    kind: 'task.mark',
+    data: { taskId, markId, workDate: replica.view().today },
+  });
+  const unmark = (taskId: string, markIds: string[]): Holding => ({
+    kind: 'task.unmark',
+    data: { taskId, markIds },
+  });
+  const start = (taskId: string, startId: string): Holding => ({
+    kind: 'task.start',
+    data: { taskId, startId },
+  });
+  const stop = (taskId: string, startIds: string[]): Holding => ({
+    kind: 'task.stop',
+    data: { taskId, startIds },
+  });
+
   return {
-    tick({ id, title }) {
+    tick(task) {
       const markId = replica.newId();
-      take('task.mark', { taskId: id, markId, workDate: replica.view().today });
-      setTicked({ taskId: id, markId, title });
+      take('Ticked off', task, mark(task.id, markId), unmark(task.id, [markId]));
     },
-    untick: ({ id, myMarkIds }) => take('task.unmark', { taskId: id, markIds: myMarkIds }),
-    start: ({ id }) => take('task.start', { taskId: id, startId: replica.newId() }),
-    stop: ({ id, myStartIds }) => take('task.stop', { taskId: id, startIds: myStartIds }),
-    undo: ticked && undoOf(ticked),
+    // what was taken back holds for ever, so that the way back is a tick of its own
+    untick: (task) =>
+      take('Tick taken back', task, unmark(task.id, task.myMarkIds), mark(task.id, replica.newId())),
+    start(task) {
+      const startId = replica.newId();
+      take('Started', task, start(task.id, startId), stop(task.id, [startId]));
+    },
+    stop: (task) => take('Stopped', task, stop(task.id, task.myStartIds), start(task.id, replica.newId())),
+    done,
+    onGone: () => setDone(null),
     failure: hold.error?.message ?? null,
   };
 }
