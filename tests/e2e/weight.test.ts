@@ -21,7 +21,8 @@ beforeAll(async () => {
 afterAll(() => rm(outDir, { recursive: true }));
 
 const sourceOf = (name: string) => readFile(join(outDir, 'assets', name), 'utf8');
-const fileOf = (screen: string) => names.find((name) => name.startsWith(`${screen}-`) && name.endsWith('.js'))!;
+const fileOf = (screen: string) =>
+  names.find((name) => name.startsWith(`${screen}-`) && name.endsWith('.js'))!;
 
 /** The files that must be there before a screen runs. */
 async function filesFor(screen: string): Promise<string[]> {
@@ -48,7 +49,14 @@ it('the first usable Alongside takes no more than 170 KiB of gzipped JavaScript'
 
 it('the forms, the sheets, the viewer and the search come when they are opened', async () => {
   const files = await filesFor('alongside-page');
-  for (const screen of ['log-page', 'found-page', 'photos-page', 'search-page', 'boat-sheet', 'photo-sheet']) {
+  for (const screen of [
+    'log-page',
+    'found-page',
+    'photos-page',
+    'search-page',
+    'boat-sheet',
+    'photo-sheet',
+  ]) {
     expect(names).toContain(fileOf(screen));
     expect(files).not.toContain(fileOf(screen));
   }
