@@ -31,9 +31,9 @@ export class Phone {
     return this.device.page;
   }
 
-  /** Waits for the bar that tells how the record stands. */
-  async says(words: string | RegExp): Promise<void> {
-    await this.page.getByText(words).first().waitFor();
+  /** Waits until words stand on the screen. */
+  async says(words: string | RegExp, options: { timeout?: number } = {}): Promise<void> {
+    await this.page.getByText(words).first().waitFor(options);
   }
 
   async goesAlongside({ boat, stage }: Place): Promise<void> {
