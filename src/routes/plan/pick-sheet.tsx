@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import { CheckKey } from '#src/components/check-key.tsx';
+import { Fold } from '#src/components/fold.tsx';
 import { Hours } from '#src/components/hours.tsx';
 import { Key } from '#src/components/key.tsx';
 import { SelectField } from '#src/components/select-field.tsx';
@@ -89,24 +90,30 @@ interface StageTasksProps {
   onPick: (picked: PlannedLine[]) => void;
 }
 
-function StageTasks({ stage: { name, waitsFor, tasks }, picked, onPick }: StageTasksProps) {
+/** A stage's tasks; folded where it is not its turn. */
+function StageTasks({ stage, picked, onPick }: StageTasksProps) {
+  const { name, notNow, tasks } = stage;
+  const keys = tasks.map((line) => (
+    <CheckKey
+      key={line.row.id}
+      label={line.row.title}
+      note={<TaskNote line={line} />}
+      isChecked={picked.some(({ row }) => row.id === line.row.id)}
+      onChange={(isOn) =>
+        onPick(isOn ? [...picked, line] : picked.filter(({ row }) => row.id !== line.row.id))
+      }
+    />
+  ));
+  if (notNow)
+    return (
+      <Fold title={`${name} ${notNow} (${tasks.length})`}>
+        <div className="grid gap-3">{keys}</div>
+      </Fold>
+    );
   return (
     <fieldset className="grid gap-3">
-      <legend className="pb-2 font-semibold">
-        {name}
-        {waitsFor && <span className="font-normal text-slate"> · comes {waitsFor}, not finished</span>}
-      </legend>
-      {tasks.map((line) => (
-        <CheckKey
-          key={line.row.id}
-          label={line.row.title}
-          note={<TaskNote line={line} />}
-          isChecked={picked.some(({ row }) => row.id === line.row.id)}
-          onChange={(isOn) =>
-            onPick(isOn ? [...picked, line] : picked.filter(({ row }) => row.id !== line.row.id))
-          }
-        />
-      ))}
+      <legend className="pb-2 font-semibold">{name}</legend>
+      {keys}
     </fieldset>
   );
 }

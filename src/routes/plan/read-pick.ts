@@ -6,8 +6,8 @@ import { readPlanned, waitsFor, type PlannedLine } from './read-planned.ts';
 export interface StageToPick {
   stageId: string;
   name: string;
-  /** 'after Frames'; null where it may start */
-  waitsFor: string | null;
+  /** 'comes after Frames, not finished', 'is finished'; null where it may start or is under way */
+  notNow: string | null;
   tasks: PlannedLine[];
 }
 
@@ -28,7 +28,7 @@ export function readBoatsToPick(
 }
 
 /**
- * A boat's open tasks that the person does not have on that day, by stage: what may start before what waits, in each
+ * A boat's open tasks that the person does not have on that day, by stage: what may start first, in each
  * what the person began or was named for first.
  */
 export function readPick(view: View, boatId: string, personId: string, day: Day): StageToPick[] {
@@ -39,17 +39,23 @@ export function readPick(view: View, boatId: string, personId: string, day: Day)
     .all('stage')
     .filter((stage) => stage.boatId === boatId && !stage.struck)
     .sort((a, b) => a.order - b.order)
-    .map(({ id, name }) => ({
+    .map(({ id, name, done }) => ({
       stageId: id,
       name,
-      waitsFor: waitsFor(view, id),
+      notNow: notNow(view, id, done),
       tasks: open
         .filter(({ stageId }) => stageId === id)
         .sort((a, b) => nearness(b, personId) - nearness(a, personId) || (a.id < b.id ? -1 : 1))
         .map((task) => readPlanned(view, task, null)),
     }))
     .filter(({ tasks }) => tasks.length > 0)
-    .sort((a, b) => Number(a.waitsFor !== null) - Number(b.waitsFor !== null));
+    .sort((a, b) => Number(a.notNow !== null) - Number(b.notNow !== null));
+}
+
+function notNow(view: View, stageId: string, isFinished: boolean): string | null {
+  if (isFinished) return 'is finished';
+  const before = waitsFor(view, stageId);
+  return before && `comes ${before}, not finished`;
 }
 
 function openTasks(view: View, boatId: string): TaskRow[] {

@@ -45,10 +45,39 @@ export function StageBlock({ stage, keys, onOpen }: StageBlockProps) {
   );
   return (
     <li className="bg-plank px-4 py-3 md:px-6">
-      <StageHead stage={stage} />
-      {isFolded && hasInside(stage, keys) && <Fold title={taskCount(stage)}>{tasks}</Fold>}
-      {!isFolded && tasks}
+      {isFolded && hasInside(stage, keys) ? (
+        <Folded head={<StageHead stage={stage} />}>{tasks}</Folded>
+      ) : (
+        <>
+          <StageHead stage={stage} />
+          {tasks}
+        </>
+      )}
     </li>
+  );
+}
+
+/** A stage under its head: a long list of work keeps to a screen or two. */
+function Folded({ head, children }: { head: ReactNode; children: ReactNode }) {
+  return (
+    <details className="group">
+      <summary className="-my-3 grid min-h-[68px] cursor-pointer grid-cols-[20px_minmax(0,1fr)] items-center gap-3 py-3 hover:underline">
+        <svg
+          className="group-open:rotate-90"
+          width="20"
+          height="20"
+          viewBox="0 0 24 24"
+          fill="none"
+          stroke="currentColor"
+          strokeWidth="2.6"
+          aria-hidden="true"
+        >
+          <path d="M8 4l8 8-8 8" />
+        </svg>
+        {head}
+      </summary>
+      <div className="pt-5">{children}</div>
+    </details>
   );
 }
 
@@ -64,19 +93,16 @@ function taskCount({ open, done }: StageOfOrder): string {
 
 function StageHead({ stage }: { stage: StageOfOrder }) {
   const { row, state, finished, waitsFor, minutes, estimateMinutes } = stage;
-  const isPlain = state === 'under-way' || state === 'free';
-  const words = [finished, state === 'finished' ? null : waitsFor, isPlain && taskCount(stage)].filter(
-    Boolean,
-  );
+  const words = [finished, state === 'finished' ? null : waitsFor, taskCount(stage)].filter(Boolean);
   return (
-    <div className="flex flex-wrap items-baseline justify-between gap-x-4">
+    <div className="flex flex-wrap items-baseline justify-between gap-x-4 sm:flex-nowrap">
       <div className="min-w-0 break-words">
         <h2 className="text-[20px] leading-snug font-bold">
           {row.name} {state !== 'finished' && <StateWord state={state} />}
         </h2>
         <p className="leading-snug text-slate">{words.join(' · ')}</p>
       </div>
-      <p className="font-semibold">
+      <p className="shrink-0 font-semibold">
         <HoursAgainst minutes={minutes} estimateMinutes={estimateMinutes} />
       </p>
     </div>

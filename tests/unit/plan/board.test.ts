@@ -111,10 +111,10 @@ describe('what is offered', () => {
     await record.say(rosa, 'task.mark', { taskId: done, markId: record.newId(), workDate: MONDAY });
     const stages = readPick(record.viewAs(orrin), boatId, rosa.personId, TUESDAY);
     expect(
-      stages.map(({ name, waitsFor, tasks }) => [name, waitsFor, tasks.map(({ row }) => row.title)]),
+      stages.map(({ name, notNow, tasks }) => [name, notNow, tasks.map(({ row }) => row.title)]),
     ).toEqual([
       ['Strip', null, ['Scrape the transom', 'Draw the screws']],
-      ['Deck', 'after Strip', ['Lay the king plank']],
+      ['Deck', 'comes after Strip, not finished', ['Lay the king plank']],
     ]);
   });
 
