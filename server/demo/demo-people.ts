@@ -24,16 +24,17 @@ export const DEMO_SHOP: ShopWords = { name: 'Hornbeam Slip Boat Shop', currency:
 export type PersonKey =
   'orrin' | 'imelda' | 'rosa' | 'wes' | 'tamsin' | 'hob' | 'lenny' | 'ottilie' | 'castor';
 
+/** Whoever has several roles comes last: the first account that is printed for a role then has that one alone. */
 export const DEMO_PEOPLE: Record<PersonKey, DemoPerson> = {
   orrin: { name: 'Orrin', email: 'orrin@hornbeam.example', roles: ['foreman'] },
   imelda: { name: 'Imelda', email: 'imelda@hornbeam.example', roles: ['office'] },
   rosa: { name: 'Rosa', email: 'rosa@hornbeam.example', roles: ['crew'] },
   wes: { name: 'Wes', email: 'wes@hornbeam.example', roles: ['crew'] },
-  tamsin: { name: 'Tamsin', email: 'tamsin@hornbeam.example', roles: ['crew', 'owner'] },
   hob: { name: 'Hob', email: 'hob@hornbeam.example', roles: ['crew'] },
   lenny: { name: 'Lenny', email: 'lenny@hornbeam.example', roles: ['crew'] },
   ottilie: { name: 'Ottilie Framm', email: 'ottilie@framm.example', roles: ['owner'] },
   castor: { name: 'Castor Wey', email: 'castor@wey.example', roles: ['owner'] },
+  tamsin: { name: 'Tamsin', email: 'tamsin@hornbeam.example', roles: ['crew', 'owner'] },
 };
 
 export type DeviceKey =

@@ -55,6 +55,13 @@ test('every account that is printed can sign in and has the role it is printed w
   }
 });
 
+test('the first account that is printed for a role is in one shop and has that role alone', async () => {
+  for (const wanted of ['crew', 'foreman', 'office', 'owner']) {
+    const answer = await signIn(demoAccounts().find(({ role }) => role === wanted)!.email);
+    expect((answer.body as { person: { roles: string[] } }).person.roles).toEqual([wanted]);
+  }
+});
+
 test('one e-mail is in two shops and is asked which', async () => {
   const answer = await signIn('castor@wey.example');
   expect(answer.status).toBe(409);
