@@ -5,12 +5,12 @@ import { keyLook } from '#src/components/key-look.ts';
 import { IconKey } from '#src/components/key.tsx';
 import { KeyRack, KeyRow } from '#src/components/page.tsx';
 import { useRead, useReplica } from '#src/replica/hooks.tsx';
-import { DoneUndo } from '#src/routes/alongside/done-undo.tsx';
 import type { Done } from '#src/routes/alongside/done.ts';
-import { OwnHoursSheet } from '#src/routes/alongside/lazy-sheets.ts';
-import { DRAFT_KEY, isWorthKeeping, readDraft } from '#src/routes/alongside/log/entry-draft.ts';
+import { DoneUndo, OwnHoursSheet } from '#src/routes/alongside/lazy-sheets.ts';
+import { DRAFT_KEY, readWaiting, waitingWords } from '#src/routes/alongside/log/waiting-draft.ts';
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 import { momentWords } from '#src/words/day-words.ts';
+import { listWords } from '#src/words/name-words.ts';
 
 interface AlongsideKeysProps {
   where: Where;
@@ -21,16 +21,18 @@ interface AlongsideKeysProps {
 
 /** The keys at the foot: log, photo, tick off, found, hours; and what was just held with the way back. */
 export function AlongsideKeys({ where, done, onDone }: AlongsideKeysProps) {
-  const kept = useKeptDraft();
+  const { isBegun, waiting } = useWaiting();
   const [isHours, setHours] = useState(false);
   return (
     <>
       <KeyRack>
-        {done && <DoneUndo key={done.done} done={done} onGone={() => onDone(null)} />}
-        {kept && <p>Not logged yet: your words of {kept}.</p>}
+        <Suspense fallback={null}>
+          {done && <DoneUndo key={done.done} done={done} onGone={() => onDone(null)} />}
+        </Suspense>
+        {waiting.length > 0 && <p>Not logged yet: {listWords(waiting)}.</p>}
         <Link to="/log" className={keyLook('main', 'great')}>
           <Icon name="entry" size={32} />
-          {kept ? 'Go on' : 'Log it'}
+          {isBegun ? 'Go on' : 'Log it'}
         </Link>
         <KeyRow>
           <RackLink to="/photos" icon="photo" word="Photo" />
@@ -64,12 +66,14 @@ function RackLink({ to, icon, word }: { to: string; icon: IconName; word: string
   );
 }
 
-/** When the words that wait on the form were last changed; null where none wait. */
-function useKeptDraft(): string | null {
-  const replica = useReplica();
-  return useRead(['kept draft'], (view) => {
-    const draft = readDraft(replica.draft.read(DRAFT_KEY));
-    if (!draft || !isWorthKeeping(draft) || !draft.keptAt) return null;
-    return view.find('entry', draft.entryId) ? null : momentWords(draft.keptAt, view.timeZone, view.today);
+/** What was begun and is not logged yet. */
+function useWaiting(): { isBegun: boolean; waiting: string[] } {
+  const { draft } = useReplica();
+  return useRead(['waiting'], (view) => {
+    const entry = readWaiting(draft.read(DRAFT_KEY));
+    const isBegun = entry !== null && !view.find('entry', entry.entryId);
+    const others = waitingWords({ photos: draft.read('photos'), found: draft.read('found') });
+    const words = isBegun ? `your words of ${momentWords(entry.keptAt, view.timeZone, view.today)}` : null;
+    return { isBegun, waiting: [...(words ? [words] : []), ...others] };
   });
 }

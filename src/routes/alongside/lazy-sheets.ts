@@ -6,3 +6,6 @@ export const BoatSheet = lazy(() =>
 );
 export const EarlierSheet = lazy(() => import('#src/routes/alongside/earlier-sheet.tsx'));
 export const OwnHoursSheet = lazy(() => import('#src/routes/alongside/own-hours-sheet.tsx'));
+export const DoneUndo = lazy(() =>
+  import('#src/routes/alongside/done-undo.tsx').then((module) => ({ default: module.DoneUndo })),
+);

@@ -1,12 +1,10 @@
-import { cleanup, configure, screen, waitFor, within } from '@testing-library/react';
+import { cleanup, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { CrewPhone } from '#tests/unit/screens/crew-phone.tsx';
 
 // What the keys under the line do, on the real replica over a real (in-memory) IndexedDB.
 
-// a screen's code is read from the disk when it is first opened
-configure({ asyncUtilTimeout: 5000 });
 const user = userEvent.setup();
 let crew: CrewPhone;
 

@@ -1,11 +1,14 @@
 import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
-import { cleanup, render } from '@testing-library/react';
+import { cleanup, configure, render } from '@testing-library/react';
 import { v7 } from 'uuid';
 import { MemoryRouter } from 'react-router-dom';
 import { ReplicaProvider } from '#src/replica/hooks.tsx';
 import { AppRoutes } from '#src/routes.tsx';
 import { MemoryServer } from '#tests/worlds/memory-server.ts';
 import { Phone, type Tab } from '#tests/worlds/phone.ts';
+
+// a screen's code is read from the disk when it is first opened
+configure({ asyncUtilTimeout: 5000 });
 
 const START_MS = Date.parse('2026-06-01T08:00:00Z');
 

@@ -1,12 +1,10 @@
-import { cleanup, configure, screen, waitFor, within } from '@testing-library/react';
+import { cleanup, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { CrewPhone } from '#tests/unit/screens/crew-phone.tsx';
 
 // Findings, what was found sound and photographs, on the real replica over a real (in-memory) IndexedDB.
 
-// a screen's code is read from the disk when it is first opened
-configure({ asyncUtilTimeout: 5000 });
 const user = userEvent.setup();
 let crew: CrewPhone;
 
@@ -213,4 +211,16 @@ test('photos of an entry are shown with it, and one is put right on its own page
   await user.type(await screen.findByRole('textbox', { name: 'Words under it' }), 'floor three');
   await user.click(within(screen.getByRole('dialog')).getByRole('button', { name: 'Change it' }));
   await waitFor(() => expect(photos()[0]!.caption).toBe('floor three'));
+});
+
+test('photos that were taken and not logged wait under the key', async () => {
+  crew.show('/photos');
+  await choose('a.jpg', 'b.jpg');
+  await waitFor(() => expect(crew.replica.draft.read('photos')).toMatchObject({ pictures: [{}, {}] }));
+  await user.click(screen.getByRole('link', { name: /^Back; your photos/ }));
+  expect(await screen.findByText('Not logged yet: 2 photos.')).toBeTruthy();
+  await user.click(screen.getByRole('link', { name: 'Photo' }));
+  await press('Log 2 photos');
+  await waitFor(() => expect(photos()).toHaveLength(2));
+  await waitFor(() => expect(screen.queryByText(/^Not logged yet/)).toBeNull());
 });

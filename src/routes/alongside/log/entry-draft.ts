@@ -8,8 +8,6 @@ import { keptPictureSchema } from '#src/routes/alongside/photos/kept-picture.ts'
 import type { Where } from '#src/routes/alongside/read-boats.ts';
 import { tooLongWords } from '#src/words/too-long.ts';
 
-export const DRAFT_KEY = 'log';
-
 /**
  * What is on the form before 'Log it'. Its ids are made with it, so that a log cut off halfway is not made twice.
  * A part that an older version kept differently is left out, never the words.

@@ -5,13 +5,13 @@ import { useReplica } from '#src/replica/hooks.tsx';
 import type { KeptPicture } from '#src/replica/photos/picture.ts';
 import type { Replica } from '#src/replica/replica.ts';
 import {
-  DRAFT_KEY,
   draftProblems,
   emptyDraft,
   isWorthKeeping,
   readDraft,
   type EntryDraft,
 } from '#src/routes/alongside/log/entry-draft.ts';
+import { DRAFT_KEY } from '#src/routes/alongside/log/waiting-draft.ts';
 import { logEntry, untickedYet } from '#src/routes/alongside/log/log-entry.ts';
 import type { Done } from '#src/routes/alongside/done.ts';
 import { readCarried } from '#src/routes/alongside/place/carried.ts';
@@ -49,7 +49,12 @@ export function useEntryForm(where: Where, logFor: LogFor | null, onLogged: (don
     if (Object.keys(draftProblems(draft, replica.view().me.personId)).length === 0) logging.mutate();
   }
 
-  const keptNow = () => ({ keptAt: new Date(replica.view().nowMs).toISOString() });
+  /** Changes the draft; an empty one says that nothing waits on it. */
+  const changeTo = (make: (kept: EntryDraft) => EntryDraft) =>
+    changeBy((kept) => {
+      const next = make(kept);
+      return { ...next, keptAt: isWorthKeeping(next) ? new Date(replica.view().nowMs).toISOString() : null };
+    });
 
   return {
     draft,
@@ -62,14 +67,13 @@ export function useEntryForm(where: Where, logFor: LogFor | null, onLogged: (don
     failure: logging.error?.message ?? null,
     emptied,
     newId: () => replica.newId(),
-    change: (next: Partial<EntryDraft>) => changeBy((kept) => ({ ...kept, ...next, ...keptNow() })),
+    change: (next: Partial<EntryDraft>) => changeTo((kept) => ({ ...kept, ...next })),
     addPictures: (pictures: KeptPicture[]) =>
-      changeBy((kept) => ({ ...kept, pictures: [...kept.pictures, ...pictures], ...keptNow() })),
+      changeTo((kept) => ({ ...kept, pictures: [...kept.pictures, ...pictures] })),
     removePicture(picture: KeptPicture) {
-      changeBy((kept) => ({
+      changeTo((kept) => ({
         ...kept,
         pictures: kept.pictures.filter(({ photoId }) => photoId !== picture.photoId),
-        ...keptNow(),
       }));
       void replica.dropKept([picture]).catch(() => undefined);
     },
@@ -84,7 +88,10 @@ export function useEntryForm(where: Where, logFor: LogFor | null, onLogged: (don
       if (emptied) change(emptied);
       setEmptied(null);
     },
-    forgetEmptied: () => setEmptied(null),
+    forgetEmptied() {
+      if (emptied) void replica.dropKept(emptied.pictures).catch(() => undefined);
+      setEmptied(null);
+    },
   };
 }
 
