@@ -112,6 +112,22 @@ describe('attaching photos', () => {
     ).toEqual([]);
   });
 
+  test('room is made of what the server has, never of what it has not', async () => {
+    const { phone, shop } = await openPhone();
+    const room = { quota: 100_000_000, usage: 0 };
+    phone.storage = { persist: async () => true, persisted: async () => true, estimate: async () => room };
+    const { replica } = await openTab(phone);
+    const about = { boatId: shop.boatId };
+    await replica.attachPhotos(files('a.jpg'), about);
+    await replica.sendNow();
+    phone.network = OFFLINE;
+    await replica.attachPhotos(files('b.jpg'), about);
+    room.usage = room.quota;
+    expect((await replica.attachPhotos(files('c.jpg'), about)).failed).toHaveLength(1);
+    expect(await replica.picture(await shaOf('a.jpg'), 'full')).toBeNull();
+    expect(await textOf(await replica.picture(await shaOf('b.jpg'), 'full'))).toBe('b.jpg');
+  });
+
   test('a disk that is full after all is told of in words, with nothing half there', async () => {
     const { phone, replica, about } = await openPhone();
     phone.network = OFFLINE;
@@ -288,12 +304,12 @@ describe('sending pictures', () => {
   test('two tabs send each picture once', async () => {
     const { shop, phone, replica, about } = await openPhone();
     phone.network = OFFLINE;
+    await replica.attachPhotos(files('a.jpg', 'b.jpg', 'c.jpg', 'd.jpg'), about);
     const other = await openTab(phone);
-    await replica.attachPhotos(files('a.jpg', 'b.jpg'), about);
     phone.network = GOOD_NETWORK;
     await Promise.all([replica.sendNow(), other.replica.sendNow()]);
     await Promise.all([replica.sendNow(), other.replica.sendNow()]);
-    expect(shop.server.pictures.asked).toHaveLength(4);
+    expect(shop.server.pictures.asked).toHaveLength(8);
     expect(other.replica.syncState().heldPhotos).toBe(0);
   });
 
