@@ -24,5 +24,5 @@ interface PlanksProps {
 
 /** Rows laid edge to edge with a seam between them; holds Plank, or PlainPlank off the line. */
 export function Planks({ children }: PlanksProps) {
-  return <ul className="grid gap-seam bg-line py-seam">{children}</ul>;
+  return <ul className="grid grid-cols-[minmax(0,1fr)] gap-seam bg-line py-seam">{children}</ul>;
 }

@@ -25,8 +25,8 @@ export function TopBar({ places, right }: TopBarProps) {
       className="focus-deep flex min-h-[60px] items-stretch gap-4 bg-deep px-4 pt-[env(safe-area-inset-top)] text-on-deep md:px-6"
     >
       <NarrowNav places={places} />
-      <span className="hidden items-center text-[20px] font-bold lg:flex">Ribband</span>
-      <nav aria-label="Places" className="hidden items-stretch gap-1 lg:flex">
+      <span className="hidden items-center text-[20px] font-bold xl:flex">Ribband</span>
+      <nav aria-label="Places" className="hidden items-stretch gap-3 xl:flex">
         {places.map((place) => (
           <NavLink key={place.to} to={place.to} className={deskLink}>
             {place.label}
@@ -50,7 +50,7 @@ function NarrowNav({ places }: { places: readonly Place[] }) {
   const [isOpen, setOpen] = useState(false);
   const close = () => setOpen(false);
   return (
-    <div className="flex items-center lg:hidden">
+    <div className="flex items-center xl:hidden">
       <button
         type="button"
         className="-ml-3 flex min-h-key items-center gap-2 px-3 font-bold focus-visible:outline-offset-[-5px]"

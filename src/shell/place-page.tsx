@@ -58,20 +58,19 @@ function useRecordState() {
 function WhoAndRecord({ name }: { name: string }) {
   const { tone, left } = useRecordState();
   return (
-    <p>
+    <p className="flex flex-wrap items-center justify-end">
       <Link
         to="/me"
-        className="inline-flex min-h-key items-center px-1 font-semibold underline-offset-4 hover:underline"
+        className="inline-flex min-h-key min-w-key items-center justify-center px-1 font-semibold underline-offset-4 hover:underline"
       >
         {name}
       </Link>
       {tone === 'quiet' && (
         <>
-          <span aria-hidden="true"> · </span>
-          <Link
-            to="/held"
-            className="inline-flex min-h-key items-center px-1 underline-offset-4 hover:underline"
-          >
+          <span aria-hidden="true" className="w-[14px] text-center">
+            ·
+          </span>
+          <Link to="/held" className="inline-flex min-h-key items-center underline-offset-4 hover:underline">
             {left}
           </Link>
         </>

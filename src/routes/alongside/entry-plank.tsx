@@ -31,7 +31,7 @@ export function EntryPlank({ entry }: { entry: EntryItem }) {
       <PhotoStrip photos={entry.photos} />
       {entry.ticked.length > 0 && <p className="text-slate">Ticked off: {listWords(entry.ticked)}</p>}
       {entry.notes.map((note) => (
-        <div key={note.id} className="mt-2 border-l-[3px] border-bilge pl-3">
+        <div key={note.id} className="mt-3 border-l-[3px] border-bilge pl-3">
           <NoteParts note={note} author={entry.author} isInside />
         </div>
       ))}

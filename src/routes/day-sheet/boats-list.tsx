@@ -92,13 +92,13 @@ function StageBlock({ stage }: { stage: StageOnSheet }) {
 
 function BriefRow({ entry }: { entry: BriefEntry }) {
   return (
-    <li className="relative flex min-h-[36px] items-center py-[3px] pl-[44px]">
-      <span className="absolute top-[5px] left-[1px] z-20">
+    <li className="relative flex items-center pl-[44px]">
+      <span className="absolute left-[1px] z-20">
         <BungMark mark={entry.mark} />
       </span>
       <Link
         to={`/entry/${entry.id}`}
-        className={`min-w-0 flex-1 truncate py-[2px] hover:underline print:whitespace-normal ${entry.mark === 'struck' ? 'text-slate line-through' : ''}`}
+        className={`min-w-0 flex-1 truncate py-[10px] hover:underline print:py-0 print:whitespace-normal ${entry.mark === 'struck' ? 'text-slate line-through' : ''}`}
       >
         <People entry={entry} /> <span className="text-slate">·</span> <BriefNotes entry={entry} />
         {entry.text}

@@ -99,7 +99,7 @@ function SplitKey({ entry, onSplit }: { entry: EntryLine; onSplit: (entryId: str
     <button
       type="button"
       aria-haspopup="dialog"
-      className="flex min-h-key items-center text-[16px] text-slate underline underline-offset-4 order-first mr-auto sm:order-none sm:mr-0 sm:min-h-9"
+      className="flex min-h-key items-center text-[16px] text-slate underline underline-offset-4 order-first mr-auto sm:order-none sm:mr-0 sm:min-h-11"
       onClick={() => onSplit(entry.id)}
     >
       Split or move<span className="sr-only"> the entry on {entry.boatName}</span>

@@ -63,7 +63,7 @@ function End({ end, onSettle }: EndProps) {
           <h3 className="leading-snug font-bold">{end.about}</h3>
           <p className="text-[16px] leading-snug break-words text-slate">
             {end.entryId ? (
-              <Link to={`/entry/${end.entryId}`} className="underline">
+              <Link to={`/entry/${end.entryId}`} className="py-1 underline">
                 {end.of}
               </Link>
             ) : (

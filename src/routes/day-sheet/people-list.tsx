@@ -134,7 +134,7 @@ function NothingYet({ person, day }: { person: PersonOnSheet; day: string }) {
   const isForeman = useMe()?.roles.includes('foreman') ?? false;
   return (
     <div className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2 pb-1 lg:pl-[44px]">
-      <p className="min-w-[14em] flex-1 text-slate">{person.nothing!.words}</p>
+      <p className="min-w-[min(14em,100%)] flex-1 text-slate">{person.nothing!.words}</p>
       {isForeman && !person.isMe && (
         <div data-keys>
           <KeyLink to={`/log?for=${person.personId}&day=${day}`}>Log for {person.name}</KeyLink>

@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import { Fold } from '#src/components/fold.tsx';
 import { Key } from '#src/components/key.tsx';
 import { Notice } from '#src/components/notice.tsx';
 import { Why } from '#src/components/why.tsx';
@@ -55,12 +56,19 @@ function SetAside({ line, onAsk }: { line: SetAsideOnSheet; onAsk: (choice: Aske
         </p>
         <p className="pt-1">{line.reason}</p>
       </div>
-      <details className="text-[16px] print:hidden">
-        <summary className="w-fit cursor-pointer py-1 text-verdigris underline">As it came</summary>
-        <pre className="max-h-[16em] overflow-auto border-2 border-line p-2 text-[14px] whitespace-pre-wrap">
-          {line.raw}
-        </pre>
-      </details>
+      <div className="print:hidden">
+        <Fold title="As it came">
+          {/* scrolled by the keyboard too */}
+          <pre
+            tabIndex={0}
+            aria-label="As it came"
+            role="region"
+            className="max-h-[16em] overflow-auto border-2 border-line p-2 text-[16px] whitespace-pre-wrap"
+          >
+            {line.raw}
+          </pre>
+        </Fold>
+      </div>
       {(line.mayAdmit || line.mayDismiss) && (
         <div className="flex gap-3">
           {line.mayAdmit && (

@@ -33,7 +33,7 @@ function Device({ line, onRevoke }: { line: DeviceLine; onRevoke: () => void }) 
   const isForeman = useMe()?.roles.includes('foreman') ?? false;
   return (
     <li className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2 bg-plank px-4 py-3 md:px-6">
-      <div className="min-w-[11em] flex-1 leading-snug break-words">
+      <div className="min-w-[min(11em,100%)] flex-1 leading-snug break-words">
         <h2 className="text-[20px] font-bold">
           {line.label}
           {line.isThis && <span className="font-normal text-slate"> (this one)</span>}
@@ -47,17 +47,17 @@ function Device({ line, onRevoke }: { line: DeviceLine; onRevoke: () => void }) 
         <p className="text-[16px] text-slate">
           {[line.version, ...line.notes, line.revoked].filter(Boolean).join(' · ')}
         </p>
-        {line.gap && (
-          <p className="mt-2 flex gap-2 border-l-[9px] border-redlead pl-3 font-semibold">
-            <Icon name="warning" className="mt-[1px]" />
-            {line.gap}
-          </p>
-        )}
       </div>
       {isForeman && !line.revoked && !line.isThis && (
         <Key onClick={onRevoke}>
           Shut out<span className="sr-only"> {line.label}</span>
         </Key>
+      )}
+      {line.gap && (
+        <p className="flex w-full gap-2 border-l-[9px] border-redlead pl-3 leading-snug font-semibold">
+          <Icon name="warning" className="mt-[1px]" />
+          {line.gap}
+        </p>
       )}
     </li>
   );

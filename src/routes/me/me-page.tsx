@@ -41,7 +41,7 @@ export default function MePage() {
         </div>
       </Section>
       <Section title={`This ${device}`}>
-        <dl className="grid gap-3 px-4 md:px-6">
+        <dl className="grid grid-cols-[minmax(0,1fr)] gap-3 px-4 md:px-6">
           <Fact term="Called" words={me.deviceLabel ?? 'not heard by the server yet'} />
           {me.email && <Fact term="Your e-mail" words={me.email} />}
           <Fact term="What is held here" words={storageWords(storage, device)} />

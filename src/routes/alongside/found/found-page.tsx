@@ -20,7 +20,14 @@ export default function FoundPage() {
   const [openedAt] = useState(entry?.where ?? where);
   if (!openedAt) {
     return (
-      <Page bars={<BackBar title="Found" to="/alongside" backWord="Back to Alongside" />}>
+      <Page
+        bars={
+          <>
+            <title>Found · Ribband</title>
+            <BackBar title="Found" to="/alongside" backWord="Back to Alongside" />
+          </>
+        }
+      >
         <Empty>No boat is here yet to find anything on.</Empty>
       </Page>
     );

@@ -17,7 +17,14 @@ export default function LogPage() {
   const [openedAt] = useState(where);
   if (!openedAt) {
     return (
-      <Page bars={<BackBar title="Log it" to="/alongside" backWord="Back to Alongside" />}>
+      <Page
+        bars={
+          <>
+            <title>Log it · Ribband</title>
+            <BackBar title="Log it" to="/alongside" backWord="Back to Alongside" />
+          </>
+        }
+      >
         <Empty>No boat is here yet to log on.</Empty>
       </Page>
     );

@@ -11,7 +11,7 @@ export function WordsFields({ draft, change, problem }: WordsFieldsProps) {
   const { notDone, text } = draft;
   if (!notDone) {
     return (
-      <div className="grid gap-1">
+      <div className="grid gap-2">
         <TextBox
           label="What did you do?"
           rows={4}

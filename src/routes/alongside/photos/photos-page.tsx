@@ -31,7 +31,14 @@ export default function PhotosPage() {
   const back = of.findingId ? `/finding/${of.findingId}` : of.entryId ? `/entry/${of.entryId}` : '/alongside';
   if (!openedAt) {
     return (
-      <Page bars={<BackBar title="Photo" to="/alongside" backWord="Back to Alongside" />}>
+      <Page
+        bars={
+          <>
+            <title>Photo · Ribband</title>
+            <BackBar title="Photo" to="/alongside" backWord="Back to Alongside" />
+          </>
+        }
+      >
         <Empty>No boat is here yet to take a photo of.</Empty>
       </Page>
     );

@@ -22,7 +22,14 @@ export default function TasksPage() {
   const [where] = useWhere();
   if (where) return <Tasks where={where} />;
   return (
-    <Page bars={<BackBar title="Tick off" to="/alongside" backWord="Back to Alongside" />}>
+    <Page
+      bars={
+        <>
+          <title>Tick off · Ribband</title>
+          <BackBar title="Tick off" to="/alongside" backWord="Back to Alongside" />
+        </>
+      }
+    >
       <Empty>No boat is here yet.</Empty>
     </Page>
   );
@@ -77,9 +84,11 @@ function Tasks({ where }: { where: Where }) {
       {where.stageId && <AddTask boatId={where.boatId} stageId={where.stageId} />}
       {elsewhere.length > 0 && (
         <Section title="Her other stages">
-          {elsewhere.map((group) => (
-            <OtherGroup key={group.stageId} group={group} doings={doings} />
-          ))}
+          <div className="grid gap-3">
+            {elsewhere.map((group) => (
+              <OtherGroup key={group.stageId} group={group} doings={doings} />
+            ))}
+          </div>
         </Section>
       )}
     </Page>

@@ -8,7 +8,7 @@ import type { Week, WeekCell } from './read-week.ts';
 
 // on a phone the sums stand under the names, where seven days leave no room for an eighth column
 const NAME_CELL =
-  'w-[92px] bg-plank py-2 pr-1 pl-3 text-left align-middle leading-tight hyphens-auto md:w-[190px] md:pl-4';
+  'w-[106px] bg-plank py-2 pr-1 pl-3 text-left align-middle leading-tight md:w-[190px] md:pl-4';
 const SUM_CELL = 'hidden bg-plank px-3 text-right text-[22px] font-bold md:table-cell';
 
 /** People by days: a tap on a cell opens that day. */
@@ -44,7 +44,7 @@ export function BoatsTable({ week }: { week: Week }) {
           <th scope="row" className={NAME_CELL}>
             <Link
               to={`/work/${id}`}
-              className="inline-flex min-h-10 items-center text-mahogany hover:underline"
+              className="inline-flex min-h-11 items-center text-mahogany hover:underline"
             >
               <NameAndSum name={name} minutes={minutes} />
             </Link>
