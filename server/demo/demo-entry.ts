@@ -1,13 +1,16 @@
 import type { HoursKind } from '#shared/entry/hours.ts';
-import type { BoatKey } from './demo-boats.ts';
+import type { BoatKey } from './demo-work.ts';
+import type { When } from './demo-days.ts';
 import type { PersonKey } from './demo-people.ts';
 
 /** Hours, and the kind where the author proposed one. */
 export type Figure = number | [number, HoursKind];
 
 export interface DemoEntry {
-  /** the working day it was written on and is about, counted back from today */
-  day: number;
+  /** the day it was written on */
+  day: When;
+  /** the day it is about, where that is another */
+  about?: When;
   time: string;
   author: PersonKey;
   boat: BoatKey;
@@ -19,17 +22,17 @@ export interface DemoEntry {
 }
 
 type Line = [
-  day: number,
+  day: When,
   time: string,
   author: PersonKey,
   text: string,
   hours: DemoEntry['hours'],
-  key?: string,
+  more?: string | { key?: string; about?: When },
 ];
 
 /** Entries about one stage, a line each. */
 export function linesAbout(boat: BoatKey, stage: string, lines: Line[]): DemoEntry[] {
-  return lines.map(([day, time, author, text, hours, key]) => ({
+  return lines.map(([day, time, author, text, hours, more]) => ({
     day,
     time,
     author,
@@ -37,6 +40,11 @@ export function linesAbout(boat: BoatKey, stage: string, lines: Line[]): DemoEnt
     stage,
     text,
     hours,
-    ...(key ? { key } : {}),
+    ...(typeof more === 'string' ? { key: more } : more),
   }));
+}
+
+/** By what an entry is found again: its key, or who wrote it, when: `rosa/-20/11:50`. */
+export function nameOf({ key, author, day, time }: DemoEntry): string {
+  return key ?? `${author}/${day}/${time}`;
 }

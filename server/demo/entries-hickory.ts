@@ -2,7 +2,7 @@ import { linesAbout, type DemoEntry } from './demo-entry.ts';
 
 /** Hickory Moon's four weeks: stripped upside down, and her ribs. */
 export const HICKORY_ENTRIES: DemoEntry[] = [
-  ...linesAbout('hickory', 'strip', [
+  ...linesAbout('hickory', 'strip_paint', [
     [
       -20,
       '15:45',
@@ -94,7 +94,7 @@ export const HICKORY_ENTRIES: DemoEntry[] = [
     [-2, '15:30', 'hob', 'Third one out. Fourth wont shift, heat on it tomorrow.', { hob: 7.5 }],
     [-1, '11:40', 'hob', 'Fourth bolt out with heat and bad words.', { hob: 4 }],
   ]),
-  ...linesAbout('hickory', 'laps', [
+  ...linesAbout('hickory', 'lap_bed', [
     [-5, '15:45', 'lenny', 'Cleaned lap three port, most of it.', { lenny: 6.5 }],
     [-4, '15:30', 'lenny', 'Lap three finished, started four.', { lenny: 7 }],
     [

@@ -2,7 +2,7 @@ import { linesAbout, type DemoEntry } from './demo-entry.ts';
 
 /** Penny Candle's four weeks: opened up, and her floors and ribs mended. */
 export const PENNY_ENTRIES: DemoEntry[] = [
-  ...linesAbout('penny', 'survey', [
+  ...linesAbout('penny', 'survey_open', [
     [
       -20,
       '11:50',
@@ -116,7 +116,7 @@ export const PENNY_ENTRIES: DemoEntry[] = [
       { rosa: 3 },
     ],
   ]),
-  ...linesAbout('penny', 'frames', [
+  ...linesAbout('penny', 'frame_repair', [
     [
       -13,
       '15:55',

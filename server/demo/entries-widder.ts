@@ -116,7 +116,7 @@ export const WIDDER_ENTRIES: DemoEntry[] = [
       { tamsin: 0.75 },
     ],
   ]),
-  ...linesAbout('widder', 'seams', [
+  ...linesAbout('widder', 'pay_seams', [
     [-17, '15:35', 'lenny', 'Raking seams starboard side deck. Half way.', { lenny: 6 }],
     [-12, '15:40', 'lenny', 'Raked the rest of starboard and started port, broke one hook.', { lenny: 7 }],
     [

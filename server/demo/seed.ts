@@ -10,6 +10,7 @@ import type { Database } from '#server/models/database.ts';
 import { query } from '#server/models/query.ts';
 import { readBatchFrom, readDevice, type Sender } from '#server/sync/batch-from.ts';
 import { hearDevice } from '#server/sync/hear-device.ts';
+import type { PictureStore } from '#server/photos/store.ts';
 import { PostgresStore } from '#server/sync/postgres-store.ts';
 import { version } from '#server/version.ts';
 import {
@@ -24,6 +25,8 @@ import {
 import type { DemoDeviceLine } from './demo-heard.ts';
 import { makeDemoRecord, type DemoRecord } from './demo-record.ts';
 import type { DemoBatch } from './demo-script.ts';
+import type { Pictures } from './pictures/develop.ts';
+import { keepPictures, noteArrivals, type KeptPictures } from './put-pictures.ts';
 import { makeSecondRecord } from './second-record.ts';
 
 export interface DemoAccount {
@@ -37,6 +40,13 @@ interface ShopToSeed {
   words: ShopWords;
   people: Record<string, DemoPerson>;
   record: DemoRecord<string>;
+  pictures: KeptPictures;
+}
+
+/** The demo's pictures and where they are to be kept. */
+export interface DemoAlbum {
+  pictures: Pictures;
+  store: PictureStore;
 }
 
 /** The demo's shops: the same in every database, so that a later start knows them again. */
@@ -44,18 +54,34 @@ export const DEMO_SHOP_ID = '019b0000-0000-7000-8000-68726e626d01';
 const SECOND_SHOP_ID = '019b0000-0000-7000-8000-74656173656c';
 
 /**
- * Makes the demo's two shops, their people and their weeks of work up to an hour before `now`, in one transaction.
- * What the devices said goes through the real merge, with the clock at the time it was heard.
+ * Makes the demo's two shops, their people and their months of work up to an hour before `now`, in one transaction.
+ * What the devices said goes through the real merge, with the clock at the time it was heard. Without an album there are no photos.
  */
-export async function seedDemo(database: Database, now: number, timeZone: string): Promise<DemoAccount[]> {
+export async function seedDemo(
+  database: Database,
+  now: number,
+  timeZone: string,
+  album?: DemoAlbum,
+): Promise<DemoAccount[]> {
+  // the bytes first: rows must not tell of what is not there
+  const pictures = album
+    ? await keepPictures(album.store, DEMO_SHOP_ID, album.pictures)
+    : new Map<string, never>();
   const passwordHash = await hashPassword(DEMO_PASSWORD);
   const shops: ShopToSeed[] = [
-    { shopId: DEMO_SHOP_ID, words: DEMO_SHOP, people: DEMO_PEOPLE, record: makeDemoRecord(now, timeZone) },
+    {
+      shopId: DEMO_SHOP_ID,
+      words: DEMO_SHOP,
+      people: DEMO_PEOPLE,
+      record: await makeDemoRecord(now, timeZone, album?.pictures),
+      pictures,
+    },
     {
       shopId: SECOND_SHOP_ID,
       words: SECOND_SHOP,
       people: SECOND_PEOPLE,
       record: makeSecondRecord(now, timeZone),
+      pictures: new Map(),
     },
   ];
   await database.inShop(DEMO_SHOP_ID, async (transaction) => {
@@ -77,7 +103,7 @@ export function demoAccounts(): DemoAccount[] {
 async function seedShop(
   database: Database,
   transaction: Transaction,
-  { shopId, words, people, record }: ShopToSeed,
+  { shopId, words, people, record, pictures }: ShopToSeed,
   timeZone: string,
   passwordHash: string,
 ): Promise<void> {
@@ -86,7 +112,10 @@ async function seedShop(
     await addPerson(database, transaction, shopId, { ...people[key]!, id, passwordHash });
   }
   for (const device of record.devices) await addDevice(database, transaction, shopId, device);
-  for (const batch of record.batches) await takeIn(transaction, shopId, batch, timeZone);
+  for (const batch of record.batches) {
+    await noteArrivals(transaction, shopId, batch, pictures);
+    await takeIn(transaction, shopId, batch, timeZone);
+  }
   for (const { boatId, personId } of record.owners)
     await setBoatOwners(database, transaction, shopId, boatId, [personId]);
   for (const device of record.devices) await hearLast(transaction, shopId, device);

@@ -42,12 +42,14 @@ async function start(stopping: Stopping): Promise<void> {
   stopping.before(() => database.close());
 
   const { timeZone } = Intl.DateTimeFormat().resolvedOptions();
+  const pictures = await openPictureFolder(path.join(environment.dataDir, 'pictures'));
   const ways = await waysIn(database, {
+    pictures,
     isDemoWanted: environment.isDemoWanted,
     nowMs: Date.now(),
     timeZone,
+    tell: (line) => console.log(line),
   });
-  const pictures = await openPictureFolder(path.join(environment.dataDir, 'pictures'));
   const log = pino();
   const hails = new Hails({ url: databaseUrl, database, log });
   await judgeAllAgain({ database, log, onChanged: (shopId, seq) => hails.announce(shopId, seq) });

@@ -1,5 +1,6 @@
 import { DEMO_DEVICES, DEMO_PEOPLE, DEMO_SHOP, type PersonKey } from '#server/demo/demo-people.ts';
 import { makeDemoRecord, type DemoRecord } from '#server/demo/demo-record.ts';
+import type { Pictures } from '#server/demo/pictures/develop.ts';
 import type { Role } from '#shared/identity/role.ts';
 import { MemoryStore } from '#shared/sync/memory-store.ts';
 import { mergeBatch, type Outcome } from '#shared/sync/merge.ts';
@@ -18,8 +19,11 @@ export interface DemoWorld {
 }
 
 /** The demo shop's record in memory, as the foreman's laptop shows it at `nowMs`. */
-export async function demoWorld(nowMs: number, as: PersonKey = 'orrin'): Promise<DemoWorld> {
-  const record = makeDemoRecord(nowMs, DEMO_ZONE);
+export async function demoWorld(
+  nowMs: number,
+  { as = 'orrin', pictures }: { as?: PersonKey; pictures?: Pictures } = {},
+): Promise<DemoWorld> {
+  const record = await makeDemoRecord(nowMs, DEMO_ZONE, pictures);
   const store = new MemoryStore();
   putShop(store, record);
   const outcomes: Outcome[] = [];
