@@ -170,18 +170,21 @@ describe('the day sheet in a browser', () => {
     await page.getByRole('button', { name: 'Add her' }).click();
     await page.getByRole('heading', { name: 'Nutmeg Belle', level: 1 }).waitFor();
     await page.getByText('17 ft 6 in').waitFor();
+    await page.getByRole('link', { name: 'Her order of work' }).click();
     await page.getByRole('button', { name: 'Add a stage' }).click();
     await page.getByLabel('Name', { exact: true }).fill('Strip out');
     await page.getByRole('button', { name: 'Add it' }).click();
     await page.getByRole('button', { name: 'Add a task to Strip out' }).click();
     await page.getByLabel('What is to be done').fill('Thwarts out');
     await page.getByRole('button', { name: 'Add it' }).click();
-    await page.getByText('0 of 1 task done').waitFor();
+    await page.getByText('0 of 1 task done').first().waitFor();
     await page.getByRole('button', { name: 'Stage finished Strip out' }).click();
+    await page.getByRole('button', { name: 'Finished all the same' }).click();
     await page.getByText(/^finished .* by you/).waitFor();
   });
 
   test('names the owner of a boat', async () => {
+    await page.getByRole('link', { name: 'Her particulars' }).click();
     await page.getByRole('button', { name: 'Change', exact: true }).nth(1).click();
     await page.getByText('Ottilie Framm').click();
     await page.getByRole('button', { name: 'Set her owners' }).click();

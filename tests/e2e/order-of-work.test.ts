@@ -56,6 +56,7 @@ it('a list of work made without signal reaches the server whole', async () => {
   await page.getByRole('heading', { name: 'Sedge Warbler', level: 1 }).waitFor();
 
   await context.setOffline(true);
+  await page.getByRole('link', { name: 'Her order of work' }).click();
   await page.getByRole('button', { name: 'Make her list from a template' }).click();
   await page.getByText('Painted lapstrake hull, 18-24 ft').click();
   await page.getByLabel('How many ribs are to be made').fill('12');

@@ -145,16 +145,16 @@ describe('the order of work', () => {
     await page.getByRole('link', { name: 'Penny Candle' }).click();
     const stage = (name: string) =>
       page.locator('li').filter({ has: page.getByRole('heading', { name, level: 2 }) });
-    await page.getByRole('button', { name: 'Stage finished Frames and floors' }).click();
+    await page.getByRole('button', { name: 'Stage finished Framing and backbone repair' }).click();
     await page
       .getByRole('dialog')
       .getByText(/^Still open: \d+ tasks/)
       .waitFor();
     await page.getByRole('button', { name: 'Finished all the same' }).click();
-    await stage('Topsides').getByText('may start now').waitFor();
-    await stage('Frames and floors').locator('summary').first().click();
-    await page.getByRole('button', { name: 'Take it up again Frames and floors' }).click();
-    await stage('Topsides').getByText('waits', { exact: true }).waitFor();
+    await stage('Topsides and transom').getByText('may start now').waitFor();
+    await stage('Framing and backbone repair').locator('summary').first().click();
+    await page.getByRole('button', { name: 'Take it up again Framing and backbone repair' }).click();
+    await stage('Topsides and transom').getByText('waits', { exact: true }).waitFor();
   });
 
   test('has a task added by one of the crew, started and ticked off, and undone', async () => {
@@ -162,7 +162,7 @@ describe('the order of work', () => {
     const own = await signIn(phone, 'rosa');
     await own.goto('/work');
     await own.getByRole('link', { name: 'Penny Candle' }).click();
-    await own.getByRole('button', { name: 'Add a task to Frames and floors' }).click();
+    await own.getByRole('button', { name: 'Add a task to Framing and backbone repair' }).click();
     await own.getByLabel('What is to be done').fill('Oil the new ribs');
     await own.getByRole('button', { name: 'Add it' }).click();
     const task = own.getByRole('button', { name: /Oil the new ribs/ });

@@ -33,7 +33,7 @@ export function Thumb({ sha256, words, onOpen }: ThumbProps) {
   );
   if (!onOpen) return <span className={BOX}>{inside}</span>;
   return (
-    <button type="button" className={BOX} onClick={onOpen}>
+    <button type="button" data-print className={BOX} onClick={onOpen}>
       {inside}
     </button>
   );

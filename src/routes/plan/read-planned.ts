@@ -67,5 +67,5 @@ export function waitsFor(view: View, stageId: string): string | null {
   const before = (view.find('stage', stageId)?.after ?? [])
     .flatMap((id) => view.find('stage', id) ?? [])
     .filter(({ done, struck }) => !done && !struck);
-  return before.length > 0 ? `after ${listWords(before.map(({ name }) => name))}` : null;
+  return before.length > 0 ? `after ${before.map(({ name }) => name).join('; ')}` : null;
 }

@@ -7,6 +7,7 @@ import { Planks } from '#src/components/ribband.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
 import { DeedBar } from '#src/shell/deed-bar.tsx';
 import { PlacePage } from '#src/shell/place-page.tsx';
+import { counted } from '#src/words/day-words.ts';
 import { FinishSheet } from './finish-sheet.tsx';
 import { HoursAgainst } from './hours-against.tsx';
 import { readOrder, type OrderOfWork } from './read-order.ts';
@@ -62,7 +63,7 @@ function Head({ order }: { order: OrderOfWork }) {
           {boat.name}
         </h1>
         <p>
-          {count === 0 ? 'no tasks yet' : `${doneTasks} of ${count} tasks done`}
+          {count === 0 ? 'no tasks yet' : `${doneTasks} of ${counted(count, 'task')} done`}
           {(minutes > 0 || estimateMinutes !== null) && ' · '}
           <HoursAgainst minutes={minutes} estimateMinutes={estimateMinutes} />
         </p>

@@ -42,7 +42,7 @@ export function readStages(view: View, boatId: string): StageOfOrder[] {
       row,
       state: stateOf(row, before, logged > 0 || read.some(({ state }) => state !== 'open')),
       finished: finishedWords(view, row),
-      waitsFor: before.length > 0 ? `after ${listWords(before.map(({ name }) => name))}` : null,
+      waitsFor: before.length > 0 ? `after ${before.map(({ name }) => name).join('; ')}` : null,
       minutes: logged,
       estimateMinutes: estimateOf(lines),
       open: read.filter(({ state }) => state !== 'done'),

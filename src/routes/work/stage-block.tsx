@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { Fold } from '#src/components/fold.tsx';
 import { Key } from '#src/components/key.tsx';
+import { counted } from '#src/words/day-words.ts';
 import { HoursAgainst } from './hours-against.tsx';
 import type { StageOfOrder, StageState } from './read-stages.ts';
 import type { TaskOfOrder } from './read-task.ts';
@@ -88,7 +89,7 @@ function hasInside({ open, done }: StageOfOrder, keys: StageKeys): boolean {
 function taskCount({ open, done }: StageOfOrder): string {
   const count = open.length + done.length;
   if (count === 0) return 'No tasks in it';
-  return `${done.length} of ${count} ${count === 1 ? 'task' : 'tasks'} done`;
+  return `${done.length} of ${counted(count, 'task')} done`;
 }
 
 function StageHead({ stage }: { stage: StageOfOrder }) {

@@ -6,7 +6,8 @@ import { Section } from '#src/components/page.tsx';
 import { Planks } from '#src/components/ribband.tsx';
 import { useMe, useRead } from '#src/replica/hooks.tsx';
 import { PlacePage } from '#src/shell/place-page.tsx';
-import { listWords, openingWords } from '#src/words/name-words.ts';
+import { counted } from '#src/words/day-words.ts';
+import { openingWords } from '#src/words/name-words.ts';
 import { HoursAgainst } from './hours-against.tsx';
 import { readWork, type BoatAtWork } from './read-work.ts';
 
@@ -48,10 +49,10 @@ function Boat({ boat }: { boat: BoatAtWork }) {
         </p>
       </div>
       <p className="text-slate">
-        {taskCount === 0 ? 'no tasks yet' : `${boat.doneTasks} of ${taskCount} tasks done`}
+        {taskCount === 0 ? 'no tasks yet' : `${boat.doneTasks} of ${counted(taskCount, 'task')} done`}
       </p>
-      {boat.underWay.length > 0 && <Fact label="Under way">{listWords(boat.underWay)}</Fact>}
-      {boat.free.length > 0 && <Fact label="May start now">{listWords(boat.free)}</Fact>}
+      {boat.underWay.length > 0 && <Fact label="Under way">{boat.underWay.join('; ')}</Fact>}
+      {boat.free.length > 0 && <Fact label="May start now">{boat.free.join('; ')}</Fact>}
       {boat.started.map(({ row, words }) => (
         <Fact key={row.id} label="Started">
           {openingWords(row.title, 60)}{' '}
