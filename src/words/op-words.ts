@@ -1,11 +1,15 @@
+import type { FindingNote } from '#shared/finding/finding.ts';
+import type { SoundNote } from '#shared/sound/sound.ts';
 import { opSchema, type Op } from '#shared/sync/op.ts';
 import type { Entity } from '#shared/sync/row.ts';
 import type { View } from '#src/replica/view.ts';
 import { hoursText } from '#shared/measure/hours.ts';
 import { dayWords } from '#src/words/day-words.ts';
+import { findingTitle, soundTitle } from '#src/words/finding-words.ts';
 import { openingWords } from '#src/words/name-words.ts';
+import { placeWords } from '#src/words/place-words.ts';
 import { boatWords, whereWords } from '#src/words/where.ts';
-import { whoWords } from '#src/words/who.ts';
+import { capital, whoWords } from '#src/words/who.ts';
 
 /** What an op says, for a list of ops. */
 export interface OpInWords {
@@ -85,6 +89,7 @@ function carriedWords(view: View, op: Op): string {
   const { data } = op;
   const set = (data['set'] ?? {}) as Data;
   const parts = [
+    noteTitle(op),
     textOf(data['text']) ||
       textOf(set['text']) ||
       textOf(data['title']) ||
@@ -98,6 +103,15 @@ function carriedWords(view: View, op: Op): string {
     typeof data['why'] === 'string' && data['why'] ? `because: ${openingWords(data['why'])}` : '',
   ];
   return parts.filter(Boolean).join(' · ');
+}
+
+/** 'Rot, deck beam 4 port' of what was found, found sound or photographed. */
+function noteTitle({ kind, data }: Op): string {
+  // whatever was kept: an op of a newer version may have no such fields
+  const { kind: found = '', place = {}, about = null } = data as Partial<FindingNote & SoundNote>;
+  if (kind === 'finding.note') return findingTitle({ kind: found, place });
+  if (kind === 'sound.note') return soundTitle({ place, about });
+  return kind === 'photo.attach' ? capital(placeWords(place)) : '';
 }
 
 function textOf(value: unknown): string {

@@ -9,10 +9,12 @@ interface PhotoStripProps {
   photos: PhotoLine[];
   /** how many are shown at once; the rest are one tap away */
   shownMax?: number;
+  /** as wide as the page, for the page of one */
+  isLarge?: boolean;
 }
 
 /** Photographs in a row under what they belong to; a tap shows one whole. */
-export function PhotoStrip({ photos, shownMax = 4 }: PhotoStripProps) {
+export function PhotoStrip({ photos, shownMax = 4, isLarge = false }: PhotoStripProps) {
   const [openId, setOpenId] = useState<string | null>(null);
   if (photos.length === 0) return null;
   const shown = photos.slice(0, shownMax);
@@ -20,10 +22,14 @@ export function PhotoStrip({ photos, shownMax = 4 }: PhotoStripProps) {
   return (
     // above the link that the whole plank answers for
     <div className="relative z-10 my-2">
-      <ul className="grid grid-cols-2 gap-3 md:grid-cols-4">
-        {shown.map((photo) => (
+      <ul className={`grid gap-3 ${isLarge ? '' : 'grid-cols-2 md:grid-cols-4'}`}>
+        {shown.map((photo, index) => (
           <li key={photo.id}>
-            <Thumb sha256={photo.sha256} words={photo.words} onOpen={() => setOpenId(photo.id)} />
+            <Thumb
+              sha256={photo.sha256}
+              words={photos.length > 1 ? `${photo.words}, ${index + 1} of ${photos.length}` : photo.words}
+              onOpen={() => setOpenId(photo.id)}
+            />
           </li>
         ))}
       </ul>

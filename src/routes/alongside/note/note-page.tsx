@@ -83,7 +83,7 @@ function Body({ page }: { page: NotePage }) {
         <p className="text-[20px] leading-snug break-words whitespace-pre-line">{page.words}</p>
       )}
       <p className="text-slate">{page.said}</p>
-      <PhotoStrip photos={page.photos} shownMax={12} />
+      <PhotoStrip photos={page.photos} shownMax={12} isLarge={page.entity === 'photo'} />
       {page.struck && <p className="font-semibold">{page.struck}</p>}
       {page.links.map(({ to, words }) => (
         <Link
