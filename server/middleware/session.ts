@@ -1,10 +1,9 @@
 import type { Request, RequestHandler } from 'express';
 import type { Role } from '#shared/identity/role.ts';
-import { readAccessToken } from '#server/identity/access-token.ts';
+import { readAccessToken, type Bearer } from '#server/identity/access-token.ts';
 import { installationSecret } from '#server/identity/installation.ts';
 import { Problem } from '#server/middleware/problem.ts';
 import type { Database } from '#server/models/database.ts';
-import { query } from '#server/models/query.ts';
 import type { Parts } from '#server/parts.ts';
 
 /** Who asks. The roles are read anew at each request, so that a change of them holds at once. */
@@ -65,20 +64,21 @@ async function readSession(
   return { ...bearer, roles: standing.roles, isRevoked: standing.isRevoked };
 }
 
-function readStanding(
-  database: Database,
-  { shopId, personId, deviceId }: Pick<Session, 'shopId' | 'personId' | 'deviceId'>,
-) {
-  return database.inShop(shopId, async (transaction) => {
-    const [standing] = await query<{ roles: Role[]; hasLeft: boolean; isRevoked: boolean }>(
-      transaction,
-      `SELECT person.roles, person.left_at IS NOT NULL AS "hasLeft", device.revoked_at IS NOT NULL AS "isRevoked"
-       FROM people person JOIN devices device ON device.shop_id = person.shop_id
-       WHERE person.shop_id = $1 AND person.id = $2 AND device.id = $3`,
-      [shopId, personId, deviceId],
-    );
-    return standing;
-  });
+interface StandingLine {
+  roles: Role[];
+  hasLeft: boolean;
+  isRevoked: boolean;
+}
+
+const STANDING = `
+  SELECT person.roles, person.left_at IS NOT NULL AS "hasLeft", device.revoked_at IS NOT NULL AS "isRevoked"
+  FROM people person JOIN devices device ON device.shop_id = person.shop_id
+  WHERE person.shop_id = :shopId AND person.id = :personId AND device.id = :deviceId`;
+
+async function readStanding(database: Database, bearer: Bearer): Promise<StandingLine | undefined> {
+  const { shopId, personId, deviceId } = bearer;
+  const [standing] = await database.readInShop<StandingLine>(shopId, STANDING, { shopId, personId, deviceId });
+  return standing;
 }
 
 function unauthorised(detail: string): Problem {

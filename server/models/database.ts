@@ -1,12 +1,8 @@
 import { Sequelize, type Transaction } from 'sequelize';
+import { readInShop, runInShop, type InShopOptions } from './shop-transaction.ts';
 import { defineModels, type Models } from './models.ts';
 
 const BIGINT_OID = 20;
-
-export interface InShopOptions {
-  isolationLevel?: Transaction.ISOLATION_LEVELS;
-  readOnly?: boolean;
-}
 
 export interface Database {
   sequelize: Sequelize;
@@ -17,6 +13,8 @@ export interface Database {
     work: (transaction: Transaction) => Promise<T>,
     options?: InShopOptions,
   ): Promise<T>;
+  /** Rows of one shop by one statement, with `values` as :name: in one round trip, in a transaction of its own. */
+  readInShop<Row>(shopId: string, sql: string, values: Record<string, string>): Promise<Row[]>;
   close(): Promise<void>;
 }
 
@@ -46,15 +44,8 @@ export function openDatabase(url: string, { connectionsMax = 10 } = {}): Databas
   return {
     sequelize,
     models: defineModels(sequelize),
-    inShop: (shopId, work, { isolationLevel, readOnly = false } = {}) =>
-      sequelize.transaction({ isolationLevel }, async (transaction) => {
-        if (readOnly) await sequelize.query('SET TRANSACTION READ ONLY', { transaction });
-        await sequelize.query(`SELECT set_config('ribband.shop_id', $1, true)`, {
-          bind: [shopId],
-          transaction,
-        });
-        return work(transaction);
-      }),
+    inShop: (shopId, work, options) => runInShop(sequelize, shopId, work, options),
+    readInShop: (shopId, sql, values) => readInShop(sequelize, shopId, sql, values),
     close: () => sequelize.close(),
   };
 }

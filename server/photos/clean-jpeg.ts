@@ -52,8 +52,8 @@ function isKept(marker: number, segment: Buffer): boolean {
 
 /** Where the marker after the coded pixels stands: within them, 0xff is followed by 0, by 0xff or by a restart's number. */
 function endOfScan(bytes: Buffer, from: number): number {
-  for (let at = from; at + 1 < bytes.length; at += 1) {
-    if (bytes[at] !== 0xff) continue;
+  // found natively: a scan is nearly all of a photo
+  for (let at = bytes.indexOf(0xff, from); at !== -1 && at + 1 < bytes.length; at = bytes.indexOf(0xff, at + 1)) {
     const next = bytes[at + 1]!;
     if (next !== 0 && next !== 0xff && (next < 0xd0 || next > 0xd7)) return at;
   }

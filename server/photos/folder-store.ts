@@ -35,8 +35,11 @@ class FolderStore implements PictureStore {
     try {
       await writeDurably(half, bytes);
       const file = this.fileOf(picture, size);
-      await makeFolder(path.dirname(file));
-      await rename(half, file);
+      // nearly always its folder is there
+      if ((await unlessMissing(rename(half, file).then(() => file))) === null) {
+        await makeFolder(path.dirname(file));
+        await rename(half, file);
+      }
       await syncFolder(path.dirname(file));
     } catch (error) {
       await rm(half, { force: true });

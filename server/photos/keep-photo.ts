@@ -43,8 +43,8 @@ async function noteAndTell(
   const { isNew, seq } = await database.inShop(shopId, async (transaction) => {
     // as the merge does, so that of bytes and op whichever comes second sees the other
     await lockShop(transaction, shopId);
-    const isNew = await noteArrival(transaction, arrival, read);
-    return { isNew, seq: isNew ? await tellArrival(transaction, arrival.photo) : null };
+    const noted = await noteArrival(transaction, arrival, read);
+    return { isNew: noted !== null, seq: noted && (await tellArrival(transaction, shopId, noted)) };
   });
   if (seq !== null) onChanged(shopId, seq);
   return { isNew };

@@ -80,6 +80,19 @@ describe('the app', () => {
     await one.close();
   });
 
+  test('sees the people of one shop by a single statement too, and forgets the shop with it, even where it fails', async () => {
+    const one = openDatabase(world.url, { connectionsMax: 1 });
+    const { shopId } = ours!;
+    const people = await one.readInShop<{ shop_id: string }>(shopId, 'SELECT shop_id FROM people WHERE id <> :but', {
+      but: ours!.people.crew.id,
+    });
+    expect(people).toEqual([1, 2, 3].map(() => ({ shop_id: shopId })));
+    expect(await one.models.Person.count()).toBe(0);
+    await expect(one.readInShop(shopId, 'SELECT 1 / 0 FROM people', {})).rejects.toThrow('division by zero');
+    expect(await one.models.Person.count()).toBe(0);
+    await one.close();
+  });
+
   test("cannot write another shop's row", async () => {
     const writing = world.database.inShop(ours!.shopId, (transaction) =>
       world.database.models.DevicePerson.create(

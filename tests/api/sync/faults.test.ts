@@ -174,7 +174,7 @@ describe('a database that is away', () => {
     await client.connect();
     const name = pathname.slice(1);
     await client.query(`ALTER DATABASE ${name} ALLOW_CONNECTIONS false`);
-    await client.query('SELECT pg_terminate_backend(pid) FROM pg_stat_activity WHERE datname = $1', [name]);
+    await client.query('SELECT pg_terminate_backend(pid, 10000) FROM pg_stat_activity WHERE datname = $1', [name]);
     expect((await sender.sync()).status).toBe(503);
     await client.query(`ALTER DATABASE ${name} ALLOW_CONNECTIONS true`);
     await client.end();
