@@ -54,7 +54,7 @@ function DayKeys({ sheet }: { sheet: DaySheet }) {
   const suffix = search.size > 0 ? `?${search}` : '';
   const { previous, next, previousWords, nextWords } = readNeighbours(sheet.day);
   return (
-    <div data-keys className="grid w-full auto-cols-fr grid-flow-col gap-3 sm:flex sm:w-auto">
+    <div data-keys className="flex w-full flex-wrap gap-3 *:flex-1 sm:w-auto sm:*:flex-none">
       <KeyLink to={`/day/${previous}${suffix}`} className={DAY_KEY}>
         <span className="sr-only">The day before, </span>
         {shortDay(previousWords)}

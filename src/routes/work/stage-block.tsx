@@ -37,9 +37,11 @@ export function StageBlock({ stage, keys, onOpen }: StageBlockProps) {
       <Tasks tasks={open} onOpen={onOpen} />
       {state === 'finished' && <Tasks tasks={done} onOpen={onOpen} />}
       {state !== 'finished' && done.length > 0 && (
-        <Fold title={`${done.length} done`}>
-          <Tasks tasks={done} onOpen={onOpen} />
-        </Fold>
+        <div className="pt-3">
+          <Fold title={`${done.length} done`}>
+            <Tasks tasks={done} onOpen={onOpen} />
+          </Fold>
+        </div>
       )}
       <Keys name={row.name} keys={keys} />
     </>
@@ -103,7 +105,7 @@ function StageHead({ stage }: { stage: StageOfOrder }) {
         </h2>
         <p className="leading-snug text-slate">{words.join(' · ')}</p>
       </div>
-      <p className="shrink-0 font-semibold">
+      <p className="font-semibold sm:shrink-0">
         <HoursAgainst minutes={minutes} estimateMinutes={estimateMinutes} />
       </p>
     </div>
@@ -113,7 +115,9 @@ function StageHead({ stage }: { stage: StageOfOrder }) {
 function StateWord({ state }: { state: StageState }) {
   const look = state === 'waits' ? 'border-line text-slate' : 'border-bilge';
   return (
-    <span className={`ml-1 inline-block border-2 px-2 align-[1px] text-[16px] font-semibold ${look}`}>
+    <span
+      className={`ml-1 inline-block border-2 px-2 align-[1px] text-[18px] leading-snug font-semibold ${look}`}
+    >
       {STATE_WORDS[state]}
     </span>
   );
@@ -155,7 +159,7 @@ function Keys({ name, keys: { onAdd, onChange, onFinish, onReopen } }: { name: s
   ].filter(Boolean);
   return (
     shown.length > 0 && (
-      <div data-keys className="flex flex-wrap gap-3 pt-2 pb-1">
+      <div data-keys className="flex flex-wrap gap-3 pt-3 pb-1">
         {shown}
       </div>
     )
