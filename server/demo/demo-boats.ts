@@ -18,7 +18,6 @@ const PENNY: DemoBoat = {
   template: 'varnished_planked',
   counts: { places: { raise_dents_wet_cloth_cloth: [{ words: 'foredeck', partId: 'foredeck' }] } },
   chosen: [],
-  called: { frame_repair: 'Frames and floors', topsides: 'Topsides' },
   owner: 'ottilie',
   before: [],
   done: {
@@ -150,7 +149,6 @@ const WIDDER: DemoBoat = {
     },
   },
   chosen: ['bleach'],
-  called: {},
   owner: 'tamsin',
   before: ['arrive', 'strip_out', 'strip_finish', 'survey_open', 'frame_repair'],
   done: {
@@ -216,7 +214,6 @@ const HICKORY: DemoBoat = {
     places: { dutchman_scarf_split: [{ partId: 'lap', side: 'port', number: 6, words: 'lap' }] },
   },
   chosen: ['turn_over'],
-  called: {},
   owner: 'castor',
   before: [],
   done: {

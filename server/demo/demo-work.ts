@@ -50,8 +50,6 @@ export interface DemoBoat {
   template: TemplateId;
   counts: Omit<Counts, 'lengthMm'>;
   chosen: Choice[];
-  /** stages that the shop calls otherwise than the template does */
-  called: Record<string, string>;
   owner: PersonKey;
   /** stages that were over before the shop kept this log, ticked from its paper book */
   before: string[];

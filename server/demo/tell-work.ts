@@ -42,12 +42,6 @@ export function tellBoat(telling: Telling, key: BoatKey, boat: DemoBoat, templat
   for (const [task, doing] of Object.entries(boat.doing)) tellDoing(telling, `${key}/task/${task}`, doing);
   for (const [stageKey, tasks] of Object.entries(boat.own))
     for (const task of tasks) tellOwn(telling, key, boat, stageKey, task);
-  for (const [stageKey, name] of Object.entries(boat.called)) {
-    const stageId = telling.id(`${key}/${stageKey}`);
-    const sets = { rowId: stageId, fields: ['name'] };
-    const op = { kind: 'stage.amend', data: { stageId, set: { name } }, sets };
-    telling.say('orrin', day, time, () => op, 6);
-  }
   if (boat.lies) tellTurned(telling, boatId, boat.lies);
 }
 

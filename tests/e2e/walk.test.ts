@@ -9,7 +9,7 @@ import { launch, makeDataFolder, type DataFolder, type Launched } from '#tests/w
 // Method: the real `npm start` on a fresh folder, two phones and a laptop, each a browser process of its own behind a line
 // of its own. The steps are one story: each goes on where the one before it ended.
 
-const HERE = { boat: 'Penny Candle', stage: 'Frames and floors' };
+const HERE = { boat: 'Penny Candle', stage: 'Framing and backbone repair' };
 const TASK = 'Steam two new ribs, 11 and 12';
 const PRIMER = 'First coat of primer frames 4 to 7';
 const ROSA_DAY = { words: 'Rib 11 went in soft as rope, Wes on the far end', hours: '3 1/2', along: ['Wes'] };
