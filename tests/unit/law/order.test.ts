@@ -121,7 +121,7 @@ describe('every order of arrival', () => {
       }),
       { numRuns: HISTORIES, seed: SEED },
     );
-  }, 120_000);
+  }, 400_000);
 
   it('and the histories held what can go wrong', () => {
     expect(met.ops).toBeGreaterThan(10 * HISTORIES);
