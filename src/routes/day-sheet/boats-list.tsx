@@ -98,7 +98,7 @@ function BriefRow({ entry }: { entry: BriefEntry }) {
       </span>
       <Link
         to={`/entry/${entry.id}`}
-        className={`min-w-0 flex-1 truncate py-[10px] hover:underline print:py-0 print:whitespace-normal ${entry.mark === 'struck' ? 'text-slate line-through' : ''}`}
+        className={`min-w-0 flex-1 truncate py-[10px] hover:underline print:py-[5px] print:whitespace-normal ${entry.mark === 'struck' ? 'text-slate line-through' : ''}`}
       >
         <People entry={entry} /> <span className="text-slate">·</span> <BriefNotes entry={entry} />
         {entry.text}
