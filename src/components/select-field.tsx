@@ -9,7 +9,12 @@ interface SelectFieldProps<Value extends string> {
 }
 
 /** One of many short words, by the device's own list. */
-export function SelectField<Value extends string>({ label, options, value, onChange }: SelectFieldProps<Value>) {
+export function SelectField<Value extends string>({
+  label,
+  options,
+  value,
+  onChange,
+}: SelectFieldProps<Value>) {
   const id = useId();
   return (
     <div className="grid gap-1">
