@@ -3,6 +3,7 @@ import { hoursLines, type HoursLine } from '#shared/entry/sums.ts';
 import { dayAt, type Day } from '#shared/sync/day.ts';
 import { SHOP_DAY_MINUTES, isWorkDay } from '#shared/task/plan.ts';
 import type { View } from '#src/replica/view.ts';
+import { peopleOf } from './read-entry.ts';
 import { readNothing } from './read-heard.ts';
 
 /** A day on which somebody has logged less than the shop's day. */
@@ -50,7 +51,7 @@ export function readMissing(view: View, days: readonly Day[]): MissingOfPerson[]
 }
 
 function missingOf(view: View, person: PersonRow, days: readonly Day[], own: HoursLine[]): MissingOfPerson {
-  const first = own.reduce((before, { day }) => (day < before ? day : before), view.today);
+  const first = firstDayOf(view, person.id);
   const missing = days
     .filter((day) => day >= first)
     .map((day): MissingDay => {
@@ -67,4 +68,12 @@ function missingOf(view: View, person: PersonRow, days: readonly Day[], own: Hou
       .filter(({ day }) => day < view.today)
       .reduce((sum, day) => sum + day.missingMinutes, 0),
   };
+}
+
+/** The day of a person's first entry, a struck one too: nothing was expected of them before; today where they have none. */
+function firstDayOf(view: View, personId: string): Day {
+  return view
+    .all('entry')
+    .filter((entry) => peopleOf(entry).includes(personId))
+    .reduce((first, { workDate }) => (workDate < first ? workDate : first), view.today);
 }
