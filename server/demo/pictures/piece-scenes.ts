@@ -74,12 +74,6 @@ export function transom(grain: Grain, isGlossy: boolean, ghost: boolean): Scene 
       bent(h * 0.7, h * 0.7, w, 10),
       bent(h * 1.03, h * 1.03, w, 30),
     ];
-    s.soft(
-      between(crown, () => h, 60, w - 60),
-      '#000000',
-      0.8,
-      26,
-    );
     for (let index = 0; index < 3; index += 1)
       plank(s, edges[index]!, edges[index + 1]!, grain, {
         seam: { colour: '#1a0d07', thick: 5 },

@@ -127,9 +127,9 @@ function cubes(s: Sketch, [x, y]: Point, radius: number, flat: number): void {
 export function gloss(s: Sketch, strength: number): void {
   const { width: w, height: h } = s;
   const [x, lean] = [w * s.between(0.3, 0.55), s.between(-180, 180)];
-  s.soft(patch(s.draw, [x + lean / 2, h * 0.4], w * 0.3, 1.1, 0.2), '#fdf6e6', strength * 0.55, 40);
+  s.spot(x + lean / 2, h * 0.4, w * 0.42, '#fdf6e6', strength * 0.55, 0.9);
   for (let row = 0; row < 3; row += 1) {
-    for (let column = 0; column < 2; column += 1) {
+    const panes = [0, 1].map((column) => {
       const at = (across: number, down: number): Point => {
         const wide = w * (0.1 + 0.05 * down);
         return [
@@ -139,13 +139,9 @@ export function gloss(s: Sketch, strength: number): void {
       };
       const [left, right] = [column - 1 + 0.06, column - 0.06];
       const [top, bottom] = [row * 0.8 + 0.06, row * 0.8 + 0.72];
-      s.soft(
-        [at(left, top), at(right, top), at(right, bottom), at(left, bottom)],
-        '#ffffff',
-        strength * (1.15 - row * 0.3),
-        8,
-      );
-    }
+      return [at(left, top), at(right, top), at(right, bottom), at(left, bottom)];
+    });
+    s.softAll(panes, '#ffffff', strength * (1.15 - row * 0.3), 8);
   }
 }
 

@@ -148,8 +148,8 @@ const WOODS = {
 export type Grain = keyof typeof WOODS;
 export const GRAINS = Object.keys(WOODS) as Grain[];
 
-export const GRAIN_WIDTH_PX = 2000;
-export const GRAIN_HEIGHT_PX = 560;
+export const GRAIN_WIDTH_PX = 1680;
+export const GRAIN_HEIGHT_PX = 470;
 const QUALITY = 84;
 
 /** A board of one kind of wood, sawn flat, its grain along the width. The same pixels for the same kind. */
