@@ -42,10 +42,9 @@ export function PlacePage({ title, width = 'line', foot, children }: PlacePagePr
 function NotHeard() {
   const { phase } = useSyncState();
   if (phase !== 'offline' && phase !== 'failed') return <Loading words="Getting the record …" />;
+  const why = phase === 'offline' ? 'there is no signal here' : 'the server is not reached';
   return (
-    <Empty>
-      This device has not heard the record yet, and there is no signal here. It comes by itself when there is.
-    </Empty>
+    <Empty>This device has not heard the record yet, and {why}. It comes by itself as soon as it can.</Empty>
   );
 }
 

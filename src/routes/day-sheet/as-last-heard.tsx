@@ -1,7 +1,7 @@
 import { useRead, useSyncState } from '#src/replica/hooks.tsx';
 import { momentWords } from '#src/words/day-words.ts';
 
-/** Without signal a sheet says how old its news is. */
+/** Without signal, or while the server fails, a sheet says how old its news is. */
 export function AsLastHeard() {
   const sync = useSyncState();
   const { timeZone, today } = useRead(['clock'], (view) => ({ timeZone: view.timeZone, today: view.today }));
@@ -9,9 +9,10 @@ export function AsLastHeard() {
   const heard = sync.lastHeardAt
     ? `as last heard ${momentWords(sync.lastHeardAt, timeZone, today)}`
     : 'nothing heard yet';
+  const why = sync.phase === 'offline' ? 'No signal here' : 'The server is not reached';
   return (
     <p className="justify-self-start bg-seam px-2 py-1 text-on-seam" role="status">
-      No signal here: this is {heard}. What you settle is held and sent later.
+      {why}: this is {heard}. What you settle is held and sent later.
     </p>
   );
 }

@@ -68,45 +68,48 @@ export function BoatsTable({ week }: { week: Week }) {
 
 function WeekTable({ week, caption, children }: { week: Week; caption: string; children: ReactNode }) {
   return (
-    <table className="mb-2 w-full table-fixed border-separate border-spacing-y-seam bg-line">
-      <caption className="bg-primer px-4 pt-3 pb-2 text-left text-[24px] leading-tight font-bold md:px-0">
-        {caption}
-      </caption>
-      <thead>
-        <tr>
-          <th className={NAME_CELL}>
-            <span className="sr-only">{caption}</span>
-          </th>
-          {week.days.map((day) => (
-            <th key={day} scope="col" className={`p-0 font-semibold ${groundOf(day, week.today)}`}>
-              <DayLink day={day} today={week.today} />
+    // type twice as large makes it wider than a phone: it slides, the page does not
+    <div className="overflow-x-auto">
+      <table className="mb-2 w-full table-fixed border-separate border-spacing-y-seam bg-line">
+        <caption className="bg-primer px-4 pt-3 pb-2 text-left text-[24px] leading-tight font-bold md:px-0">
+          {caption}
+        </caption>
+        <thead>
+          <tr>
+            <th className={NAME_CELL}>
+              <span className="sr-only">{caption}</span>
             </th>
-          ))}
-          <th scope="col" className={SUM_CELL}>
-            <span className="text-[18px]">Week</span>
-          </th>
-        </tr>
-      </thead>
-      <tbody>{children}</tbody>
-      <tfoot>
-        <tr className="font-bold">
-          <th scope="row" className={NAME_CELL}>
-            <NameAndSum name="All" minutes={week.minutes} />
-          </th>
-          {week.byDay.map((minutes, index) => (
-            <td
-              key={week.days[index]}
-              className={`h-key text-center ${groundOf(week.days[index]!, week.today)}`}
-            >
-              {minutes > 0 && <Hours minutes={minutes} unit="" />}
+            {week.days.map((day) => (
+              <th key={day} scope="col" className={`p-0 font-semibold ${groundOf(day, week.today)}`}>
+                <DayLink day={day} today={week.today} />
+              </th>
+            ))}
+            <th scope="col" className={SUM_CELL}>
+              <span className="text-[18px]">Week</span>
+            </th>
+          </tr>
+        </thead>
+        <tbody>{children}</tbody>
+        <tfoot>
+          <tr className="font-bold">
+            <th scope="row" className={NAME_CELL}>
+              <NameAndSum name="All" minutes={week.minutes} />
+            </th>
+            {week.byDay.map((minutes, index) => (
+              <td
+                key={week.days[index]}
+                className={`h-key text-center ${groundOf(week.days[index]!, week.today)}`}
+              >
+                {minutes > 0 && <Hours minutes={minutes} unit="" />}
+              </td>
+            ))}
+            <td className={SUM_CELL}>
+              <Hours minutes={week.minutes} unit="" />
             </td>
-          ))}
-          <td className={SUM_CELL}>
-            <Hours minutes={week.minutes} unit="" />
-          </td>
-        </tr>
-      </tfoot>
-    </table>
+          </tr>
+        </tfoot>
+      </table>
+    </div>
   );
 }
 
