@@ -9,7 +9,7 @@ interface PlaceForRoles {
 const PLACES: readonly PlaceForRoles[] = [
   { to: '/day', label: 'Day sheet', roles: ['foreman', 'office'] },
   { to: '/alongside', label: 'Alongside', roles: ['crew', 'foreman'] },
-  { to: '/work', label: 'Order of work', roles: ['foreman', 'crew', 'office'] },
+  { to: '/order', label: 'Order of work', roles: ['foreman', 'crew', 'office'] },
   { to: '/plan', label: 'Plan', roles: ['foreman', 'crew', 'office'] },
   { to: '/boats', label: 'Boats', roles: ['foreman', 'office'] },
   { to: '/people', label: 'People', roles: ['foreman', 'office'] },

@@ -150,7 +150,7 @@ async function underWay(on: Page): Promise<string> {
 
 describe('the order of work', () => {
   test('lists what is open before a stage is finished, opens it again, and what comes after waits again', async () => {
-    await page.goto('/work');
+    await page.goto('/order');
     await page.getByRole('link', { name: 'Penny Candle' }).click();
     const name = await underWay(page);
     const stage = page.locator('li').filter({ has: page.getByRole('heading', { name, level: 2 }) });
@@ -172,7 +172,7 @@ describe('the order of work', () => {
   test('has a task added by one of the crew, started and ticked off, and undone', async () => {
     const phone = await browser.newContext({ viewport: SIZES.phone, baseURL: server.url });
     const own = await signIn(phone, 'rosa');
-    await own.goto('/work');
+    await own.goto('/order');
     await own.getByRole('link', { name: 'Penny Candle' }).click();
     await own
       .getByRole('button', { name: /^Add a task to/ })
@@ -224,7 +224,7 @@ describe('the day sheet', () => {
   });
 });
 
-describe.each(['/work', '/plan', '/week', '/day'])('%s', (path) => {
+describe.each(['/order', '/plan', '/week', '/day'])('%s', (path) => {
   test.each(['light', 'dark', 'sunlight'])('has nothing for axe to find in the %s set', async (set) => {
     await page.goto(path);
     await page.locator('h1').waitFor();

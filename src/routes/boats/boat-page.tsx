@@ -92,7 +92,7 @@ function Owners({ boat }: { boat: Boat }) {
 }
 
 function Stages({ boat }: { boat: Boat }) {
-  const orderKey = <KeyLink to={`/work/${boat.row.id}`}>Her order of work</KeyLink>;
+  const orderKey = <KeyLink to={`/order/${boat.row.id}`}>Her order of work</KeyLink>;
   return (
     <Section title="Stages and tasks" aside={orderKey}>
       {boat.stages.length === 0 ? (

@@ -70,7 +70,7 @@ function AloneRow({ own }: { own: AloneOnSheet }) {
       <span className="absolute top-[6px] left-[1px] z-20">
         <BungMark mark={mark} />
       </span>
-      <Link to={`/work/${own.boatId}`} className="font-bold text-mahogany hover:underline">
+      <Link to={`/order/${own.boatId}`} className="font-bold text-mahogany hover:underline">
         {own.boatName}
       </Link>
       <Notes notes={own.notes} photos={own.photos} />

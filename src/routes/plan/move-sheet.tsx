@@ -68,7 +68,7 @@ export function MoveSheet({ board, person, line, deeds, onClose }: MoveSheetProp
         <Key onClick={press('taken off', takeOff(line.row, person.personId))}>
           Off {person.name}&rsquo;s day
         </Key>
-        <KeyLink to={`/work/${line.row.boatId}`}>Her order of work</KeyLink>
+        <KeyLink to={`/order/${line.row.boatId}`}>Her order of work</KeyLink>
       </div>
     </Sheet>
   );

@@ -68,7 +68,7 @@ function Task({ line, note }: { line: PlannedLine; note: string | null }) {
   const { row, boatName, stageName, along, state, waitsFor, share } = line;
   const notes = [state, along, waitsFor && `comes ${waitsFor}`, note].filter(Boolean);
   return (
-    <Link to={`/work/${row.boatId}`} className="group block leading-snug">
+    <Link to={`/order/${row.boatId}`} className="group block leading-snug">
       <span className="font-bold text-mahogany">{boatName}</span>
       <span className="text-slate"> · {stageName}</span>
       <span className={`block group-hover:underline ${row.done ? '' : 'font-semibold'}`}>{row.title}</span>

@@ -38,7 +38,7 @@ export default function OrderPage() {
   if (!order) {
     return (
       <PlacePage title="No such boat">
-        <Empty action={<KeyLink to="/work">All boats</KeyLink>}>This boat is not known here.</Empty>
+        <Empty action={<KeyLink to="/order">All boats</KeyLink>}>This boat is not known here.</Empty>
       </PlacePage>
     );
   }
@@ -70,7 +70,7 @@ function Head({ order }: { order: OrderOfWork }) {
         {boat.struck && <Notice tone="warn">Struck: {boat.struck.why}</Notice>}
       </div>
       <div data-keys className="flex flex-wrap gap-3">
-        <KeyLink to="/work">All boats</KeyLink>
+        <KeyLink to="/order">All boats</KeyLink>
         {mayChange && <KeyLink to={`/boats/${boat.id}`}>Her particulars</KeyLink>}
       </div>
     </div>

@@ -40,7 +40,7 @@ function Boat({ boat }: { boat: BoatAtWork }) {
     <li className="relative grid gap-1 bg-plank px-4 py-3 has-[a:hover]:bg-primer md:px-6">
       <div className="flex flex-wrap items-baseline justify-between gap-x-4">
         <h2 className="text-[22px] leading-snug font-bold break-words">
-          <Link to={`/work/${boat.id}`} className="text-mahogany after:absolute after:inset-0">
+          <Link to={`/order/${boat.id}`} className="text-mahogany after:absolute after:inset-0">
             {boat.name}
           </Link>
         </h2>

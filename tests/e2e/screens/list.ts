@@ -30,8 +30,8 @@ const CREW: Line[] = [
   ['search', 'Search', at('/search')],
   ['held', 'Held', at('/held')],
   ['me', 'You', at('/me')],
-  ['own work', 'Order of work', at('/work')],
-  ['own order of work', 'Penny Candle: order of work', ({ boatId }) => `/work/${boatId}`],
+  ['own work', 'Order of work', at('/order')],
+  ['own order of work', 'Penny Candle: order of work', ({ boatId }) => `/order/${boatId}`],
   ['own plan', 'Your plan', at('/plan')],
 ];
 
@@ -40,8 +40,8 @@ const FOREMAN: Line[] = [
   ['day sheet by boat', 'Day sheet', at('/day?by=boat')],
   ['a day long ago', 'Day sheet', at('/day/2026-03-04')],
   ['week', 'Week', at('/week')],
-  ['work', 'Order of work', at('/work')],
-  ['order of work', 'Penny Candle: order of work', ({ boatId }) => `/work/${boatId}`],
+  ['work', 'Order of work', at('/order')],
+  ['order of work', 'Penny Candle: order of work', ({ boatId }) => `/order/${boatId}`],
   ['plan', 'Plan', at('/plan')],
   ['boats', 'Boats', at('/boats')],
   ['boat', 'Penny Candle', ({ boatId }) => `/boats/${boatId}`],

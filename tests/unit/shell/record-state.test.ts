@@ -98,10 +98,10 @@ describe('what is wrong with a device', () => {
 
 describe('the places', () => {
   test('are those of all roles that a person has', () => {
-    expect(placesFor(['crew']).map(({ to }) => to)).toEqual(['/alongside', '/work', '/plan']);
+    expect(placesFor(['crew']).map(({ to }) => to)).toEqual(['/alongside', '/order', '/plan']);
     expect(placesFor(['crew', 'owner']).map(({ to }) => to)).toEqual([
       '/alongside',
-      '/work',
+      '/order',
       '/plan',
       '/own-boats',
     ]);

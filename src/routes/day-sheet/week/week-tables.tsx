@@ -43,7 +43,7 @@ export function BoatsTable({ week }: { week: Week }) {
         <tr key={id}>
           <th scope="row" className={NAME_CELL}>
             <Link
-              to={`/work/${id}`}
+              to={`/order/${id}`}
               className="inline-flex min-h-11 items-center text-mahogany hover:underline"
             >
               <NameAndSum name={name} minutes={minutes} />
