@@ -18,6 +18,8 @@ const ROSA = { name: 'Rosa', email: 'rosa@hornbeam.example' };
 const ALIVE_WITHIN_MS = 2000;
 // by then they have tried in vain a few times, and each wait is up to twice the one before
 const BACK_OFF_MAX_MS = 60_000;
+// the first start builds the front end and makes the demo shop with its pictures
+const FIRST_START_MAX_MS = 300_000;
 const YEAR_MS = 365 * 24 * 60 * 60_000;
 const LATER_MS = 10_000;
 
@@ -39,7 +41,7 @@ beforeAll(async () => {
     Laptop.unpack({ name: 'Orrin', email: 'orrin@hornbeam.example', label: 'Shop laptop' }, server.url),
   ]);
   atFirst = await readRecord(server.url);
-});
+}, FIRST_START_MAX_MS);
 
 afterAll(async () => {
   await Promise.all([rosa, wes, laptop].map((each) => each?.device.putAway()));
