@@ -9,6 +9,7 @@ import { AppUpdateContext } from '#src/components/use-update.ts';
 import { browserWorld } from '#src/replica/browser-world.ts';
 import { openReplica } from '#src/replica/live-replica.ts';
 import { startSyncLoop } from '#src/replica/sync-loop.ts';
+import { fetchScreenAt } from '#src/routes.tsx';
 import '#src/styles.css';
 
 // zod otherwise tries `new Function`, which the content security policy reports
@@ -32,6 +33,7 @@ function show(page: ReactNode) {
 const world = browserWorld(version, () => {
   show(<ErrorPage error={new Error('Another window of Ribband holds on to an older version. Close it.')} />);
 });
+fetchScreenAt(window.location.pathname);
 openReplica(world).then(
   (replica) => {
     startSyncLoop(replica, world);

@@ -44,6 +44,16 @@ const SIGNED_IN_SCREENS: [path: string, load: Load][] = [
   ['devices', () => import('#src/routes/devices/devices-page.tsx')],
 ];
 
+const HOME_SCREEN = 'alongside';
+
+/** Begins to load what the screen at an address needs, so that it need not wait for the record to be open. */
+export function fetchScreenAt(pathname: string): void {
+  const [place = ''] = pathname.split('/').filter(Boolean);
+  const screen = SIGNED_IN_SCREENS.find(([path]) => path.split('/')[0] === (place || HOME_SCREEN));
+  // whoever shows it meets the error and says so
+  screen?.[1]().catch(() => {});
+}
+
 function routeOf([path, load]: [path: string, load: Load]) {
   const Screen = lazy(load);
   return <Route key={path} path={path} element={<Screen />} />;

@@ -2,16 +2,15 @@ import { get, promisifyRequest, set } from 'idb-keyval';
 import { z } from 'zod';
 import { refKey, type Entity } from '#shared/sync/row.ts';
 import { PICTURE_STORES, PictureStore } from './photos/picture-store.ts';
-import { isReadableRow } from './readable-row.ts';
+import { isReadableRow, readStoredRow } from './readable-row.ts';
 import type { Seal } from './seal.ts';
-import { openRecord, openRecords } from './sealed-records.ts';
+import { by, openRecord, openRecords } from './sealed-records.ts';
 import { KeptDatabase } from './store.ts';
 import { BROKEN_STORE } from './stored-records.ts';
 import { Turns } from './turns.ts';
 import type { Rows } from './view.ts';
 import type { World } from './world.ts';
 
-const storedRowSchema = z.object({ entity: z.string(), row: z.looseObject({ id: z.string() }) });
 const heardSchema = z.object({ cursor: z.string(), heardAt: z.iso.datetime() });
 const rememberedSchema = z.object({ boatId: z.string().nullable(), stageId: z.string().nullable() });
 
@@ -62,9 +61,7 @@ export class PersonStore {
 
   static async open(world: World, seal: Seal, personId: string): Promise<PersonStore> {
     const store = new PersonStore(world, seal, personId);
-    await store.turns.take(() => store.readAll());
-    await store.readDrafts();
-    await store.pictures.read();
+    await Promise.all([store.turns.take(() => store.readAll()), store.readDrafts(), store.pictures.read()]);
     return store;
   }
 
@@ -162,25 +159,30 @@ export class PersonStore {
   /** Reads the drafts as they are kept; another tab may have changed them. */
   readDrafts(): Promise<void> {
     return this.turns.take(async () => {
-      const { opened } = await openRecords(this.sealed, 'drafts', z.object({ value: z.unknown() }));
+      const { opened } = await openRecords(this.sealed, 'drafts', by(z.object({ value: z.unknown() })));
       this.drafts = new Map(opened.map(([key, { value }]) => [key, value]));
     });
   }
 
   private async readAll(): Promise<void> {
-    this.pulls = await this.readPulls();
-    const { opened, areSomeBroken } = await openRecords(this.sealed, 'rows', storedRowSchema);
-    const heard = await openRecord(this.sealed, 'about', 'heard', heardSchema);
+    // asked for at once, and the count first, so that rows are never older than it says
+    const [pulls, { opened, areSomeBroken }, heard, remembered] = await Promise.all([
+      this.readPulls(),
+      openRecords(this.sealed, 'rows', readStoredRow),
+      openRecord(this.sealed, 'about', 'heard', heardSchema),
+      openRecord(this.sealed, 'about', 'remembered', rememberedSchema),
+    ]);
+    this.pulls = pulls;
     // a row that cannot be read is asked for again, with all the others
     this.cursor = areSomeBroken ? null : (heard?.cursor ?? null);
     this.heardAt = heard?.heardAt ?? null;
     if (areSomeBroken) await this.database.store('about')('readwrite', (about) => void about.delete('heard'));
-    this.rows = new Map(
-      opened
-        .filter(([, { entity, row }]) => isReadableRow(entity, row))
-        .map(([, { entity, row }]) => [refKey({ entity: entity as Entity, id: row.id }), { entity, row }]),
-    );
-    this.remembered = (await openRecord(this.sealed, 'about', 'remembered', rememberedSchema)) ?? this.remembered;
+    const rows = new Map<string, { entity: string; row: object }>();
+    for (const [, { entity, row }] of opened) {
+      if (isReadableRow(entity, row)) rows.set(refKey({ entity: entity as Entity, id: row.id }), { entity, row });
+    }
+    this.rows = rows;
+    this.remembered = remembered ?? this.remembered;
   }
 
   private async readPulls(): Promise<number> {

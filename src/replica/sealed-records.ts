@@ -18,31 +18,40 @@ export async function openRecord<T>(
   schema: z.ZodType<T>,
 ): Promise<T | null> {
   const stored: unknown = await get(key, database.store(store));
-  return stored === undefined ? null : openStored(seal, stored, schema);
+  return stored === undefined ? null : openStored(seal, stored, by(schema));
 }
 
-/** All readable records of a store in the order of their keys; the others are put aside. */
+/** What a value is as a schema reads it; null where it is not. */
+export function by<T>(schema: z.ZodType<T>): (value: unknown) => T | null {
+  return (value) => schema.safeParse(value).data ?? null;
+}
+
+/** All records of a store that `read` does not answer with null, in the order of their keys; the others are put aside. */
 export async function openRecords<T>(
   { database, seal }: SealedDatabase,
   store: string,
-  schema: z.ZodType<T>,
+  read: (value: unknown) => T | null,
 ): Promise<{ opened: [string, T][]; areSomeBroken: boolean }> {
   const stored = await readEntries(database, store);
-  const values = await Promise.all(
-    stored.map(async ([key, value]) => [key, value, await openStored(seal, value, schema)] as const),
-  );
-  const broken = values
-    .filter(([, , read]) => read === null)
-    .map(([key, value]): [string, unknown] => [key, value]);
+  const values = await Promise.all(stored.map(([, value]) => openStored(seal, value, read)));
+  const opened: [string, T][] = [];
+  const broken: [string, unknown][] = [];
+  stored.forEach(([key, value], index) => {
+    const made = values[index]!;
+    if (made === null) broken.push([key, value]);
+    else opened.push([key, made]);
+  });
   if (broken.length > 0) await putAside(database, store, broken);
-  const opened = values.flatMap(([key, , read]): [string, T][] => (read === null ? [] : [[key, read]]));
   return { opened, areSomeBroken: broken.length > 0 };
 }
 
-async function openStored<T>(seal: Seal, stored: unknown, schema: z.ZodType<T>): Promise<T | null> {
+async function openStored<T>(
+  seal: Seal,
+  stored: unknown,
+  read: (value: unknown) => T | null,
+): Promise<T | null> {
   try {
-    const read = schema.safeParse(await seal.open(stored));
-    return read.success ? read.data : null;
+    return read(await seal.open(stored));
   } catch {
     return null;
   }

@@ -7,7 +7,7 @@ import type { Op } from '#shared/sync/op.ts';
 import { replay, type HeldOp } from '#shared/sync/replay.ts';
 import type { RowLookup } from '#shared/sync/op-kind.ts';
 import { FOLLOWER_ENTITIES, type Follower, type FollowerRow } from '#shared/entry/follow.ts';
-import { recordEntitySchema, refKey, type Entity, type Ref, type Row } from '#shared/sync/row.ts';
+import { recordEntitySchema, refKey, type Entity, type RecordEntity, type Ref, type Row } from '#shared/sync/row.ts';
 import type { RowOf } from '#shared/sync/rows.ts';
 import { stampMs } from '#shared/sync/stamp.ts';
 
@@ -56,6 +56,8 @@ export interface View {
   /** Every row of an entity, struck ones too. Loose ends are derived here. */
   all<E extends Entity>(entity: E): RowOf[E][];
   find<E extends Entity>(entity: E, id: string): RowOf[E] | undefined;
+  /** The loose ends of one row, without looking at all the others. */
+  endsOf(entity: EndedEntity, row: Row): LooseEnd[];
   /** This device's unsent ops, of all its people, oldest first. */
   held: HeldItem[];
   /** Whether a held op made or changes the row. */
@@ -66,6 +68,9 @@ export interface View {
   /** Corrected time when this picture was made, in milliseconds since 1970. */
   nowMs: number;
 }
+
+/** Rows of these can have loose ends. */
+type EndedEntity = Exclude<RecordEntity, 'setAside'>;
 
 type ById = ReadonlyMap<string, object>;
 
@@ -186,7 +191,7 @@ class KnownView implements View {
     );
   }
 
-  private endsOf(entity: Parameters<typeof looseEndsOf>[1], row: Row): LooseEnd[] {
+  endsOf(entity: EndedEntity, row: Row): LooseEnd[] {
     // an owner's rows come without their statements
     if (!row.statements || row.statements.length === 0) return [];
     const ends = endsOfRow.get(row) ?? looseEndsOf(this.me.shopId, entity, row);

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { openRecord, openRecords, type SealedDatabase } from '../sealed-records.ts';
+import { by, openRecord, openRecords, type SealedDatabase } from '../sealed-records.ts';
 import { Turns } from '../turns.ts';
 import { dropBytes, evict, evictAll, sentWhole, type PictureStores } from './evict.ts';
 import type { HeldPicture, PictureSize, PreparedPicture } from './picture.ts';
@@ -64,7 +64,7 @@ export class PictureStore {
   /** Reads the queue as it is kept; another tab may have changed it. */
   read(): Promise<void> {
     return this.turns.take(async () => {
-      const { opened } = await openRecords(this.sealed, QUEUE_STORE, queuedSchema);
+      const { opened } = await openRecords(this.sealed, QUEUE_STORE, by(queuedSchema));
       this.queue = oldestFirst(opened);
     });
   }

@@ -1,4 +1,4 @@
-import { Suspense, useState } from 'react';
+import { Suspense, useDeferredValue, useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { Day } from '#shared/sync/day.ts';
 import { NameBar } from '#src/components/bars.tsx';
@@ -16,6 +16,7 @@ import { RecordBar } from '#src/shell/record-bar.tsx';
 import { Warnings } from '#src/shell/warnings.tsx';
 
 const DAYS_AT_FIRST = 14;
+const DAYS_MADE_FIRST = 2;
 const FROM_TODAY = { upTo: null as Day | null, daysMax: DAYS_AT_FIRST };
 
 /** Where the crew log: a boat's days on the ribband line, and the keys to add to them. */
@@ -24,9 +25,11 @@ export default function AlongsidePage() {
   const [open, setOpen] = useState<'boat' | 'earlier' | null>(null);
   const [shown, setShown] = useState(FROM_TODAY);
   const { upTo, daysMax } = shown;
+  // a few days are on the screen before the rest of them are made
+  const daysMade = useDeferredValue(daysMax, DAYS_MADE_FIRST);
   const line = useRead(
-    ['alongside', where, daysMax, upTo],
-    (view) => where && readAlongside(view, where, daysMax, upTo),
+    ['alongside', where, daysMade, upTo],
+    (view) => where && readAlongside(view, where, daysMade, upTo),
   );
   const { done, setDone } = useJustDone();
 

@@ -20,25 +20,22 @@ export interface EndLine {
 
 /** The loose ends of a row, each with the values that ask to stand. */
 export function readEnds(view: View, entity: SaidEntity, row: EntryRow | FollowerRow): EndLine[] {
-  return view
-    .all('looseEnd')
-    .filter((end) => end.entity === entity && end.rowId === row.id)
-    .map((end) => ({
-      id: end.id,
-      kind: end.kind,
-      field: end.field ?? null,
-      about:
-        end.kind === 'field'
-          ? fieldWords(view, end.field!)
-          : 'Struck, and changed since by somebody who did not know',
-      values: end.values.map(({ value, personId, at, opId, stands }) => ({
-        ...readEndValue(view, row, end, value),
-        opId,
-        who: whoWords(view, personId),
-        at: momentWords(at, view.timeZone, view.today),
-        stands,
-      })),
-    }));
+  return view.endsOf(entity, row).map((end) => ({
+    id: end.id,
+    kind: end.kind,
+    field: end.field ?? null,
+    about:
+      end.kind === 'field'
+        ? fieldWords(view, end.field!)
+        : 'Struck, and changed since by somebody who did not know',
+    values: end.values.map(({ value, personId, at, opId, stands }) => ({
+      ...readEndValue(view, row, end, value),
+      opId,
+      who: whoWords(view, personId),
+      at: momentWords(at, view.timeZone, view.today),
+      stands,
+    })),
+  }));
 }
 
 /** A strike's loose end carries the field beside each value, or the id of what was added. */
