@@ -48,10 +48,13 @@ function broadcastChannel(): Channel {
 function listenForWaking(listener: () => void): () => void {
   const onVisible = () => document.visibilityState === 'visible' && listener();
   window.addEventListener('online', listener);
+  // a round that fails at once has the screen say that there is no signal
+  window.addEventListener('offline', listener);
   window.addEventListener('focus', listener);
   document.addEventListener('visibilitychange', onVisible);
   return () => {
     window.removeEventListener('online', listener);
+    window.removeEventListener('offline', listener);
     window.removeEventListener('focus', listener);
     document.removeEventListener('visibilitychange', onVisible);
   };

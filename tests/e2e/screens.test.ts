@@ -2,7 +2,7 @@ import { AxeBuilder } from '@axe-core/playwright';
 import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { SETS, SIZES } from '#tests/e2e/gallery/open-gallery.ts';
-import { SCREENS, type Screen } from '#tests/e2e/screens/list.ts';
+import { SCREENS, SHEETS, type Screen } from '#tests/e2e/screens/list.ts';
 import {
   CREW_LIMITS,
   DESK_LIMITS,
@@ -127,3 +127,26 @@ describe.each(SCREENS.map((screen, index) => ({ ...screen, index })))('$name', (
     expect(found).toEqual({});
   });
 });
+
+describe.each(SHEETS.map((sheet, index) => ({ ...sheet, index })))(
+  'the sheet of $screen by $key',
+  ({ screen: name, key, index }) => {
+    it('is fit for the eye and the hand, and closes by Esc', async () => {
+      const screen = SCREENS.find((each) => each.name === name)!;
+      const page = await open(screen);
+      await page.evaluate(
+        (set) => void (document.documentElement.dataset['set'] = set),
+        SETS[index % SETS.length]!,
+      );
+      const opener = page.getByRole('button', { name: key }).first();
+      await opener.press('Enter');
+      const sheet = page.getByRole('dialog');
+      await sheet.waitFor();
+      const faults = [...(await measure(page, screen)), ...(await page.evaluate(overflow)), ...said];
+      expect(faults).toEqual([]);
+      await page.keyboard.press('Escape');
+      await sheet.waitFor({ state: 'detached' });
+      expect(await opener.evaluate((element) => element === document.activeElement)).toBe(true);
+    });
+  },
+);

@@ -49,6 +49,39 @@ const FOREMAN: Line[] = [
   ['devices', 'Devices', at('/devices')],
 ];
 
+/** A sheet of a screen, by the key that opens it. */
+export interface SheetOfScreen {
+  screen: string;
+  key: string | RegExp;
+}
+
+/** Every kind of sheet, from the foot of a phone. */
+export const SHEETS: SheetOfScreen[] = [
+  { screen: 'alongside', key: /, other boat$/ },
+  { screen: 'alongside', key: 'Earlier days' },
+  { screen: 'alongside', key: 'Hours' },
+  { screen: 'found', key: /^Which part/ },
+  { screen: 'found', key: /^Something else/ },
+  { screen: 'found', key: /^Seen ?not measured/ },
+  { screen: 'entry', key: 'Add to it' },
+  { screen: 'finding', key: 'Change it' },
+  { screen: 'finding', key: 'Strike it' },
+  { screen: 'own work', key: 'Places' },
+  { screen: 'own order of work', key: /^(To do|Started): / },
+  { screen: 'day sheet', key: /^Split or move/ },
+  { screen: 'day sheet', key: /^(Another day|Other)/ },
+  { screen: 'day sheet', key: 'Admit' },
+  { screen: 'order of work', key: /^Add a task/ },
+  { screen: 'order of work', key: 'Add a stage' },
+  { screen: 'order of work', key: /^Stage finished/ },
+  { screen: 'order of work', key: /^Change stage/ },
+  { screen: 'plan', key: 'Give Hob work' },
+  { screen: 'boats', key: 'Add a boat' },
+  { screen: 'boat', key: 'Change' },
+  { screen: 'people', key: 'Add a person' },
+  { screen: 'devices', key: /^Shut out/ },
+];
+
 const screensOf =
   (as: PersonKey | null, isCrew: boolean) =>
   ([name, title, path]: Line): Screen => ({ name, title, path, as, isCrew });
