@@ -28,7 +28,7 @@ export function KindSelect({ entryId, figure, personName }: KindSelectProps) {
     <select
       aria-label={`Kind of ${personName}'s hours`}
       title={isSet ? undefined : kind === null ? 'Nobody has said the kind' : 'Proposed; choose to set it'}
-      className={`h-key w-[164px] max-w-full rounded-key border-2 bg-plank pl-2 text-[16px] text-ellipsis text-bilge sm:mt-[2px] sm:h-11 print:w-auto print:appearance-none print:border-0 print:font-normal ${isSet ? 'border-line' : 'border-bilge font-semibold'}`}
+      className={`h-key w-[164px] max-w-full rounded-key border-2 bg-plank pl-2 text-[16px] text-ellipsis text-bilge sm:mt-[2px] sm:h-11 print:ml-auto print:block print:h-auto print:w-auto print:appearance-none print:pl-0 print:[text-align-last:right] print:border-0 print:font-normal ${isSet ? 'border-line' : 'border-bilge font-semibold'}`}
       value={isSet ? kind : ''}
       onChange={(event) => set(event.target.value as HoursKind)}
     >

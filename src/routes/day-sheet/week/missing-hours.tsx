@@ -22,7 +22,7 @@ export function MissingHours({ week: { missing, today } }: { week: Week }) {
         {missing.map(({ personId, name, days, missingMinutes }) => (
           <li
             key={personId}
-            className="grid grid-cols-[minmax(0,1fr)] gap-x-4 bg-plank px-4 py-2 md:grid-cols-[174px_minmax(0,1fr)_auto] md:items-center"
+            className="grid grid-cols-[minmax(0,1fr)] gap-x-4 bg-plank px-4 py-2 print:flex print:flex-wrap print:items-baseline md:grid-cols-[174px_minmax(0,1fr)_auto] md:items-center"
           >
             <h3 className="text-[20px] font-bold break-words">{name}</h3>
             <ul className="flex flex-wrap gap-x-5">
@@ -48,7 +48,7 @@ function MissingLink({ missing: { day, minutes, isSure }, today }: { missing: Mi
   return (
     <Link
       to={`/day/${day}`}
-      className="inline-flex min-h-key items-center gap-1 underline underline-offset-4 md:min-h-11"
+      className="inline-flex min-h-key items-center gap-1 underline underline-offset-4 md:min-h-11 print:min-h-0"
     >
       <span className="md:whitespace-nowrap">
         {day === today ? 'Today' : weekdayWords(day)}: <Hours minutes={minutes} unit="" /> of{' '}
