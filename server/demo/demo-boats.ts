@@ -18,6 +18,14 @@ const PENNY: DemoBoat = {
   template: 'varnished_planked',
   counts: { places: { raise_dents_wet_cloth_cloth: [{ words: 'foredeck', partId: 'foredeck' }] } },
   chosen: [],
+  reckoned: {
+    arrive: 2,
+    strip_out: 3,
+    strip_finish: 2.5,
+    survey_open: 2.5,
+    frame_repair: 1.5,
+    topsides: 1.5,
+  },
   owner: 'ottilie',
   before: [],
   done: {
@@ -149,6 +157,7 @@ const WIDDER: DemoBoat = {
     },
   },
   chosen: ['bleach'],
+  reckoned: { topsides: 2, deck: 3.5, fair: 2, bleach: 4, stain: 1.5, varnish: 2 },
   owner: 'tamsin',
   before: ['arrive', 'strip_out', 'strip_finish', 'survey_open', 'frame_repair'],
   done: {
@@ -214,6 +223,7 @@ const HICKORY: DemoBoat = {
     places: { dutchman_scarf_split: [{ partId: 'lap', side: 'port', number: 6, words: 'lap' }] },
   },
   chosen: ['turn_over'],
+  reckoned: { arrive: 2, strip_paint: 2, ribs: 2 },
   owner: 'castor',
   before: [],
   done: {

@@ -50,6 +50,8 @@ export interface DemoBoat {
   template: TemplateId;
   counts: Omit<Counts, 'lengthMm'>;
   chosen: Choice[];
+  /** by stage: how many times the template's estimate the foreman reckons for her */
+  reckoned: Record<string, number>;
   owner: PersonKey;
   /** stages that were over before the shop kept this log, ticked from its paper book */
   before: string[];

@@ -38,7 +38,7 @@ export const HICKORY_ENTRIES: DemoEntry[] = [
     [-15, '15:30', 'hob', 'Made horses for turning, and went over Lennys laps.', { hob: [7, 'yard'] }],
     [-14, '15:40', 'hob', 'Sanded the bottom, eighty, vac on all the time.', { hob: 7.5, lenny: 7.5 }],
   ]),
-  ...linesAbout('hickory', 'ribs', [
+  ...linesAbout('hickory', 'survey_open', [
     [
       -13,
       '15:50',
@@ -46,8 +46,16 @@ export const HICKORY_ENTRIES: DemoEntry[] = [
       'Counted and chalked the ribs. Nine port is broken, eleven and twelve starboard cracked.',
       { hob: 7, lenny: 6 },
     ],
+    [
+      -12,
+      '16:05',
+      'hob',
+      'Moulds in and a string down the middle, shape written on the wall. Two ribs out at once, no more.',
+      { hob: 4.5 },
+    ],
+  ]),
+  ...linesAbout('hickory', 'ribs', [
     [-12, '16:00', 'hob', 'Sistered rib nine port, three hours, twenty two rivets.', { hob: [3, 'agreed'] }],
-    [-12, '16:05', 'hob', 'Rest of it steaming blanks for the others.', { hob: 4.5 }],
     [-11, '15:30', 'hob', 'Eleven starboard, old one out, bits bagged.', { hob: 7 }, 'hobEleven'],
     [
       -10,

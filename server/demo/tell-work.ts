@@ -13,6 +13,7 @@ const AWAY: Partial<Record<PersonKey, readonly number[]>> = {
   lenny: [-51, -50],
 };
 const PLANNED_ON = -1;
+const HALF_HOUR = 30;
 const ASSIGNED_ON = -6;
 
 /** Tells a boat's arrival, her list of work, and what was done of it. */
@@ -66,10 +67,18 @@ function listOf(telling: Telling, key: BoatKey, boat: DemoBoat, template: Templa
       telling.name(`${key}/task/${name}`, rowId);
       list.get(stages.get(op.data.stageId)!)!.push(name);
     }
-    const data = op.data as unknown as Record<string, unknown>;
+    const stage = op.kind === 'task.add' ? stages.get(op.data.stageId)! : name;
+    const data = { ...op.data, ...reckoned(op, boat.reckoned[stage] ?? 1) };
     telling.say('orrin', ...boat.listed, () => ({ kind: op.kind, makes: rowId, data }), 1);
   }
   return list;
+}
+
+function reckoned(op: WorkOp, times: number): { estimateMinutes?: number } {
+  const minutes = op.kind === 'task.add' ? op.data.estimateMinutes : undefined;
+  return minutes === undefined
+    ? {}
+    : { estimateMinutes: Math.round((minutes * times) / HALF_HOUR) * HALF_HOUR };
 }
 
 /** The id in the template, and which of several it is. */
