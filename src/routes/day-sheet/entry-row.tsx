@@ -34,7 +34,7 @@ export function EntryRow({ entry, personName, onSplit }: EntryRowProps) {
         <FoundNotes notes={entry.notes} photos={entry.photos} />
         <Remarks entry={entry} />
       </div>
-      <div className="flex items-center justify-between gap-3 py-1 sm:w-[164px] sm:flex-col sm:items-end sm:justify-start sm:gap-0 sm:py-0">
+      <div className="flex flex-wrap items-center justify-between gap-3 py-1 sm:w-[164px] sm:flex-col sm:flex-nowrap sm:items-end sm:justify-start sm:gap-0 sm:py-0">
         {figure && (
           <FigureCell entryId={entry.id} figure={figure} personName={personName} isStruck={struck !== null} />
         )}
