@@ -11,6 +11,14 @@ export interface Finding {
   goal: number;
 }
 
+/** What is measured by itself, in a unit of its own; met where the median is at most the goal. */
+export interface Figure {
+  what: string;
+  unit: string;
+  values: number[];
+  goal: number;
+}
+
 export function median(values: number[]): number {
   const sorted = [...values].sort((a, b) => a - b);
   const middle = sorted.length >> 1;

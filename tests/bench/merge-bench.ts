@@ -1,6 +1,6 @@
 import type { Sender } from '#tests/worlds/sender.ts';
 import { startServer } from '#tests/worlds/server.ts';
-import { BareInsert, type KeptBatch } from './bare-insert.ts';
+import { BareInsert } from './bare-insert.ts';
 import { DEVICES, bodyOf, entryOps, latestCursor, makeCrew, postSync, type Crew } from './crew.ts';
 import { timed, type Finding, type Pair } from './measuring.ts';
 import { SqlTrace } from './sql-trace.ts';
@@ -27,31 +27,46 @@ export interface MergeFindings {
   spending: Spending;
 }
 
-/** Ten devices with 400 entries each through POST /api/sync, against the same op and entry rows inserted bare. */
+/** What the merge is measured against, each by what it is called. */
+type Bares = Map<string, BareInsert>;
+
+/** One way of sending a round: how long ours took, and each bare one with the same rows. */
+interface Round {
+  oursMs: number;
+  bareMs: Map<string, number>;
+}
+
+/**
+ * Ten devices with 400 entries each through POST /api/sync, against the same op and entry rows inserted bare: into
+ * tables without foreign keys, and into tables with the product's own.
+ */
 export async function benchMerge(): Promise<MergeFindings> {
   const server = await startServer();
   const crew = await makeCrew(server, ['crew']);
-  const bare = await BareInsert.open(server.databaseUrl);
+  const bares: Bares = new Map([
+    ['bare rows', await BareInsert.open(server.databaseUrl, { prefix: 'bare', hasForeignKeys: false })],
+    ['bare rows with foreign keys', await BareInsert.open(server.databaseUrl, { prefix: 'linked', hasForeignKeys: true })],
+  ]);
   const trace = new SqlTrace(server.database);
-  const apart: Pair[] = [];
-  const together: Pair[] = [];
+  const apart: Round[] = [];
+  const together: Round[] = [];
   let spendings: Spending[] = [];
   try {
     for (let round = 0; round < WARM_UPS + ROUNDS; round += 1) {
       if (round === WARM_UPS) spendings = [];
-      apart.push(await oneByOne(crew, bare, trace, spendings));
-      together.push(await allAtOnce(crew, bare));
+      apart.push(await oneByOne(crew, bares, trace, spendings));
+      together.push(await allAtOnce(crew, bares));
     }
   } finally {
-    await bare.close();
+    for (const bare of bares.values()) await bare.close();
     await server.close();
   }
   const name = `${DEVICES} x ${OPS_A_DEVICE} entry ops`;
   return {
-    findings: [
-      { what: `${name}, one device after another`, pairs: apart.slice(WARM_UPS), goal: GOAL },
-      { what: `${name}, all at once`, pairs: together.slice(WARM_UPS), goal: GOAL },
-    ],
+    findings: [...bares.keys()].flatMap((bare) => [
+      { what: `${name}, one device after another / ${bare}`, pairs: pairsOf(apart, bare), goal: GOAL },
+      { what: `${name}, all at once / ${bare}`, pairs: pairsOf(together, bare), goal: GOAL },
+    ]),
     spending: new Map([...sumSpending(spendings)].map(([part, ms]) => [part, ms / spendings.length])),
   };
 }
@@ -74,12 +89,12 @@ function makeBatch(crew: Crew, hand: Sender): Batch {
   };
 }
 
-function readKept(crew: Crew, bare: BareInsert, { opIds, entryIds }: Batch): Promise<KeptBatch> {
-  return bare.readKept(crew.shop.shopId, opIds, entryIds);
+function pairsOf(rounds: Round[], bare: string): Pair[] {
+  return rounds.slice(WARM_UPS).map(({ oursMs, bareMs }) => ({ oursMs, bareMs: bareMs.get(bare)! }));
 }
 
-async function oneByOne(crew: Crew, bare: BareInsert, trace: SqlTrace, spendings: Spending[]): Promise<Pair> {
-  const sum: Pair = { bareMs: 0, oursMs: 0 };
+async function oneByOne(crew: Crew, bares: Bares, trace: SqlTrace, spendings: Spending[]): Promise<Round> {
+  const sum: Round = { oursMs: 0, bareMs: new Map() };
   for (const batch of makeBatches(crew)) {
     const send = await batch.ready();
     trace.clear();
@@ -89,20 +104,29 @@ async function oneByOne(crew: Crew, bare: BareInsert, trace: SqlTrace, spendings
     sum.oursMs += endMs - startMs;
     spendings.push(spendingOf(trace.queries, startMs, endMs));
     assertKept(came);
-    const kept = await readKept(crew, bare, batch);
-    sum.bareMs += await timed(() => bare.keep(kept));
+    for (const [name, bareMs] of await timeBares(crew, bares, [batch])) {
+      sum.bareMs.set(name, (sum.bareMs.get(name) ?? 0) + bareMs);
+    }
   }
   return sum;
 }
 
-async function allAtOnce(crew: Crew, bare: BareInsert): Promise<Pair> {
+async function allAtOnce(crew: Crew, bares: Bares): Promise<Round> {
   const batches = makeBatches(crew);
   const sends = await Promise.all(batches.map(({ ready }) => ready()));
   let came: Came[] = [];
   const oursMs = await timed(async () => (came = await Promise.all(sends.map((send) => send()))));
   came.forEach(assertKept);
-  const kept = await Promise.all(batches.map((batch) => readKept(crew, bare, batch)));
-  return { oursMs, bareMs: await timed(() => Promise.all(kept.map((batch) => bare.keep(batch)))) };
+  return { oursMs, bareMs: await timeBares(crew, bares, batches) };
+}
+
+async function timeBares({ shop }: Crew, bares: Bares, batches: Batch[]): Promise<Map<string, number>> {
+  const times = new Map<string, number>();
+  for (const [name, bare] of bares) {
+    const kept = await Promise.all(batches.map(({ opIds, entryIds }) => bare.readKept(shop.shopId, opIds, entryIds)));
+    times.set(name, await timed(() => Promise.all(kept.map((batch) => bare.keep(batch)))));
+  }
+  return times;
 }
 
 function assertKept(came: Came): void {
