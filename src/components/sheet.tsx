@@ -1,4 +1,4 @@
-import { type ReactNode, useId, useLayoutEffect, useRef } from 'react';
+import { type ReactNode, useId, useLayoutEffect, useRef, useState } from 'react';
 import { IconKey } from '#src/components/key.tsx';
 
 interface SheetProps {
@@ -18,11 +18,14 @@ export function Sheet({ isOpen, ...rest }: SheetProps) {
 
 function OpenSheet({ onClose, title, children, foot }: Omit<SheetProps, 'isOpen'>) {
   const dialog = useRef<HTMLDialogElement>(null);
+  const content = useRef<HTMLDivElement>(null);
   const titleId = useId();
+  const [isLongText, setLongText] = useState(false);
   // closed before it leaves the page, or the focus does not go back to the key that opened it
   useLayoutEffect(() => {
     const element = dialog.current;
     element?.showModal();
+    setLongText(content.current !== null && isTextBeyond(content.current));
     return () => element?.close();
   }, []);
   return (
@@ -44,12 +47,22 @@ function OpenSheet({ onClose, title, children, foot }: Omit<SheetProps, 'isOpen'
         </h2>
         <IconKey icon="close" word="Close" kind="quiet" isBare onClick={onClose} />
       </div>
-      <div className="grid gap-4 overflow-y-auto p-4">{children}</div>
+      <div ref={content} className="grid gap-4 overflow-y-auto p-4" {...(isLongText ? { tabIndex: 0 } : {})}>
+        {children}
+      </div>
       {foot !== undefined && (
         <div className="grid gap-3 border-t-2 border-line p-4 pb-[calc(16px+env(safe-area-inset-bottom))]">
           {foot}
         </div>
       )}
     </dialog>
+  );
+}
+
+/** Longer than the sheet and with nothing in it to go to by Tab: the keyboard has to scroll it. */
+function isTextBeyond(content: Element): boolean {
+  return (
+    content.scrollHeight > content.clientHeight &&
+    content.querySelector('a, button, input, select, textarea, summary') === null
   );
 }

@@ -14,7 +14,7 @@ export function Cautions({ templateId }: { templateId: string | undefined }) {
   return (
     <section
       aria-label="Cautions"
-      className="grid gap-2 border-2 border-l-[9px] border-on-seam bg-seam p-3 text-on-seam"
+      className="grid gap-3 border-2 border-l-[9px] border-on-seam bg-seam p-3 text-on-seam"
     >
       {data.cautions.map(({ id, brief, text }) => (
         <details key={id}>

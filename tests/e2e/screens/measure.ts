@@ -112,9 +112,11 @@ export function targetFaults({ targetMinPx, gapMinPx }: Limits): string[] {
   return [...small, ...near];
 }
 
-/** Lets the keys at the foot stand where they end: floating over the page they say nothing about distances. */
+/** Lets keys at the foot stand where the page or the sheet ends: floating over it they say nothing about distances. */
 export function landKeys(): void {
   for (const rack of document.querySelectorAll<HTMLElement>('[data-keys]')) rack.style.position = 'static';
+  const sheet = document.querySelector<HTMLElement>('dialog[open]');
+  if (sheet) sheet.style.maxHeight = 'none';
 }
 
 /** What stands out beyond the window to the right. */
