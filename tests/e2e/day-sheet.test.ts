@@ -1,4 +1,3 @@
-import { AxeBuilder } from '@axe-core/playwright';
 import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -239,28 +238,5 @@ describe('the day sheet in a browser', () => {
       .waitFor();
     await context.setOffline(false);
     await page.getByText(/^All sent/).waitFor();
-  });
-});
-
-describe.each(['/day', '/day?by=boat', '/boats', '/people', '/devices'])('%s', (path) => {
-  test.each(['light', 'dark', 'sunlight'])('has nothing for axe to find in the %s set', async (set) => {
-    await page.goto(path);
-    await page.locator('h1').waitFor();
-    await page.evaluate((chosen) => (document.documentElement.dataset['set'] = chosen), set);
-    const { violations } = await new AxeBuilder({ page }).analyze();
-    expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map((node) => node.html).join(' ')}`)).toEqual(
-      [],
-    );
-  });
-
-  test.each(Object.entries(SIZES))('fits the width of a %s', async (_name, size) => {
-    await page.setViewportSize(size);
-    await page.goto(path);
-    await page.locator('h1').waitFor();
-    const [scrollWidth, clientWidth] = await page.evaluate(() => [
-      document.documentElement.scrollWidth,
-      document.documentElement.clientWidth,
-    ]);
-    expect(scrollWidth).toBeLessThanOrEqual(clientWidth!);
   });
 });
