@@ -39,7 +39,9 @@ export function NameBar({ title, subTitle, right, onPress, pressWords }: NameBar
             {pressWords !== undefined && (
               <span aria-hidden="true">
                 {' · '}
-                <span className="underline decoration-2 underline-offset-4">{pressWords}</span>
+                <span className="whitespace-nowrap underline decoration-2 underline-offset-4">
+                  {pressWords}
+                </span>
               </span>
             )}
           </p>

@@ -60,7 +60,7 @@ function WhoAndRecord({ name }: { name: string }) {
     <p className="flex flex-wrap items-center justify-end">
       <Link
         to="/me"
-        className="inline-flex min-h-key min-w-key items-center justify-center px-1 font-semibold underline-offset-4 hover:underline"
+        className="inline-flex min-h-key min-w-key items-center justify-end font-semibold underline-offset-4 hover:underline"
       >
         {name}
       </Link>

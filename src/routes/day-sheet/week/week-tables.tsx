@@ -115,7 +115,7 @@ function WeekTable({ week, caption, children }: { week: Week; caption: string; c
 
 function NameAndSum({ name, minutes }: { name: string; minutes: number }) {
   return (
-    <span className="block min-w-0 font-bold [overflow-wrap:anywhere]">
+    <span className="block min-w-0 text-[16px] font-bold [overflow-wrap:anywhere] md:text-[18px]">
       {name}
       <span className="block font-normal text-slate md:hidden">
         <span className="sr-only">, all week: </span>
