@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
-import { readOrder } from '#src/routes/work/read-order.ts';
-import { readWork } from '#src/routes/work/read-work.ts';
-import { backTo, changesOf, draftOf, fieldsOf, problemsOf } from '#src/routes/work/task-draft.ts';
+import { readOrder } from '#src/routes/order-of-work/read-order.ts';
+import { readWork } from '#src/routes/order-of-work/read-work.ts';
+import { backTo, changesOf, draftOf, fieldsOf, problemsOf } from '#src/routes/order-of-work/task-draft.ts';
 import type { TaskRow } from '#shared/task/task.ts';
 import { TestRecord, type Hand } from '#tests/worlds/record.ts';
 

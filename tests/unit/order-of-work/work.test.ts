@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { loadTemplate } from '#shared/trade/load.ts';
-import { readWhich } from '#src/routes/work/which-ones.ts';
-import { NEW_WORK, planOf, readOutlook } from '#src/routes/work/work-draft.ts';
+import { readWhich } from '#src/routes/order-of-work/which-ones.ts';
+import { NEW_WORK, planOf, readOutlook } from '#src/routes/order-of-work/work-draft.ts';
 
 describe('which ribs are to be made', () => {
   test.each([
