@@ -1,5 +1,5 @@
 import type { ReactNode } from 'react';
-import { Fold } from '#src/components/fold.tsx';
+import { Fold, FoldMark } from '#src/components/fold.tsx';
 import { Key } from '#src/components/key.tsx';
 import { counted } from '#src/words/day-words.ts';
 import { HoursAgainst } from './hours-against.tsx';
@@ -65,18 +65,7 @@ function Folded({ head, children }: { head: ReactNode; children: ReactNode }) {
   return (
     <details className="group">
       <summary className="-my-3 grid min-h-[68px] cursor-pointer grid-cols-[20px_minmax(0,1fr)] items-center gap-3 py-3 hover:underline">
-        <svg
-          className="group-open:rotate-90"
-          width="20"
-          height="20"
-          viewBox="0 0 24 24"
-          fill="none"
-          stroke="currentColor"
-          strokeWidth="2.6"
-          aria-hidden="true"
-        >
-          <path d="M8 4l8 8-8 8" />
-        </svg>
+        <FoldMark />
         {head}
       </summary>
       <div className="pt-5">{children}</div>
