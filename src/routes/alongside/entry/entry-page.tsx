@@ -3,10 +3,10 @@ import { useParams } from 'react-router-dom';
 import { BackBar } from '#src/components/back-bar.tsx';
 import { BUNG_WORDS, BungMark } from '#src/components/bung-mark.tsx';
 import { Empty } from '#src/components/empty.tsx';
-import { KeyRack, Page } from '#src/components/page.tsx';
+import { Page } from '#src/components/page.tsx';
 import { useRead } from '#src/replica/hooks.tsx';
 import { HoursByPerson } from '#src/routes/alongside/entry-parts.tsx';
-import { DoneUndo } from '#src/routes/alongside/done-undo.tsx';
+import { DoneFoot } from '#src/routes/alongside/done-foot.tsx';
 import { Additions } from '#src/routes/alongside/entry/additions.tsx';
 import { ChangeSheets, type Change } from '#src/routes/alongside/entry/change-sheets.tsx';
 import { EntryKeys } from '#src/routes/alongside/entry/entry-keys.tsx';
@@ -43,15 +43,7 @@ export default function EntryPageScreen() {
           <RecordBar />
         </>
       }
-      foot={
-        done && (
-          <KeyRack>
-            <div className="-mb-3">
-              <DoneUndo key={done.done} done={done} onGone={() => setDone(null)} />
-            </div>
-          </KeyRack>
-        )
-      }
+      foot={done && <DoneFoot done={done} onGone={() => setDone(null)} />}
     >
       {page ? (
         <>

@@ -5,10 +5,10 @@ import { BUNG_WORDS, BungMark } from '#src/components/bung-mark.tsx';
 import { Empty } from '#src/components/empty.tsx';
 import { Fractions } from '#src/components/fractions.tsx';
 import { Key, KeyLink } from '#src/components/key.tsx';
-import { KeyRack, Page } from '#src/components/page.tsx';
+import { Page } from '#src/components/page.tsx';
 import { Why } from '#src/components/why.tsx';
 import { useHold, useRead } from '#src/replica/hooks.tsx';
-import { DoneUndo } from '#src/routes/alongside/done-undo.tsx';
+import { DoneFoot } from '#src/routes/alongside/done-foot.tsx';
 import { UNDONE_WHY, type Done } from '#src/routes/alongside/done.ts';
 import { EntryHistory } from '#src/routes/alongside/entry/entry-history.tsx';
 import { LooseEnds } from '#src/routes/alongside/entry/loose-ends.tsx';
@@ -43,15 +43,7 @@ export function NotePageScreen({ entity }: { entity: NoteEntity }) {
           <RecordBar />
         </>
       }
-      foot={
-        done && (
-          <KeyRack>
-            <div className="-mb-3">
-              <DoneUndo key={done.done} done={done} onGone={() => setDone(null)} />
-            </div>
-          </KeyRack>
-        )
-      }
+      foot={done && <DoneFoot done={done} onGone={() => setDone(null)} />}
     >
       {page ? (
         <>
